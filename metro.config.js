@@ -1,0 +1,3 @@
+const { getDefaultConfig } = require('expo/metro-config')
+
+module.exports = getDefaultConfig(__dirname)

@@ -1,0 +1,8 @@
+import { cantus } from './cantus'
+import { courses } from './courses'
+import { demo } from './demo'
+import { lessons } from './lessons'
+import { people } from './people'
+
+/** Every request the server answers, beside better-auth's own under `/api/auth`. */
+export const api = { people, courses, cantus, lessons, demo } as const

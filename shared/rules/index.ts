@@ -1,0 +1,1 @@
+export type { RuleSet, RuleId, Level, Finding, Exercise, Species, Position, Voice } from './rule'

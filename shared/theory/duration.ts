@@ -1,0 +1,3 @@
+/** Time in a score is counted in whole ticks, 480 to the quarter note, as MIDI files commonly do. */
+export const QUARTER_TICKS = 480
+export const WHOLE_TICKS = 4 * QUARTER_TICKS
