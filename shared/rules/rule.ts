@@ -65,6 +65,11 @@ export type Breach = Readonly<{
   notes: readonly Readonly<{ voice: Voice; bar: number; place: number }>[]
   /** Values for the placeholders of the sentence: numbers, pitch names, interval names. */
   args: Readonly<Record<string, string | number>>
+  /**
+   * Said as a preference whatever the level of the rule, where a source sets a limit and advises a narrower one
+   * (voices within a twelfth, rather within a tenth). A search of the laws passes over it.
+   */
+  isRemark?: true
 }>
 
 /** A breach of a law or a remark on a preference, as data. Words come from the locale table. */
@@ -82,7 +87,7 @@ export type Example = Readonly<{
   position?: Position
   mode: Mode
   final: string
-  /** Bars at which the rule must speak; empty for the right example. */
+  /** Where the rule must speak: the last bar each breach points at, in order; empty for the right example. */
   breaches: readonly number[]
   params?: Readonly<Record<string, unknown>>
 }>
