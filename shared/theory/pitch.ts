@@ -32,6 +32,8 @@ const SIGN_OF_ALTERATION: Readonly<Record<Alteration, string>> = {
 }
 const PITCH_GRAMMAR = /^([A-G])(##|#|bb|b|)([0-8])$/
 
+const PITCH_CLASS_GRAMMAR = /^([A-G])(##|#|bb|b|)$/
+
 const LETTER_INDEX: Readonly<Record<Letter, number>> = { C: 0, D: 1, E: 2, F: 3, G: 4, A: 5, B: 6 }
 
 /** Place of a letter above C: 0 for C to 6 for B. */
@@ -54,6 +56,23 @@ export function parsePitch(text: string): Result<Pitch, 'not-a-pitch'> {
     alteration: ALTERATION_SIGNS[sign as string] as Alteration,
     octave: Number(octave),
   })
+}
+
+/** Reads `C#`, `Bb`, `F`: a pitch class without an octave. */
+export function parsePitchClass(text: string): Result<PitchClass, 'not-a-pitch-class'> {
+  const match = PITCH_CLASS_GRAMMAR.exec(text)
+  if (!match) return fail('not-a-pitch-class')
+  return ok({
+    letter: match[1] as Letter,
+    alteration: ALTERATION_SIGNS[match[2] as string] as Alteration,
+  })
+}
+
+/** The pitch class a literal in code or in trusted data names. Throws on anything else. */
+export function pitchClassOf(name: string): PitchClass {
+  const parsed = parsePitchClass(name)
+  if (!parsed.ok) throw new RangeError(`Not a pitch class: ${JSON.stringify(name)}`)
+  return parsed.value
 }
 
 /** The pitch a literal in code or in trusted data names. Throws on anything that is no pitch. */
