@@ -36,7 +36,9 @@ const inWords = (name: string): string =>
 
 /** The strings a schema allows, or null when it is not a closed choice of strings. */
 function choices(schema: JsonSchema): readonly string[] | null {
-  const values = schema.enum ?? (schema.anyOf?.every((one) => 'const' in one) ? schema.anyOf.map((one) => one.const) : null)
+  const values =
+    schema.enum ??
+    (schema.anyOf?.every((one) => 'const' in one) ? schema.anyOf.map((one) => one.const) : null)
   return values?.every((value): value is string => typeof value === 'string') ? values : null
 }
 

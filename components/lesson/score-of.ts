@@ -1,0 +1,148 @@
+import type { Finding } from '@/shared/rules'
+import type {
+  ProposalMark,
+  ScoreArc,
+  ScoreBar,
+  ScoreBracket,
+  ScoreInput,
+  Tone,
+} from '@/shared/notation/score-input'
+import type { Line } from '@/shared/theory/note'
+import { formatPitch } from '@/shared/theory/pitch'
+import { lineWith } from './line-with'
+import type { LessonView } from './lesson-view'
+import { railOf } from './rail'
+import type { RoomMark } from './room'
+
+const NO_MARKS: readonly ProposalMark[] = []
+
+const toneOf = (level: Finding['level']): 'breach' | 'remark' => (level === 'law' ? 'breach' : 'remark')
+
+/** Arcs over the score for findings of two bars or more, breaches first; at most one for each span. */
+export function arcsOf(findings: readonly Finding[]): readonly ScoreArc[] {
+  const arcs = new Map<string, ScoreArc>()
+  for (const finding of findings) {
+    const fromBar = finding.bars[0]
+    const toBar = finding.bars.at(-1)
+    if (fromBar === undefined || toBar === undefined) continue
+    const id = `${fromBar}-${toBar}`
+    if (arcs.get(id)?.tone === 'breach') continue
+    arcs.set(id, { id, fromBar, toBar, tone: toneOf(finding.level) })
+  }
+  return [...arcs.values()]
+}
+
+const bracketsOf = (view: LessonView): readonly ScoreBracket[] =>
+  view.gestures.map(({ from, to, label }) => ({ fromBar: from, toBar: to, label }))
+
+/** The tone of a figure: that of the worst finding that ends at its bar. */
+function figureTones(findings: readonly Finding[]): ReadonlyMap<number, Tone> {
+  const tones = new Map<number, Tone>()
+  for (const { bars, level } of findings) {
+    const at = bars.at(-1)
+    if (at !== undefined && tones.get(at) !== 'breach') tones.set(at, toneOf(level))
+  }
+  return tones
+}
+
+type Layers = Readonly<{
+  /** Notes read for figures and motion: the agreed line, with the student's own laid over it on the desk. */
+  read: Line
+  proposalsOf: (bar: number) => readonly ProposalMark[]
+  findings: readonly Finding[]
+}>
+
+function compose(view: LessonView, { read, proposalsOf, findings }: Layers): ScoreInput {
+  const rail = railOf(view.exercise, read, view.setAside)
+  const tones = figureTones(findings)
+  const bars = view.exercise.cantus.map((cantus, index): ScoreBar => {
+    const number = index + 1
+    const isSetAside = view.setAside.has(number)
+    const state = view.bars[index]?.state ?? 'frozen'
+    const entry = rail[index]
+    return {
+      number,
+      state,
+      isSetAside,
+      cantus: formatPitch(cantus),
+      line: view.line[number] ?? null,
+      proposals: isSetAside ? NO_MARKS : proposalsOf(number),
+      figure: entry?.figure ? { text: entry.figure, tone: tones.get(number) ?? 'cantus' } : null,
+      motion: entry?.motion ?? null,
+      label: null,
+    }
+  })
+  return {
+    position: view.exercise.position,
+    clefs: view.written.clefs,
+    signature: view.written.signature,
+    bars,
+    arcs: arcsOf(findings),
+    brackets: bracketsOf(view),
+  }
+}
+
+/** The score for wall and lectern: the agreed line, the room's lozenges, the arcs of what is said of both. */
+export function roomScoreOf(
+  view: LessonView,
+  marks: readonly RoomMark[],
+  findings: readonly Finding[],
+): ScoreInput {
+  const byBar = new Map<number, ProposalMark[]>()
+  for (const { bar, notes, count, tone } of marks) {
+    const inBar = byBar.get(bar) ?? []
+    inBar.push({ notes, count, tone })
+    byBar.set(bar, inBar)
+  }
+  return compose(view, { read: view.line, proposalsOf: (bar) => byBar.get(bar) ?? NO_MARKS, findings })
+}
+
+/** The score for a desk: the agreed line and the student's own lozenges, with the findings on them when they are shown. */
+export function deskScoreOf(view: LessonView, own: Line, findings: readonly Finding[]): ScoreInput {
+  const tones = figureTones(findings)
+  return compose(view, {
+    read: lineWith(view.line, own),
+    proposalsOf: (bar) => {
+      const notes = own[bar]
+      if (!notes) return NO_MARKS
+      const tone = tones.get(bar)
+      return [{ notes, count: null, tone: tone === 'breach' || tone === 'remark' ? tone : 'line' }]
+    },
+    findings,
+  })
+}
+
+/** A few bars of a proposal, small, for a row of the lectern. Nothing but the line's own staff. */
+export function miniScoreOf(view: LessonView, notes: Line, findings: readonly Finding[]): ScoreInput {
+  const tones = figureTones(findings)
+  const shown = Object.keys(notes)
+    .map(Number)
+    .sort((a, b) => a - b)
+  return {
+    position: view.exercise.position,
+    clefs: view.written.clefs,
+    signature: view.written.signature,
+    bars: shown.map((number): ScoreBar => {
+      const tone = tones.get(number)
+      return {
+        number,
+        state: 'plain',
+        isSetAside: false,
+        cantus: null,
+        line: null,
+        proposals: [
+          {
+            notes: notes[number] ?? [],
+            count: null,
+            tone: tone === 'breach' || tone === 'remark' ? tone : 'line',
+          },
+        ],
+        figure: null,
+        motion: null,
+        label: null,
+      }
+    }),
+    arcs: [],
+    brackets: [],
+  }
+}

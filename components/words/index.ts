@@ -1,0 +1,19 @@
+import { common } from './en/common'
+import { desk } from './en/desk'
+import { errors } from './en/errors'
+import { join } from './en/join'
+import { lectern } from './en/lectern'
+import { lesson } from './en/lesson'
+import { setup } from './en/setup'
+import { sound } from './en/sound'
+import { wall } from './en/wall'
+
+/** Every word of the interface, one typed table an area. */
+const EN = { common, desk, errors, join, lectern, lesson, setup, sound, wall } as const
+
+export type Words = typeof EN
+
+/** The table of the reader's language. English is the only one so far. */
+export const useWords = (): Words => EN
+
+export { formatCount, formatDate, formatDateTime, formatList } from './format'
