@@ -1,0 +1,18 @@
+import { useCallback, useSyncExternalStore } from 'react'
+
+/** Whether a media query holds, kept up to date. `useMedia('(prefers-color-scheme: dark)')` */
+export function useMedia(query: string): boolean {
+  const subscribe = useCallback(
+    (tell: () => void) => {
+      const list = window.matchMedia(query)
+      list.addEventListener('change', tell)
+      return () => list.removeEventListener('change', tell)
+    },
+    [query],
+  )
+  return useSyncExternalStore(
+    subscribe,
+    () => window.matchMedia(query).matches,
+    () => false,
+  )
+}

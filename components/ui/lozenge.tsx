@@ -1,0 +1,23 @@
+import Svg, { Polygon } from 'react-native-svg'
+import { useTheme } from '@/components/theme'
+import type { Tone } from './txt'
+
+/** The one shape that recurs. Filled and hollow say unlike things, so the meaning never hangs on colour alone. */
+export function Lozenge({
+  kind = 'filled',
+  tone = 'azurite',
+  sizePx = 12,
+}: Readonly<{ kind?: 'filled' | 'hollow'; tone?: Tone; sizePx?: number }>) {
+  const { colors } = useTheme()
+  const color = colors[tone]
+  return (
+    <Svg width={sizePx} height={sizePx} viewBox="0 0 12 12" aria-hidden style={{ flexShrink: 0 }}>
+      <Polygon
+        points={kind === 'filled' ? '6,0 12,6 6,12 0,6' : '6,1.2 10.8,6 6,10.8 1.2,6'}
+        fill={kind === 'filled' ? color : 'none'}
+        stroke={kind === 'filled' ? 'none' : color}
+        strokeWidth={1.6}
+      />
+    </Svg>
+  )
+}

@@ -1,0 +1,84 @@
+import Head from 'expo-router/head'
+import type { ReactNode } from 'react'
+import { View } from 'react-native'
+import { MEASURE_PX, space, useWidth } from '@/components/theme'
+import { Heading } from './heading'
+import { LinkText } from './link-text'
+import { Txt } from './txt'
+
+export type PageProps = Readonly<{
+  /** Names the browser's tab, and the page's first heading unless `heading` is given. */
+  title: string
+  heading?: ReactNode
+  /** Where this page hangs: a link above the heading. */
+  up?: Readonly<{ href: string; label: ReactNode }>
+  /** A sentence under the heading. */
+  lede?: ReactNode
+  /** Acts of the whole page, at the right of its heading. */
+  actions?: ReactNode
+  /** `text`: one measure of prose. `wide`: all the room there is, within reason. */
+  width?: 'text' | 'wide'
+  children: ReactNode
+}>
+
+/** The sheet that a page is written on: margins, heading, and the tab's name. */
+export function Page({ title, heading, up, lede, actions, width = 'wide', children }: PageProps) {
+  const { isWide, widthPx } = useWidth()
+  const marginPx = widthPx >= 1600 ? 56 : isWide ? space.double : widthPx < 360 ? space.half : space.one
+  return (
+    <View
+      role="main"
+      id="page"
+      style={{
+        width: '100%',
+        maxWidth: width === 'text' ? MEASURE_PX + 2 * marginPx : 1560 + 2 * marginPx,
+        paddingHorizontal: marginPx,
+        paddingTop: isWide ? space.wide : space.one,
+        paddingBottom: space.triple,
+        gap: space.wide,
+        flexGrow: 1,
+        minWidth: 0,
+      }}
+    >
+      <Head>
+        <title>{`${title} · Bicinium`}</title>
+      </Head>
+      <View style={{ gap: space.tiny }}>
+        {up ? (
+          <Txt kind="note" tone="lead">
+            <LinkText href={up.href} kind="note" tone="lead" style={{ paddingVertical: 6 }}>
+              {up.label}
+            </LinkText>
+          </Txt>
+        ) : null}
+        <View
+          style={{
+            flexDirection: 'row',
+            flexWrap: 'wrap',
+            alignItems: 'center',
+            justifyContent: 'space-between',
+            columnGap: space.wide,
+            rowGap: space.half,
+          }}
+        >
+          <View style={{ minWidth: 0, flexShrink: 1 }}>
+            <Heading level={1} kind={isWide ? 'head' : 'large'}>
+              {heading ?? title}
+            </Heading>
+          </View>
+          {actions ? (
+            <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small }}>{actions}</View>
+          ) : null}
+        </View>
+        {typeof lede === 'string' ? (
+          <Txt tone="lead" style={{ maxWidth: MEASURE_PX }}>
+            {lede}
+          </Txt>
+        ) : (
+          lede
+        )}
+      </View>
+      {children}
+    </View>
+  )
+}

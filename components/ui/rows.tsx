@@ -1,0 +1,37 @@
+import type { ReactNode } from 'react'
+import { View } from 'react-native'
+import { space, useTheme } from '@/components/theme'
+
+/** A list ruled like a page: hairlines between, a firm line above. */
+export function Rows({ label, children }: Readonly<{ label: string; children: ReactNode }>) {
+  const { colors } = useTheme()
+  return (
+    <View role="list" aria-label={label} style={{ borderTopWidth: 1.5, borderColor: colors.lampblack }}>
+      {children}
+    </View>
+  )
+}
+
+/** One line of `Rows`: what it is at the left, what can be done at the right, below it on a narrow screen. */
+export function Row({ children, side }: Readonly<{ children: ReactNode; side?: ReactNode }>) {
+  const { colors } = useTheme()
+  return (
+    <View
+      role="listitem"
+      style={{
+        borderBottomWidth: 1,
+        borderColor: colors.hairline,
+        paddingVertical: space.half,
+        flexDirection: 'row',
+        flexWrap: 'wrap',
+        alignItems: 'center',
+        columnGap: space.wide,
+        rowGap: space.small,
+        minHeight: 68,
+      }}
+    >
+      <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 240, minWidth: 0 }}>{children}</View>
+      {side ? <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small }}>{side}</View> : null}
+    </View>
+  )
+}
