@@ -1,1 +1,20 @@
-export type { RuleSet, RuleId, Level, Finding, Exercise, Species, Position, Voice } from './rule'
+export type {
+  Breach,
+  Example,
+  Exercise,
+  Explanation,
+  Finding,
+  Level,
+  Position,
+  RuleId,
+  RuleSet,
+  RuleSetting,
+  Species,
+  Voice,
+} from './rule'
+export { checkCantus, checkLine, createChecker, type Checker, type Proposal } from './checker'
+export { judgeExample, readExample, type ReadExample } from './example'
+export { readExercise, type WrittenExercise } from './exercise'
+export { type SetAside } from './reading'
+export { findRule, RULES } from './registry'
+export { ruleSetProblems, type RuleSetProblem } from './rule-set'

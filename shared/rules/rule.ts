@@ -80,11 +80,16 @@ export type Step<State> = Readonly<{ state: State; breach: Breach | null }>
 /** Where a statement comes from: a key of the source table, and the place in it. */
 export type Citation = Readonly<{ source: string; place?: string; fromMemory?: true }>
 
-/** A tiny score in words: pitches one a bar, `.` for an unwritten bar. */
+/**
+ * A tiny score in words: bars parted by spaces, `.` for an unwritten bar, `D4` for a whole note. Other values are
+ * written in quarters and joined by commas: `r:2,D4:2~` is a half rest and a half note tied into the next bar.
+ */
 export type Example = Readonly<{
   cantus: string
   line?: string
   position?: Position
+  /** First species when left out. */
+  species?: Species
   mode: Mode
   final: string
   /** Where the rule must speak: the last bar each breach points at, in order; empty for the right example. */
@@ -119,10 +124,17 @@ export type Rule<State, Params> = Readonly<{
   /** Zod schema of the parameters, every one with its default; `params.parse({})` gives the defaults. */
   params: z.ZodType<Params>
   start: (exercise: Exercise, params: Params, voice: Voice) => State
-  /** An unwritten moment (`note === null`) must lead to a state that cannot say anything of what went before. */
+  /**
+   * An unwritten moment (`note === null`) must lead to a state that says nothing which some way of filling it in would
+   * undo: a rule of neighbouring notes forgets them, a rule of the whole compass may keep the extremes.
+   */
   step: (state: State, moment: Moment, params: Params) => Step<State>
   /** Called once after the last moment. `isComplete` is false when any moment was unwritten. */
   finish: (state: State, params: Params, isComplete: boolean) => Breach | null
+  /**
+   * A whole number that stands for the state: equal keys mean breaches of equal codes at equal moments, whatever
+   * follows. The bars that a breach points back at may differ.
+   */
   key: (state: State) => number
   explain: Explanation
 }>

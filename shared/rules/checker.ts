@@ -1,0 +1,252 @@
+import { isWhollyWritten, readCantus, readMoments, readVoice, type SetAside } from '@/shared/rules/reading'
+import { resolveRuleSet, type ActiveRule } from '@/shared/rules/rule-set'
+import type { Breach, Exercise, Finding, Moment, RuleSet, Scope, Step, Voice } from '@/shared/rules/rule'
+import type { BarNotes, Line } from '@/shared/theory/note'
+
+/** Notes offered for some bars of a line, by bar: one member's proposal, or one note tried on the ladder. */
+export type Proposal = Readonly<Record<number, BarNotes>>
+
+/**
+ * A rule set made ready for one exercise: parameters read and rules started once, so that judging a line costs only
+ * the folds. Findings are in the order of the bars they end in.
+ */
+export type Checker = Readonly<{
+  /** All that the rules have to say of a line, whole or partial. */
+  checkLine: (line: Line, setAside?: SetAside) => readonly Finding[]
+  /** All that the rules have to say of the cantus alone. */
+  checkCantus: () => readonly Finding[]
+  /**
+   * Judges many proposals on one line: for each, the findings on the line with it in place that point at one of its
+   * bars. Reads only what each proposal changes, and equal proposals once.
+   */
+  annotate: (
+    line: Line,
+    proposals: readonly Proposal[],
+    setAside?: SetAside,
+  ) => readonly (readonly Finding[])[]
+}>
+
+/** One rule, started. States are values: a fold may be taken up again from any of them. */
+type Runner = Readonly<{
+  ruleId: string
+  level: Finding['level']
+  voice: Voice
+  readsPair: boolean
+  params: unknown
+  start: unknown
+  step: (state: unknown, moment: Moment, params: unknown) => Step<unknown>
+  finish: (state: unknown, params: unknown, isComplete: boolean) => Breach | null
+}>
+
+/** The two readings of a line that rules fold over. */
+type Readings = Readonly<{ pair: readonly Moment[]; solo: readonly Moment[]; isComplete: boolean }>
+
+const SCOPES_OF_LINE: readonly Scope[] = ['melody', 'line', 'pair']
+const SCOPES_OF_CANTUS: readonly Scope[] = ['melody', 'cantus']
+
+export function createChecker(exercise: Exercise, ruleSet: RuleSet): Checker {
+  const { active } = resolveRuleSet(ruleSet)
+  const lineRunners = startRules(active, SCOPES_OF_LINE, exercise, 'line')
+  const cantusRunners = startRules(active, SCOPES_OF_CANTUS, exercise, 'cantus')
+
+  const readLine = (line: Line, setAside?: SetAside): Readings => {
+    const pair = readMoments(exercise, line, setAside)
+    const solo = readVoice(exercise.cantus.length, line, setAside)
+    return { pair, solo, isComplete: isWhollyWritten(pair) }
+  }
+
+  return {
+    checkLine: (line, setAside) => runAll(lineRunners, readLine(line, setAside)),
+    checkCantus: () => {
+      const solo = readCantus(exercise.cantus)
+      return runAll(cantusRunners, { pair: solo, solo, isComplete: true })
+    },
+    annotate: (line, proposals, setAside) => {
+      const readings = readLine(line, setAside)
+      const traces = lineRunners.map((runner) => traceRule(runner, readings))
+      const known = new Map<string, readonly Finding[]>()
+      return proposals.map((proposal) => {
+        const name = nameProposal(proposal)
+        let findings = known.get(name)
+        if (!findings) {
+          const changed = shareMoments(readLine({ ...line, ...proposal }, setAside), readings)
+          findings = sortFindings(rerunAll(lineRunners, traces, readings, changed, barsOf(proposal)))
+          known.set(name, findings)
+        }
+        return findings
+      })
+    },
+  }
+}
+
+/** Judges a line, whole or partial, by every rule of a set. For many lines of one exercise, create a checker. */
+export const checkLine = (
+  exercise: Exercise,
+  line: Line,
+  ruleSet: RuleSet,
+  { setAside }: Readonly<{ setAside?: SetAside }> = {},
+): readonly Finding[] => createChecker(exercise, ruleSet).checkLine(line, setAside)
+
+/** Judges the cantus of an exercise by the rules that govern a cantus and any melody. */
+export const checkCantus = (exercise: Exercise, ruleSet: RuleSet): readonly Finding[] =>
+  createChecker(exercise, ruleSet).checkCantus()
+
+function startRules(
+  active: readonly ActiveRule[],
+  scopes: readonly Scope[],
+  exercise: Exercise,
+  voice: Voice,
+): readonly Runner[] {
+  return active
+    .filter(({ rule }) => scopes.includes(rule.scope))
+    .filter(({ rule }) => voice === 'cantus' || rule.species.has(exercise.species))
+    .map(({ rule, level, params }) => ({
+      ruleId: rule.id,
+      level,
+      voice,
+      readsPair: rule.scope === 'pair',
+      params,
+      start: rule.start(exercise, params, voice) as unknown,
+      step: rule.step,
+      finish: rule.finish,
+    }))
+}
+
+const findingOf = (runner: Runner, breach: Breach): Finding => ({
+  ...breach,
+  ruleId: runner.ruleId,
+  level: breach.isRemark ? 'preference' : runner.level,
+  voice: runner.voice,
+})
+
+function runAll(runners: readonly Runner[], { pair, solo, isComplete }: Readings): readonly Finding[] {
+  const findings: Finding[] = []
+  for (const runner of runners) {
+    const moments = runner.readsPair ? pair : solo
+    const { step, params } = runner
+    let state = runner.start
+    for (let index = 0; index < moments.length; index += 1) {
+      const next = step(state, moments[index] as Moment, params)
+      state = next.state
+      if (next.breach !== null) findings.push(findingOf(runner, next.breach))
+    }
+    const last = runner.finish(state, params, isComplete)
+    if (last !== null) findings.push(findingOf(runner, last))
+  }
+  return sortFindings(findings)
+}
+
+/** A rule's whole run over a line: its state before each moment and after the last, and what it said at each. */
+type Trace = Readonly<{
+  states: readonly unknown[]
+  breaches: readonly (Breach | null)[]
+  last: Breach | null
+}>
+
+function traceRule(runner: Runner, { pair, solo, isComplete }: Readings): Trace {
+  const states: unknown[] = [runner.start]
+  const breaches: (Breach | null)[] = []
+  for (const moment of runner.readsPair ? pair : solo) {
+    const { state, breach } = runner.step(states.at(-1), moment, runner.params)
+    states.push(state)
+    breaches.push(breach)
+  }
+  return { states, breaches, last: runner.finish(states.at(-1), runner.params, isComplete) }
+}
+
+/**
+ * Runs every rule again over a changed line, from the first moment that differs until its state is again what it was;
+ * from there on it would say what it said before. Keeps the findings that point at one of `bars`.
+ */
+function rerunAll(
+  runners: readonly Runner[],
+  traces: readonly Trace[],
+  before: Readings,
+  after: Readings,
+  bars: ReadonlySet<number>,
+): Finding[] {
+  const findings: Finding[] = []
+  const pairSpan = changedSpan(before.pair, after.pair)
+  const soloSpan = changedSpan(before.solo, after.solo)
+  for (let place = 0; place < runners.length; place += 1) {
+    const runner = runners[place] as Runner
+    const trace = traces[place] as Trace
+    const moments = runner.readsPair ? after.pair : after.solo
+    const span = runner.readsPair ? pairSpan : soloSpan
+    const keep = (breach: Breach | null): void => {
+      if (breach !== null && breach.bars.some((bar) => bars.has(bar))) {
+        findings.push(findingOf(runner, breach))
+      }
+    }
+    for (let index = 0; index < Math.min(span.from, moments.length); index += 1)
+      keep(trace.breaches[index] ?? null)
+    let index = span.from
+    let state = trace.states[index]
+    let isAsBefore = false
+    while (index < moments.length) {
+      isAsBefore = index >= span.to && isSameState(state, trace.states[index])
+      if (isAsBefore) break
+      const next = runner.step(state, moments[index] as Moment, runner.params)
+      state = next.state
+      keep(next.breach)
+      index += 1
+    }
+    for (; index < moments.length; index += 1) keep(trace.breaches[index] ?? null)
+    const isSameEnd = isAsBefore && before.isComplete === after.isComplete
+    keep(
+      isSameEnd
+        ? trace.last
+        : runner.finish(isAsBefore ? trace.states.at(-1) : state, runner.params, after.isComplete),
+    )
+  }
+  return findings
+}
+
+/** First moment that differs, and the first after it from which both readings go on alike (or the end). */
+function changedSpan(before: readonly Moment[], after: readonly Moment[]): { from: number; to: number } {
+  if (before.length !== after.length) return { from: 0, to: Infinity }
+  let from = 0
+  while (from < after.length && after[from] === before[from]) from += 1
+  let to = after.length
+  while (to > from && after[to - 1] === before[to - 1]) to -= 1
+  return { from, to }
+}
+
+/** Puts the moments of one reading in place of equal ones in another, so that states can be compared by identity. */
+function shareMoments(readings: Readings, others: Readings): Readings {
+  const share = (moments: readonly Moment[], known: readonly Moment[]): readonly Moment[] =>
+    moments.map((moment, index) => {
+      const other = known[index]
+      return other !== undefined && isSameState(moment, other) ? other : moment
+    })
+  return {
+    pair: share(readings.pair, others.pair),
+    solo: share(readings.solo, others.solo),
+    isComplete: readings.isComplete,
+  }
+}
+
+/** Equal by identity, or plain objects of identical fields. A false "no" only costs time. */
+function isSameState(a: unknown, b: unknown): boolean {
+  if (a === b) return true
+  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false
+  const left = a as Record<string, unknown>
+  const right = b as Record<string, unknown>
+  for (const field in left) if (left[field] !== right[field]) return false
+  return true
+}
+
+const barsOf = (proposal: Proposal): ReadonlySet<number> => new Set(Object.keys(proposal).map(Number))
+
+function nameProposal(proposal: Proposal): string {
+  let name = ''
+  for (const [bar, notes] of Object.entries(proposal)) {
+    name += `|${bar}`
+    for (const { pitch, ticks, tied } of notes) name += ` ${pitch}:${ticks}${tied ? '~' : ''}`
+  }
+  return name
+}
+
+/** By the last bar a finding points at; within a bar the order of the rule set stays. */
+const sortFindings = (findings: Finding[]): readonly Finding[] =>
+  findings.sort((a, b) => (a.bars.at(-1) ?? 0) - (b.bars.at(-1) ?? 0))
