@@ -1,3 +1,21 @@
+import type { AccountTable, SessionTable, UserTable, VerificationTable } from './accounts'
+import type { AttemptTable } from './attempts'
+import type { CantusTable } from './cantus'
+import type { CourseMemberTable, CourseTable, InvitationTable } from './courses'
+import type { LessonMemberTable, LessonTable, WallSessionTable } from './lessons'
+
 /** Tables of the database as Kysely sees them; one file an aggregate. */
-// eslint-disable-next-line @typescript-eslint/no-empty-object-type -- aggregates add themselves here
-export interface Database {}
+export interface Database {
+  user: UserTable
+  session: SessionTable
+  account: AccountTable
+  verification: VerificationTable
+  course: CourseTable
+  courseMember: CourseMemberTable
+  invitation: InvitationTable
+  cantus: CantusTable
+  lesson: LessonTable
+  lessonMember: LessonMemberTable
+  wallSession: WallSessionTable
+  attempt: AttemptTable
+}
