@@ -1,0 +1,100 @@
+import { ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
+import { cantusContent, EMPTY_CONTENT, lineContent, type StaffContent } from '@/shared/notation/bar-content'
+import { measureTextPx } from '@/shared/notation/measure-text'
+import type { ScoreBar, ScoreInput } from '@/shared/notation/score-input'
+import type { ScoreLayoutOptions, Voice } from '@/shared/notation/score-layout'
+import { letteringOf, SIZE_FACTS } from '@/shared/notation/sizes'
+
+/** Distances of the rail and the bars, in staff spaces. */
+export const MOTION_HALF_STAFF_SPACES = 0.72
+const MOTION_GAP = 0.35
+const BAR_PADDING = 0.7
+const FOLD_WIDTH = 1.9
+const MOST_ASKED_FOR_LABEL = 5
+
+/** Width of the closing double bar with its clearance, in staff spaces. */
+export const CLOSING_WIDTH_STAFF_SPACES =
+  ENGRAVING_DEFAULTS.thinBarlineThickness +
+  ENGRAVING_DEFAULTS.barlineSeparation +
+  ENGRAVING_DEFAULTS.thickBarlineThickness
+
+/** A bar before it has a place: what it holds on each staff, and the room it needs around its axis. */
+export type MeasuredBar = Readonly<{
+  bar: ScoreBar
+  content: Readonly<Record<Voice, StaffContent>>
+  isFolded: boolean
+  /** The motion into the bar stands inside it, as what precedes it is folded. */
+  isMotionInside: boolean
+  leftPx: number
+  rightPx: number
+  /** The least width, and the share of spare width it asks for. */
+  leastPx: number
+  weight: number
+  endPx: number
+}>
+
+export function measureBars(
+  input: ScoreInput,
+  options: ScoreLayoutOptions,
+  spacePx: number,
+): readonly MeasuredBar[] {
+  const { clefs, signature, bars } = input
+  const { weights } = SIZE_FACTS[options.size]
+  const lettering = letteringOf(spacePx)
+  const isMini = options.size === 'mini'
+  const hasRail = clefs.line !== null && !isMini
+
+  return bars.map((bar, i) => {
+    const isFolded = bar.isSetAside && !isMini
+    const numberPx = isMini ? 0 : measureTextPx(String(bar.number), 'Alegreya', lettering.numberPx)
+    if (isFolded) {
+      const content = { cantus: EMPTY_CONTENT, line: EMPTY_CONTENT }
+      const leastPx = Math.max(FOLD_WIDTH * spacePx, numberPx + 0.6 * spacePx)
+      const half = leastPx / 2
+      return {
+        bar,
+        content,
+        isFolded,
+        isMotionInside: false,
+        leftPx: half,
+        rightPx: half,
+        leastPx,
+        weight: 0,
+        endPx: 0,
+      }
+    }
+    const content = {
+      cantus:
+        isMini && clefs.line ? EMPTY_CONTENT : cantusContent(bar, signature, { clef: clefs.cantus, spacePx }),
+      line: clefs.line ? lineContent(bar, signature, { clef: clefs.line, spacePx }) : EMPTY_CONTENT,
+    }
+    const before = bars[i - 1]
+    const isMotionInside = hasRail && bar.motion !== null && before !== undefined && before.isSetAside
+    const figureHalf = bar.figure ? measureTextPx(bar.figure.text, 'Alegreya', lettering.figurePx) / 2 : 0
+    const motionPx = (MOTION_HALF_STAFF_SPACES + MOTION_GAP) * spacePx
+    const railLeft = hasRail ? figureHalf + (isMotionInside ? 2 : 1) * motionPx : 0
+    const railRight = hasRail ? figureHalf + motionPx : 0
+    const boxes = [content.cantus.box, content.line.box].filter((box) => box !== null)
+    const endPx = i === bars.length - 1 && !isMini ? CLOSING_WIDTH_STAFF_SPACES * spacePx : 0
+    const leftPx = Math.max(railLeft, ...boxes.map((box) => BAR_PADDING * spacePx - box.left))
+    const rightPx = Math.max(railRight, ...boxes.map((box) => BAR_PADDING * spacePx + box.right)) + endPx
+    const labelPx =
+      bar.label === null || isMini
+        ? 0
+        : Math.min(
+            MOST_ASKED_FOR_LABEL * spacePx,
+            measureTextPx(bar.label, 'AlegreyaSans', lettering.labelPx),
+          )
+    return {
+      bar,
+      content,
+      isFolded,
+      isMotionInside,
+      leftPx,
+      rightPx,
+      leastPx: Math.max(leftPx + rightPx, numberPx + 1.2 * spacePx, labelPx + 0.8 * spacePx + endPx),
+      weight: weights[bar.state] * (options.size === 'strip' && bar.number === options.handBar ? 1.15 : 1),
+      endPx,
+    }
+  })
+}

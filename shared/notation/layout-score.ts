@@ -1,0 +1,233 @@
+import { barMarks } from '@/shared/notation/bar-marks'
+import { measureBars, type MeasuredBar } from '@/shared/notation/bar-measure'
+import { breakSystems, stretchBars } from '@/shared/notation/bar-widths'
+import { uniteBoxes, type Box } from '@/shared/notation/box'
+import { assignLevels } from '@/shared/notation/levels'
+import type { Mark } from '@/shared/notation/mark'
+import type { ScoreInput } from '@/shared/notation/score-input'
+import type {
+  BarLayout,
+  ScoreLayout,
+  ScoreLayoutOptions,
+  SystemLayout,
+  Voice,
+} from '@/shared/notation/score-layout'
+import { SIZE_FACTS } from '@/shared/notation/sizes'
+import { bracketMarks, findingMarks, segmentOn } from '@/shared/notation/span-marks'
+import { endBarlineMarks, prefixMarks, prefixWidthPx, staffLineMarks } from '@/shared/notation/system-marks'
+import { arrangeRows, type SystemRows } from '@/shared/notation/system-heights'
+import type { Clef } from '@/shared/theory/clef'
+
+const SYSTEM_GAP_STAFF_SPACES = 2.2
+/** No staff is set smaller than this, whatever has to fit. */
+const SMALLEST_SPACE_PX = 4
+
+type Staff = Readonly<{ voice: Voice; clef: Clef }>
+
+function stavesOf({ position, clefs }: ScoreInput, isMini: boolean): readonly Staff[] {
+  const cantus: Staff = { voice: 'cantus', clef: clefs.cantus }
+  if (clefs.line === null) return [cantus]
+  const line: Staff = { voice: 'line', clef: clefs.line }
+  if (isMini) return [line]
+  return position === 'above' ? [line, cantus] : [cantus, line]
+}
+
+/** Everything about a layout that is settled before the first mark is placed. */
+type Setting = Readonly<{
+  input: ScoreInput
+  options: ScoreLayoutOptions
+  spacePx: number
+  staves: readonly Staff[]
+  prefixPx: number
+  measured: readonly MeasuredBar[]
+}>
+
+function settingAt(input: ScoreInput, options: ScoreLayoutOptions, spacePx: number): Setting {
+  const isMini = options.size === 'mini'
+  const staves = stavesOf(input, isMini)
+  const clefs = staves.map(({ clef }) => clef)
+  const prefixPx = isMini ? 0 : prefixWidthPx(clefs, input.signature, spacePx)
+  return { input, options, spacePx, staves, prefixPx, measured: measureBars(input, options, spacePx) }
+}
+
+const naturalPx = (bar: MeasuredBar, spacePx: number): number => Math.max(bar.leastPx, bar.weight * spacePx)
+
+/** Index of each system's first bar. A strip and a mini never break. */
+function systemStarts({ options, measured, prefixPx, spacePx }: Setting): readonly number[] {
+  if (measured.length === 0 || options.size === 'strip' || options.size === 'mini') return [0]
+  return breakSystems(
+    measured.map((bar) => naturalPx(bar, spacePx)),
+    options.widthPx - prefixPx,
+  )
+}
+
+function barWidths(setting: Setting, bars: readonly MeasuredBar[], isOnly: boolean): readonly number[] {
+  const { options, spacePx, prefixPx } = setting
+  const { maxStretch } = SIZE_FACTS[options.size]
+  const availablePx = options.widthPx - prefixPx
+  const natural = bars.reduce((sum, bar) => sum + naturalPx(bar, spacePx), 0)
+  const most = maxStretch === null || !isOnly ? Infinity : natural * maxStretch
+  const wanted = options.size === 'strip' ? Math.max(availablePx, natural) : availablePx
+  const elastic = bars.map((bar) =>
+    options.size === 'strip' ? { ...bar, leastPx: Math.max(bar.leastPx, bar.weight * spacePx) } : bar,
+  )
+  return stretchBars(elastic, Math.min(most, wanted))
+}
+
+/** The axis stands in the middle of the bar, or as near to it as the notes on either side let it. */
+const axisIn = ({ leftPx, rightPx, endPx }: MeasuredBar, widthPx: number): number =>
+  Math.min(Math.max((widthPx - endPx) / 2, leftPx), widthPx - rightPx)
+
+const unite = (boxes: readonly (Box | null)[]): Box | null => {
+  const present = boxes.filter((box) => box !== null)
+  return present.length === 0 ? null : uniteBoxes(present)
+}
+
+type Levels = Readonly<{ arcs: readonly number[]; brackets: readonly number[] }>
+
+const isReleased = (bar: MeasuredBar | undefined): boolean =>
+  bar !== undefined && bar.bar.state === 'released' && !bar.isFolded
+
+function layoutSystem(setting: Setting, from: number, to: number, yPx: number, levels: Levels): SystemLayout {
+  const { input, options, spacePx, prefixPx, measured } = setting
+  const isMini = options.size === 'mini'
+  const bars = measured.slice(from, to)
+  const widths = barWidths(setting, bars, from === 0 && to === measured.length)
+
+  let xPx = prefixPx
+  const frames = bars.map(({ bar, isFolded }, i): Omit<BarLayout, 'marks'> => {
+    const widthPx = widths[i] as number
+    const frame = {
+      index: from + i,
+      number: bar.number,
+      isFolded,
+      xPx,
+      widthPx,
+      axisPx: axisIn(bars[i] as MeasuredBar, widthPx),
+    }
+    xPx += widthPx
+    return frame
+  })
+  const widthPx = xPx
+
+  const arcsHere = input.arcs.map((arc) => (isMini ? null : segmentOn(frames, arc)))
+  const bracketsHere = input.brackets.map((bracket) => (isMini ? null : segmentOn(frames, bracket)))
+  const highest = (all: readonly number[], here: readonly unknown[]): number =>
+    all.reduce((most, level, i) => (here[i] ? Math.max(most, level + 1) : most), 0)
+  const rows: SystemRows = arrangeRows({
+    size: options.size,
+    spacePx,
+    staves: setting.staves.map(({ voice, clef }) => ({
+      voice,
+      clef,
+      box: unite(bars.map((bar) => bar.content[voice].box)),
+    })),
+    hasLabels: !isMini && input.bars.some((bar) => bar.label !== null),
+    arcLevels: highest(levels.arcs, arcsHere),
+    bracketLevels: isMini ? 0 : Math.max(...levels.brackets.map((level) => level + 1), 0),
+  })
+
+  const placedBars = frames.map((frame, i): BarLayout => {
+    const placed = {
+      measured: bars[i] as MeasuredBar,
+      widthPx: frame.widthPx,
+      axisPx: frame.axisPx,
+      isFirstInSystem: i === 0,
+      isReleasedBefore: isReleased(measured[frame.index - 1]),
+      isReleasedAfter: isReleased(measured[frame.index + 1]),
+      isMini,
+    }
+    return { ...frame, marks: barMarks(placed, rows, spacePx) }
+  })
+
+  const spans: Mark[] = [
+    ...(isMini ? [] : endBarlineMarks(rows.staves, widthPx, spacePx, to === measured.length)),
+    ...input.arcs.flatMap((arc, i) =>
+      arcsHere[i] ? findingMarks(arc, levels.arcs[i] as number, frames, rows, spacePx) : [],
+    ),
+    ...input.brackets.flatMap((bracket, i) =>
+      bracketsHere[i]
+        ? bracketMarks(bracket, i, levels.brackets[i] as number, true, frames, rows, spacePx)
+        : [],
+    ),
+  ]
+
+  const top = rows.staves[0]?.topPx ?? 0
+  const bottom = (rows.staves.at(-1)?.topPx ?? 0) + 4 * spacePx
+  return {
+    xPx: 0,
+    yPx,
+    widthPx,
+    heightPx: rows.heightPx,
+    prefixPx,
+    staves: rows.staves,
+    stavesBox: { left: 0, right: widthPx, top, bottom },
+    railPx: rows.railPx,
+    staffLines: staffLineMarks(rows.staves, widthPx, spacePx),
+    prefix: isMini ? [] : prefixMarks(rows.staves, input.signature, spacePx),
+    spans,
+    bars: placedBars,
+  }
+}
+
+function layoutAt(setting: Setting): ScoreLayout {
+  const { input, options, spacePx, measured } = setting
+  const starts = systemStarts(setting)
+  const levels: Levels = {
+    // An arch ends beside the axis of its last bar, so the next may begin there; a lozenge fills its bar.
+    arcs: assignLevels(input.arcs, (a, b) => a.fromBar < a.toBar && b.fromBar < b.toBar),
+    brackets: assignLevels(input.brackets, () => false),
+  }
+  const systems: SystemLayout[] = []
+  let yPx = 0
+  starts.forEach((from, i) => {
+    const system = layoutSystem(setting, from, starts[i + 1] ?? measured.length, yPx, levels)
+    systems.push(system)
+    yPx += system.heightPx + Math.round(SYSTEM_GAP_STAFF_SPACES * spacePx)
+  })
+  const last = systems.at(-1)
+  return {
+    size: options.size,
+    widthPx: Math.max(options.widthPx, ...systems.map((system) => system.widthPx)),
+    heightPx: last ? last.yPx + last.heightPx : 0,
+    spacePx,
+    signature: input.signature,
+    pressedVoice: input.clefs.line === null ? 'cantus' : 'line',
+    systems,
+  }
+}
+
+const fitsWidth = ({ measured, options, prefixPx }: Setting): boolean =>
+  options.size === 'mini'
+    ? measured.reduce((sum, bar) => sum + bar.leastPx, 0) <= options.widthPx
+    : measured.every((bar) => prefixPx + bar.leastPx <= options.widthPx)
+
+/**
+ * Engraves a score: every glyph, line and word of it with its place, in px. The staff space is the largest at which the
+ * music fits: on the wall on one system where that keeps it legible from the back row, elsewhere on as many as it needs.
+ */
+export function layoutScore(input: ScoreInput, options: ScoreLayoutOptions): ScoreLayout {
+  const { spaceFor, leastSpacePx } = SIZE_FACTS[options.size]
+  const preferred = spaceFor(options.widthPx)
+  const maxHeightPx = options.maxHeightPx ?? Infinity
+  const attempt = (spacePx: number, isOneSystem: boolean): ScoreLayout | null => {
+    const setting = settingAt(input, options, spacePx)
+    if (!fitsWidth(setting) || (isOneSystem && systemStarts(setting).length > 1)) return null
+    const layout = layoutAt(setting)
+    return layout.heightPx <= maxHeightPx ? layout : null
+  }
+  if (options.size === 'wall')
+    for (let space = preferred; space >= Math.max(leastSpacePx, Math.ceil(0.6 * preferred)); space--) {
+      const layout = attempt(space, true)
+      if (layout) return layout
+    }
+  const start = options.size === 'wall' ? Math.max(leastSpacePx, Math.round(0.72 * preferred)) : preferred
+  for (let space = start; space >= leastSpacePx; space--) {
+    const layout = attempt(space, false)
+    if (layout) return layout
+  }
+  // Too high at any size: the width alone decides, and the page scrolls.
+  let space = leastSpacePx
+  while (space > SMALLEST_SPACE_PX && !fitsWidth(settingAt(input, options, space))) space--
+  return layoutAt(settingAt(input, options, space))
+}

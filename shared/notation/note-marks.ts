@@ -1,0 +1,130 @@
+import { BRAVURA, ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
+import type { GlyphName } from '@/shared/notation/glyphs'
+import { accidentalFor } from '@/shared/notation/key-signature'
+import {
+  crispPx,
+  glyphMark,
+  lozengeMark,
+  LOZENGE_STRETCH,
+  ruleMark,
+  textMark,
+  type Ink,
+  type Mark,
+} from '@/shared/notation/mark'
+import type { ProposalMark } from '@/shared/notation/score-input'
+import { letteringOf } from '@/shared/notation/sizes'
+import { depthStaffSpaces, ledgerPlaces, staffPlaceOf } from '@/shared/notation/staff-place'
+import type { Clef } from '@/shared/theory/clef'
+import type { Alteration, Pitch } from '@/shared/theory/pitch'
+
+/** Where a staff's notes are set: its clef, and px to a staff space. Marks come out with the top staff line at y = 0. */
+export type StaffSetting = Readonly<{ clef: Clef; spacePx: number }>
+
+const ACCIDENTAL_GAP = 0.25
+
+function ledgerMarks(
+  place: number,
+  halfWidthPx: number,
+  setting: StaffSetting,
+  group: string,
+): readonly Mark[] {
+  const { spacePx } = setting
+  const reach = halfWidthPx + ENGRAVING_DEFAULTS.legerLineExtension * spacePx
+  const thickness = crispPx(ENGRAVING_DEFAULTS.legerLineThickness, spacePx)
+  return ledgerPlaces(place).map((line) => {
+    const y = depthStaffSpaces(line) * spacePx
+    return ruleMark({ role: 'ledger', ink: 'staff', group }, [-reach, y], [reach, y], thickness)
+  })
+}
+
+/** An accidental whose right edge clears a head reaching `halfWidthPx` left of the axis, and its ledger lines. */
+function accidentalMark(
+  glyph: GlyphName,
+  place: number,
+  halfWidthPx: number,
+  setting: StaffSetting,
+  look: { ink: Ink; group: string },
+): Mark {
+  const { spacePx } = setting
+  const ledger = ledgerPlaces(place).length > 0 ? ENGRAVING_DEFAULTS.legerLineExtension : 0
+  const right = -halfWidthPx - (ledger + ACCIDENTAL_GAP) * spacePx
+  const x = right - BRAVURA[glyph].right * spacePx
+  return glyphMark({ role: 'accidental', ...look }, glyph, x, depthStaffSpaces(place) * spacePx, spacePx)
+}
+
+/** A whole note of the cantus or the agreed line, its head centred on x = 0. */
+export function wholeNoteMarks(
+  pitch: Pitch,
+  standing: Alteration,
+  setting: StaffSetting,
+  look: { ink: Ink; group: string },
+): readonly Mark[] {
+  const { spacePx, clef } = setting
+  const place = staffPlaceOf(pitch, clef)
+  const half = (BRAVURA.noteheadWhole.right * spacePx) / 2
+  const y = depthStaffSpaces(place) * spacePx
+  const accidental = accidentalFor(pitch, standing)
+  return [
+    ...ledgerMarks(place, half, setting, look.group),
+    glyphMark({ role: 'notehead', ...look }, 'noteheadWhole', -half, y, spacePx),
+    ...(accidental ? [accidentalMark(accidental, place, half, setting, look)] : []),
+  ]
+}
+
+/** A rest of a whole bar, hanging from the fourth line. */
+export const wholeRestMarks = (spacePx: number, look: { ink: Ink; group: string }): readonly Mark[] => [
+  glyphMark(
+    { role: 'notehead', ...look },
+    'restWhole',
+    (-BRAVURA.restWhole.right * spacePx) / 2,
+    spacePx,
+    spacePx,
+  ),
+]
+
+const UNCOUNTED_RADIUS = 0.76
+const LEAST_RADIUS = 0.46
+const MOST_RADIUS = 1.14
+
+/**
+ * Half the height of a proposal's lozenge in staff spaces. Each doubling of the number adds the same, so that a crowd
+ * shows without swallowing the staff; the size of one count never depends on the others.
+ */
+export const lozengeRadiusStaffSpaces = (count: number | null): number =>
+  count === null
+    ? UNCOUNTED_RADIUS
+    : Math.min(MOST_RADIUS, LEAST_RADIUS + 0.125 * Math.log2(Math.max(1, count)))
+
+/** A proposal: its lozenge centred on x = 0, the number to its right. */
+export function proposalMarks(
+  pitch: Pitch,
+  standing: Alteration,
+  proposal: Pick<ProposalMark, 'tone' | 'count'>,
+  setting: StaffSetting,
+  group: string,
+): readonly Mark[] {
+  const { spacePx, clef } = setting
+  const { tone, count } = proposal
+  const place = staffPlaceOf(pitch, clef)
+  const y = depthStaffSpaces(place) * spacePx
+  const radius = lozengeRadiusStaffSpaces(count) * spacePx
+  const strokePx = Math.max(1.5, 0.16 * spacePx)
+  const half = radius * LOZENGE_STRETCH + strokePx * 0.7
+  const accidental = accidentalFor(pitch, standing)
+  const ledgers = ledgerMarks(place, half, setting, group)
+  const { countPx } = letteringOf(spacePx)
+  const countX =
+    half + (ledgers.length > 0 ? ENGRAVING_DEFAULTS.legerLineExtension : 0) * spacePx + 0.25 * spacePx
+  const look = { face: 'AlegreyaSansMedium', sizePx: countPx, anchor: 'start' } as const
+  return [
+    ...ledgers,
+    lozengeMark({ role: 'lozenge', ink: tone, group }, 0, y, radius, {
+      isFilled: tone === 'breach',
+      strokePx,
+    }),
+    ...(accidental ? [accidentalMark(accidental, place, half, setting, { ink: tone, group })] : []),
+    ...(count === null
+      ? []
+      : [textMark({ role: 'count', ink: tone, group }, String(count), countX, y + 0.3 * countPx, look)]),
+  ]
+}
