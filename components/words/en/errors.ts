@@ -56,6 +56,11 @@ const fields: Readonly<Record<string, (args: Readonly<Record<string, string | nu
   'not-a-code': () => 'A code is six syllables, such as re fa mi la sol do.',
   'wrong-password': () => 'This is not your password.',
   taken: () => 'This is taken already.',
+  'no-such-pair': () => 'This address and this password do not belong together.',
+  'password-short': () => 'A password has at least ten characters.',
+  'password-long': () => 'This password is too long.',
+  'address-taken': () => 'There is an account with this address already. Sign in, or set a new password.',
+  'not-alike': () => 'The two are not alike.',
 }
 
 export const errors = {

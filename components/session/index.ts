@@ -1,0 +1,5 @@
+export { auth, type ListedSession } from './auth'
+export { useSession } from './use-session'
+export { loadSession, type Session } from './session-store'
+export { SignedIn } from './signed-in'
+export { parseReturnPath } from './return-path'
