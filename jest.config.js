@@ -26,6 +26,17 @@ const project = (displayName, more = {}) => ({
   ...more,
 })
 
+/** These make databases of their own on a cluster that one set-up brings up. */
+const withDatabase = {
+  globalSetup: '<rootDir>/tests/support/global-setup.ts',
+  globalTeardown: '<rootDir>/tests/support/global-teardown.ts',
+}
+
 module.exports = {
-  projects: [project('unit'), project('api'), project('realtime'), project('browser')],
+  projects: [
+    project('unit'),
+    project('api', withDatabase),
+    project('realtime', withDatabase),
+    project('browser', withDatabase),
+  ],
 }
