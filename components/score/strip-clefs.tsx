@@ -1,0 +1,35 @@
+import { memo, useMemo } from 'react'
+import { View } from 'react-native'
+import { Svg } from 'react-native-svg'
+import { useTheme } from '@/components/theme'
+import { paintMarks } from '@/shared/notation/paint-marks'
+import type { ScoreLayout } from '@/shared/notation/score-layout'
+import { staffLineMarks } from '@/shared/notation/system-marks'
+import { PaintedMarks } from './painted-marks'
+
+/** Clefs and signature of a strip, which stay while the bars pass under them. */
+export const StripClefs = memo(function StripClefs({
+  layout,
+  ground,
+}: Readonly<{ layout: ScoreLayout; ground: string }>) {
+  const { colors } = useTheme()
+  const system = layout.systems[0]
+  const painted = useMemo(
+    () =>
+      system
+        ? paintMarks([...staffLineMarks(system.staves, system.prefixPx, layout.spacePx), ...system.prefix])
+        : [],
+    [system, layout.spacePx],
+  )
+  if (!system) return null
+  return (
+    <View
+      aria-hidden
+      style={{ position: 'absolute', pointerEvents: 'none', left: 0, top: 0, backgroundColor: ground }}
+    >
+      <Svg width={system.prefixPx} height={layout.heightPx} style={{ display: 'flex' }}>
+        <PaintedMarks painted={painted} colors={colors} ground={ground} />
+      </Svg>
+    </View>
+  )
+})

@@ -1,0 +1,78 @@
+import { memo, useMemo } from 'react'
+import { G, Rect } from 'react-native-svg'
+import { MOTION_MS, useTheme, type Pigments } from '@/components/theme'
+import { paintMarks } from '@/shared/notation/paint-marks'
+import type { BarLayout, SystemLayout } from '@/shared/notation/score-layout'
+import { inkOf } from './inks'
+import { PaintedMarks } from './painted-marks'
+import { easedTransform } from './eased'
+
+/** Bars a finding speaks of, tinted while a reader points at it. */
+export type Highlight = Readonly<{ fromBar: number; toBar: number; tone: 'breach' | 'remark' | 'quiet' }>
+
+type BarProps = Readonly<{ bar: BarLayout; colors: Pigments; ground: string; easeMs: number }>
+
+function BarDrawing({ bar, colors, ground, easeMs }: BarProps) {
+  const painted = useMemo(() => paintMarks(bar.marks), [bar.marks])
+  return (
+    <G {...easedTransform(bar.xPx, 0, easeMs)}>
+      <PaintedMarks painted={painted} colors={colors} ground={ground} />
+    </G>
+  )
+}
+
+type Props = Readonly<{
+  system: SystemLayout
+  spacePx: number
+  ground: string
+  handBar: number | null
+  highlight: Highlight | null
+  /** The strip pins its clefs elsewhere. */
+  hasPrefix: boolean
+}>
+
+/** One system: what is under the bars, the bars, and what spans them. */
+export const SystemDrawing = memo(function SystemDrawing(props: Props) {
+  const { system, spacePx, ground, handBar, highlight, hasPrefix } = props
+  const { colors, isMotionReduced } = useTheme()
+  const easeMs = isMotionReduced ? 0 : MOTION_MS
+  const lines = useMemo(() => paintMarks(system.staffLines), [system.staffLines])
+  const prefix = useMemo(() => paintMarks(system.prefix), [system.prefix])
+  const spans = useMemo(() => paintMarks(system.spans), [system.spans])
+  const hand = system.bars.find(({ number }) => number === handBar)
+  const lit = highlight
+    ? system.bars.filter(({ number }) => number >= highlight.fromBar && number <= highlight.toBar)
+    : []
+  const top = system.stavesBox.top - spacePx
+  return (
+    <G x={system.xPx} y={system.yPx}>
+      {hand && (
+        <Rect x={hand.xPx + 1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
+      )}
+      {highlight &&
+        lit.map((bar) => (
+          <Rect
+            key={bar.number}
+            x={bar.xPx}
+            y={top}
+            width={bar.widthPx}
+            height={system.stavesBox.bottom + spacePx - top}
+            fill={inkOf(highlight.tone, colors).color}
+            fillOpacity={0.12}
+          />
+        ))}
+      <PaintedMarks painted={lines} colors={colors} ground={ground} />
+      {hasPrefix && <PaintedMarks painted={prefix} colors={colors} ground={ground} />}
+      {system.bars.map((bar) => (
+        <BarDrawing
+          key={bar.number}
+          bar={bar}
+          colors={colors}
+          ground={bar === hand ? colors.leaf : ground}
+          easeMs={easeMs}
+        />
+      ))}
+      <PaintedMarks painted={spans} colors={colors} ground={ground} />
+    </G>
+  )
+})
