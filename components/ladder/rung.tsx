@@ -38,7 +38,7 @@ export const Rung = memo(function Rung(props: RungProps) {
       aria-checked={isOn}
       aria-label={spoken}
       tabIndex={props.isTabStop ? 0 : -1}
-      dataSet={{ rung: index }}
+      {...({ dataSet: { rung: index } } as object)}
       onPress={() => props.onPress(index)}
       style={[styles.rung, isOn && styles.on]}
     >

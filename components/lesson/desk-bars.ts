@@ -1,3 +1,4 @@
+import { isSameNotes } from '@/shared/board'
 import type { BarNotes } from '@/shared/theory/note'
 import type { BarState, SheetBar } from '@/shared/wire/documents'
 
@@ -11,18 +12,6 @@ export type DeskBar = Readonly<
   | { kind: 'closed'; number: number; adopted: BarNotes | null; draft: BarNotes | null }
   | { kind: 'set-aside'; number: number; adopted: BarNotes | null }
 >
-
-const isSameNotes = (a: BarNotes, b: BarNotes): boolean =>
-  a.length === b.length &&
-  a.every((note, index) => {
-    const other = b[index]
-    return (
-      other !== undefined &&
-      note.pitch === other.pitch &&
-      note.ticks === other.ticks &&
-      note.tied === other.tied
-    )
-  })
 
 export function readDeskBar(
   number: number,

@@ -1,59 +1,42 @@
-import type { Exercise, Finding, RuleSet } from '@/shared/rules'
-import { checkLine } from '@/shared/rules'
+import type { Checker, Finding } from '@/shared/rules'
 import type { Line } from '@/shared/theory/note'
-import { barsOf, identityOfLine, lineWith, lineWithout } from './line-with'
-
-/** What the checker is asked about: the exercise, the class's line and the bars not read. */
-export type JudgedScore = Readonly<{
-  exercise: Exercise
-  ruleSet: RuleSet
-  line: Line
-  setAside: ReadonlySet<number>
-}>
+import { identityOfLine } from './line-with'
 
 export type Judge = Readonly<{
   /** Findings of the class's line as it stands. */
   ofLine: () => readonly Finding[]
-  /**
-   * Findings that some notes, laid over the class's line, bring with them: those the line does not have without these bars.
-   * Answers are kept by identity, so that five hundred alike cost one.
-   */
+  /** Findings on some notes laid over the class's line: those that point at a bar of theirs. */
   ofNotes: (notes: Line) => readonly Finding[]
+  /** Findings on many, in one pass over the line: whatever is then asked of one of them is known. */
+  ofAll: (many: Iterable<Line>) => void
 }>
 
-const identityOfFinding = ({ ruleId, code, voice, bars, args }: Finding): string =>
-  `${ruleId}/${code}/${voice}/${bars.join(',')}/${JSON.stringify(args)}`
-
-/** Asks the checker about one state of the score, each question once. Make a new one when the score changes. */
-export function createJudge({ exercise, ruleSet, line, setAside }: JudgedScore): Judge {
-  const check = (judged: Line): readonly Finding[] => checkLine(exercise, judged, ruleSet, { setAside })
+/**
+ * Asks the checker about one state of the score, each question once: answers are kept by what is written, so that five
+ * hundred proposals alike cost one. Make a new judge when the line or the bars set aside change.
+ */
+export function createJudge(checker: Checker, line: Line, setAside: ReadonlySet<number>): Judge {
   const answers = new Map<string, readonly Finding[]>()
-  const known = new Map<string, ReadonlySet<string>>()
   let ofLine: readonly Finding[] | null = null
 
-  /** What is already said of the line when these bars are unwritten. */
-  const without = (bars: readonly number[]): ReadonlySet<string> => {
-    const key = bars.join(',')
-    const before = known.get(key)
-    if (before) return before
-    const found = new Set(check(lineWithout(line, bars)).map(identityOfFinding))
-    known.set(key, found)
-    return found
+  const ofAll = (many: Iterable<Line>): void => {
+    const unknown = new Map<string, Line>()
+    for (const notes of many) {
+      const key = identityOfLine(notes)
+      if (!answers.has(key)) unknown.set(key, notes)
+    }
+    if (unknown.size === 0) return
+    const found = checker.annotate(line, [...unknown.values()], setAside)
+    let index = 0
+    for (const key of unknown.keys()) answers.set(key, found[index++] ?? [])
   }
 
   return {
-    ofLine: () => (ofLine ??= check(line)),
+    ofLine: () => (ofLine ??= checker.checkLine(line, setAside)),
+    ofAll,
     ofNotes: (notes) => {
-      const key = identityOfLine(notes)
-      const before = answers.get(key)
-      if (before) return before
-      const bars = barsOf(notes)
-      const already = without(bars)
-      const brought = check(lineWith(line, notes)).filter(
-        (finding) => !already.has(identityOfFinding(finding)),
-      )
-      answers.set(key, brought)
-      return brought
+      ofAll([notes])
+      return answers.get(identityOfLine(notes)) ?? []
     },
   }
 }

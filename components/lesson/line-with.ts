@@ -1,3 +1,4 @@
+import { formatNotes } from '@/shared/board'
 import type { BarNotes, Line } from '@/shared/theory/note'
 
 /** The line with other notes laid over some of its bars. */
@@ -16,10 +17,9 @@ export const barsOf = (line: Line): readonly number[] =>
     .sort((a, b) => a - b)
 
 /** Notes as a short text; equal texts mean the same notes, spelling and lengths included. */
-export const identityOfNotes = (notes: BarNotes): string =>
-  notes.map(({ pitch, ticks, tied }) => `${pitch ?? 'r'}.${ticks}${tied ? 't' : ''}`).join(' ')
+export const identityOfNotes = formatNotes
 
-/** Some bars of a line as a short text: `6=C5.1920|7=E5.1920`. */
+/** Some bars of a line as a short text: `6=C5/1920|7=E5/1920`. */
 export const identityOfLine = (line: Line): string =>
   barsOf(line)
     .map((bar) => `${bar}=${identityOfNotes(line[bar] ?? [])}`)

@@ -58,7 +58,7 @@ function compose(view: LessonView, { read, proposalsOf, findings }: Layers): Sco
   const bars = view.exercise.cantus.map((cantus, index): ScoreBar => {
     const number = index + 1
     const isSetAside = view.setAside.has(number)
-    const state = view.bars[index]?.state ?? 'frozen'
+    const state = view.bars[number]?.state ?? 'frozen'
     const entry = rail[index]
     return {
       number,

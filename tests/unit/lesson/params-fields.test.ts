@@ -19,7 +19,13 @@ describe("a rule's parameters become plain controls", () => {
         control: { kind: 'whole-number', min: 0, max: 8 },
         fallback: 2,
       },
-      { name: 'isStrict', label: 'is strict', description: null, control: { kind: 'switch' }, fallback: true },
+      {
+        name: 'isStrict',
+        label: 'is strict',
+        description: null,
+        control: { kind: 'switch' },
+        fallback: true,
+      },
       {
         name: 'openings',
         label: 'openings',
@@ -34,7 +40,13 @@ describe("a rule's parameters become plain controls", () => {
         control: { kind: 'choice', options: ['anywhere', 'inside'] },
         fallback: 'inside',
       },
-      { name: 'ratio', label: 'ratio', description: null, control: { kind: 'number', min: 0, max: 1 }, fallback: 0.5 },
+      {
+        name: 'ratio',
+        label: 'ratio',
+        description: null,
+        control: { kind: 'number', min: 0, max: 1 },
+        fallback: 0.5,
+      },
     ])
   })
 
