@@ -1,11 +1,64 @@
-import { Page, LinkText } from '@/components/ui'
+import { View } from 'react-native'
+import { JoinField } from '@/components/landing/join-field'
+import { Bicinium } from '@/components/landing/bicinium'
+import { SiteHeader, useSession } from '@/components/session'
+import { space, useWidth } from '@/components/theme'
+import { LinkText, Page, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 
 export default function Landing() {
-  const words = useWords().common
+  const words = useWords()
+  const { me } = useSession()
+  const { isWide } = useWidth()
+  const person = me && !me.isGuest ? me : null
   return (
-    <Page title={words.motto} width="text">
-      <LinkText href="/sign-in" label={words.signIn} />
-    </Page>
+    <>
+      <SiteHeader
+        me={null}
+        side={
+          <View style={{ justifyContent: 'center' }}>
+            <LinkText
+              href={person ? '/home' : '/sign-in'}
+              label={person ? words.common.nav.courses : words.common.signIn}
+              style={{ paddingVertical: 10 }}
+            />
+          </View>
+        }
+      />
+      <Page
+        title={words.common.motto}
+        heading={words.entry.landing.heading}
+        size="display"
+        lede={words.entry.landing.lede}
+      >
+        <View style={{ gap: isWide ? space.triple : space.double }}>
+          <View style={{ maxWidth: 560 }}>
+            <JoinField />
+          </View>
+          <Bicinium />
+          <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: space.one }}>
+            <Txt tone="lead" style={{ paddingVertical: 10 }}>
+              {words.entry.landing.teaching}
+            </Txt>
+            {person ? (
+              <LinkText
+                href="/home"
+                label={words.entry.landing.yourCourses}
+                style={{ paddingVertical: 10 }}
+              />
+            ) : (
+              <>
+                <LinkText href="/sign-in" label={words.common.signIn} style={{ paddingVertical: 10 }} />
+                <LinkText
+                  href="/sign-up"
+                  label={words.entry.landing.makeAccount}
+                  style={{ paddingVertical: 10 }}
+                />
+              </>
+            )}
+          </View>
+        </View>
+      </Page>
+    </>
   )
 }

@@ -16,13 +16,24 @@ export type PageProps = Readonly<{
   lede?: ReactNode
   /** Acts of the whole page, at the right of its heading. */
   actions?: ReactNode
+  /** `display`: the largest heading, for the page that says what this is. */
+  size?: 'plain' | 'display'
   /** `text`: one measure of prose. `wide`: all the room there is, within reason. */
   width?: 'text' | 'wide'
   children: ReactNode
 }>
 
 /** The sheet that a page is written on: margins, heading, and the tab's name. */
-export function Page({ title, heading, up, lede, actions, width = 'wide', children }: PageProps) {
+export function Page({
+  title,
+  heading,
+  up,
+  lede,
+  actions,
+  width = 'wide',
+  size = 'plain',
+  children,
+}: PageProps) {
   const { isWide, widthPx } = useWidth()
   const marginPx = widthPx >= 1600 ? 56 : isWide ? space.double : widthPx < 360 ? space.half : space.one
   return (
@@ -62,7 +73,10 @@ export function Page({ title, heading, up, lede, actions, width = 'wide', childr
           }}
         >
           <View style={{ minWidth: 0, flexShrink: 1 }}>
-            <Heading level={1} kind={isWide ? 'head' : 'large'}>
+            <Heading
+              level={1}
+              kind={size === 'display' ? (isWide ? 'wall' : 'head') : isWide ? 'head' : 'large'}
+            >
               {heading ?? title}
             </Heading>
           </View>

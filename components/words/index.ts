@@ -1,15 +1,33 @@
+import { people } from './en/people'
+import { account } from './en/account'
+import { entry } from './en/entry'
 import { common } from './en/common'
 import { desk } from './en/desk'
 import { errors } from './en/errors'
 import { join } from './en/join'
 import { lectern } from './en/lectern'
 import { lesson } from './en/lesson'
+import { score } from './en/score'
 import { setup } from './en/setup'
 import { sound } from './en/sound'
 import { wall } from './en/wall'
 
 /** Every word of the interface, one typed table an area. */
-const EN = { common, desk, errors, join, lectern, lesson, setup, sound, wall } as const
+const EN = {
+  people,
+  account,
+  entry,
+  common,
+  desk,
+  errors,
+  join,
+  lectern,
+  lesson,
+  score,
+  setup,
+  sound,
+  wall,
+} as const
 
 export type Words = typeof EN
 

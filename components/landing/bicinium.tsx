@@ -1,0 +1,4 @@
+/** Drawn by the score once it stands. */
+export function Bicinium() {
+  return null
+}

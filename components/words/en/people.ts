@@ -1,0 +1,25 @@
+/** The administrator's list of people, and the demo's own post. */
+export const people = {
+  title: 'People',
+  lede: 'Everyone with an account. Those who may make courses are teachers of the school.',
+  search: 'Search by name or address',
+  name: 'Name',
+  email: 'Address',
+  courses: 'Courses',
+  since: 'Since',
+  mayMake: 'May make courses',
+  mayMakeFor: (name: string) => `${name} may make courses`,
+  yes: 'Yes',
+  no: 'No',
+  administrator: 'administrator',
+  unconfirmed: 'not confirmed',
+  none: 'Nobody of that name or address.',
+  mail: {
+    title: 'Mail of the demo',
+    lede: 'Nothing leaves this machine. Every message the server sent lies here, the newest first.',
+    none: 'No message yet',
+    noneMore: 'Make an account, set a new password or invite somebody, and the message will lie here.',
+    to: (address: string) => `To ${address}`,
+    refresh: 'Look again',
+  },
+} as const
