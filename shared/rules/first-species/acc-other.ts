@@ -1,0 +1,59 @@
+import { z } from 'zod'
+import { cite } from '@/shared/rules/cite'
+import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { breachAt, foldNotes, type Frame } from '@/shared/rules/fold'
+import type { Rule } from '@/shared/rules/rule'
+import type { Mode } from '@/shared/theory/mode'
+import { formatPitch } from '@/shared/theory/pitch'
+import { alterationInMode, degreeOf, isRaisedSeventh, type Degree } from '@/shared/theory/scale'
+
+const PARAMS = z.strictObject({
+  bFlat: z.boolean().default(true).describe('B flat, or its like in a transposed mode, is free.'),
+  raised: z
+    .enum(['anywhere', 'seventh-before-the-close'])
+    .default('anywhere')
+    .describe('Where the raised degrees of the close are left to other rules: anywhere; or judged here.'),
+})
+type Params = z.infer<typeof PARAMS>
+
+/** The degree that makes a tritone over another of its mode: B over F, untransposed. Lowered, it is the usual B flat. */
+const TRITONE_TOP: Readonly<Record<Mode, Degree>> = {
+  ionian: 7,
+  dorian: 6,
+  phrygian: 5,
+  lydian: 4,
+  mixolydian: 3,
+  aeolian: 2,
+}
+
+export const accOther: Rule<Frame, Params> = {
+  id: 'acc-other',
+  level: 'preference',
+  scope: 'line',
+  species: FIRST_SPECIES,
+  params: PARAMS,
+  ...foldNotes<Params>((now, params, { exercise: { mode, final } }) => {
+    const alteration = alterationInMode(now.note, mode, final)
+    if (alteration === 0) return null
+    const degree = degreeOf(now.note, final)
+    if (params.bFlat && alteration === -1 && degree === TRITONE_TOP[mode]) return null
+    const isAtClose = params.raised === 'anywhere' || now.isPenultimate
+    if (isAtClose && isRaisedSeventh(now.note, mode, final)) return null
+    const isRaisedSixth = mode === 'aeolian' && degree === 6 && alteration === 1
+    if (params.raised === 'anywhere' && isRaisedSixth) return null
+    return breachAt('line', 'foreign', [now], { note: formatPitch(now.note) })
+  }),
+  explain: {
+    title: 'No other accidentals',
+    statement:
+      'Beside the raised degrees of the close and the B flat that avoids a tritone with F, the line keeps to the notes of its mode.',
+    why: 'Every foreign note weakens the mode. The few that are usual have their reasons: to close firmly, or to sing without a tritone.',
+    mends: 'Take the note without its accidental, or the one beside it.',
+    sources: cite('DAVD', 'OMT1', 'JEPP°', 'EX'),
+    disagreement:
+      'Fux writes B flat in Dorian and Lydian; two courses allow no accidental but those of the close.',
+    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D4 F4 E4 D4', line: 'F#4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [1] },
+    messages: { foreign: 'The {note} is not a note of the mode.' },
+  },
+}
