@@ -25,7 +25,7 @@ export function Ghost({ layout, hit, isHeld, ground }: Props) {
       pitch.alteration,
       { tone: 'line', count: null },
       { clef, spacePx },
-      'ghost',
+      { group: 'ghost', countSide: 'right' },
     )
     const lozenge = marks.find(({ role }) => role === 'lozenge')
     if (!lozenge) return []

@@ -7,7 +7,7 @@ import {
   wholeRestMarks,
   type StaffSetting,
 } from '@/shared/notation/note-marks'
-import { boxOf, placeClear } from '@/shared/notation/placing'
+import { boxOf, clearingPx } from '@/shared/notation/placing'
 import type { ScoreBar } from '@/shared/notation/score-input'
 import type { BarNotes } from '@/shared/theory/note'
 import { formatPitch, pitchOf, type Alteration, type Pitch } from '@/shared/theory/pitch'
@@ -45,7 +45,14 @@ export function cantusContent(bar: ScoreBar, signature: number, setting: StaffSe
   return contentOf(wholeNoteMarks(pitch, standing, setting, { ink: 'cantus', group: `${bar.number} cantus` }))
 }
 
-type Entry = Readonly<{ tick: number; height: number; isLine: boolean; marks: readonly Mark[] }>
+/** What stands at one moment, with its number on its right, and on its left. */
+type Entry = Readonly<{
+  tick: number
+  height: number
+  isLine: boolean
+  right: readonly Mark[]
+  left: readonly Mark[]
+}>
 
 const heightOf = (pitch: Pitch | null): number =>
   pitch ? 7 * pitch.octave + 'CDEFGAB'.indexOf(pitch.letter) : 0
@@ -56,7 +63,7 @@ function entriesOf(bar: ScoreBar, signature: number, setting: StaffSetting): rea
     const marks = onset.pitch
       ? wholeNoteMarks(onset.pitch, onset.standing, setting, look)
       : wholeRestMarks(setting.spacePx, look)
-    return { tick: onset.tick, height: heightOf(onset.pitch), isLine: true, marks }
+    return { tick: onset.tick, height: heightOf(onset.pitch), isLine: true, right: marks, left: marks }
   })
   const proposals = bar.proposals.flatMap((proposal, p) =>
     onsetsOf(proposal.notes, signature).flatMap((onset, i): Entry[] => {
@@ -64,28 +71,72 @@ function entriesOf(bar: ScoreBar, signature: number, setting: StaffSetting): rea
       // The number stands once, at the first note of what was proposed.
       const shown = i === 0 ? proposal : { ...proposal, count: null }
       const group = `${bar.number} proposal ${p} ${i}`
-      const marks = proposalMarks(onset.pitch, onset.standing, shown, setting, group)
-      return [{ tick: onset.tick, height: heightOf(onset.pitch), isLine: false, marks }]
+      const { pitch, standing } = onset
+      const side = (countSide: 'left' | 'right'): readonly Mark[] =>
+        proposalMarks(pitch, standing, shown, setting, { group, countSide })
+      return [
+        {
+          tick: onset.tick,
+          height: heightOf(onset.pitch),
+          isLine: false,
+          right: side('right'),
+          left: side('left'),
+        },
+      ]
     }),
   )
   return [...line, ...proposals]
 }
 
-/** The notes of one moment: the agreed one on the axis, proposals from high to low, each moved clear of the rest. */
+const moved = (marks: readonly Mark[], dx: number): readonly Mark[] =>
+  dx === 0 ? marks : marks.map((mark) => moveMark(mark, dx, 0))
+
+/**
+ * Files of lozenges that stand one under the other, first to last. From high to low, each joins the first file in which
+ * it touches nobody: notes a step apart fall to either side, as seconds do in a chord.
+ */
+function filesOf(entries: readonly Entry[], clearancePx: number): readonly (readonly Entry[])[] {
+  const files: Entry[][] = []
+  const lozengesOf = (entry: Entry): readonly Mark[] => entry.right.filter(({ role }) => role === 'lozenge')
+  for (const entry of entries) {
+    const file = files.find((others) =>
+      others.every((other) => clearingPx(lozengesOf(entry), lozengesOf(other), clearancePx) === 0),
+    )
+    if (file) file.push(entry)
+    else files.push([entry])
+  }
+  return files
+}
+
+/** The notes of one moment: the agreed one on the axis, the proposals file by file to its right or around it. */
 function columnOf(entries: readonly Entry[], clearancePx: number): readonly Mark[] {
-  const sorted = [...entries].sort((a, b) => Number(b.isLine) - Number(a.isLine) || b.height - a.height)
-  const standing: Mark[] = []
-  for (const entry of sorted) standing.push(...placeClear(entry.marks, standing, clearancePx))
+  const sorted = [...entries].sort((a, b) => b.height - a.height)
+  const line = sorted.filter((entry) => entry.isLine).flatMap((entry) => entry.right)
+  const files = filesOf(
+    sorted.filter((entry) => !entry.isLine),
+    clearancePx,
+  )
+  const standing: Mark[] = [...line]
+  files.forEach((file, i) => {
+    // With two files or more the numbers of the first stand on its left, out of the way of the second.
+    const isOutward = i === 0 && files.length > 1 && line.length === 0
+    const sides = file.map((entry) => (isOutward ? entry.left : entry.right))
+    // In a file everyone stands at one distance, the greatest that any needs.
+    const dx = Math.max(...sides.map((marks) => clearingPx(marks, standing, clearancePx)))
+    for (const marks of sides) {
+      const own = moved(marks, dx)
+      standing.push(...moved(own, clearingPx(own, standing, clearancePx)))
+    }
+  })
   const box = boxOf(standing.filter((mark) => mark.role === 'lozenge' || mark.role === 'count'))
   // Proposals among themselves have no axis of their own: the bunch is centred over the cantus.
-  if (!box || entries.some((entry) => entry.isLine)) return standing
-  return standing.map((mark) => moveMark(mark, -(box.left + box.right) / 2, 0))
+  return !box || line.length > 0 ? standing : moved(standing, -(box.left + box.right) / 2)
 }
 
 /** The line's staff in a bar: the agreed line and the proposals, moment by moment from left to right. */
 export function lineContent(bar: ScoreBar, signature: number, setting: StaffSetting): StaffContent {
   const entries = entriesOf(bar, signature, setting)
-  const clearancePx = 0.2 * setting.spacePx
+  const clearancePx = 0.15 * setting.spacePx
   const marks: Mark[] = []
   for (const tick of [...new Set(entries.map((entry) => entry.tick))].sort((a, b) => a - b)) {
     const column = columnOf(

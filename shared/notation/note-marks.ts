@@ -1,3 +1,4 @@
+import { uniteBoxes } from '@/shared/notation/box'
 import { BRAVURA, ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
 import type { GlyphName } from '@/shared/notation/glyphs'
 import { accidentalFor } from '@/shared/notation/key-signature'
@@ -11,6 +12,7 @@ import {
   type Ink,
   type Mark,
 } from '@/shared/notation/mark'
+import { textHeightPx } from '@/shared/notation/measure-text'
 import type { ProposalMark } from '@/shared/notation/score-input'
 import { letteringOf } from '@/shared/notation/sizes'
 import { depthStaffSpaces, ledgerPlaces, staffPlaceOf } from '@/shared/notation/staff-place'
@@ -21,6 +23,7 @@ import type { Alteration, Pitch } from '@/shared/theory/pitch'
 export type StaffSetting = Readonly<{ clef: Clef; spacePx: number }>
 
 const ACCIDENTAL_GAP = 0.25
+const COUNT_GAP = 0.25
 
 function ledgerMarks(
   place: number,
@@ -95,36 +98,41 @@ export const lozengeRadiusStaffSpaces = (count: number | null): number =>
     ? UNCOUNTED_RADIUS
     : Math.min(MOST_RADIUS, LEAST_RADIUS + 0.125 * Math.log2(Math.max(1, count)))
 
-/** A proposal: its lozenge centred on x = 0, the number to its right. */
+/** A proposal: its lozenge centred on x = 0, the number on the side asked for, outside any accidental. */
 export function proposalMarks(
   pitch: Pitch,
   standing: Alteration,
   proposal: Pick<ProposalMark, 'tone' | 'count'>,
   setting: StaffSetting,
-  group: string,
+  look: Readonly<{ group: string; countSide: 'left' | 'right' }>,
 ): readonly Mark[] {
   const { spacePx, clef } = setting
   const { tone, count } = proposal
+  const { group, countSide } = look
   const place = staffPlaceOf(pitch, clef)
   const y = depthStaffSpaces(place) * spacePx
   const radius = lozengeRadiusStaffSpaces(count) * spacePx
   const strokePx = Math.max(1.5, 0.16 * spacePx)
   const half = radius * LOZENGE_STRETCH + strokePx * 0.7
   const accidental = accidentalFor(pitch, standing)
-  const ledgers = ledgerMarks(place, half, setting, group)
-  const { countPx } = letteringOf(spacePx)
-  const countX =
-    half + (ledgers.length > 0 ? ENGRAVING_DEFAULTS.legerLineExtension : 0) * spacePx + 0.25 * spacePx
-  const look = { face: 'AlegreyaSansMedium', sizePx: countPx, anchor: 'start' } as const
-  return [
-    ...ledgers,
+  const marks: Mark[] = [
+    ...ledgerMarks(place, half, setting, group),
     lozengeMark({ role: 'lozenge', ink: tone, group }, 0, y, radius, {
       isFilled: tone === 'breach',
       strokePx,
     }),
     ...(accidental ? [accidentalMark(accidental, place, half, setting, { ink: tone, group })] : []),
-    ...(count === null
-      ? []
-      : [textMark({ role: 'count', ink: tone, group }, String(count), countX, y + 0.3 * countPx, look)]),
   ]
+  if (count === null) return marks
+  const { left, right } = uniteBoxes(marks.map((mark) => mark.box))
+  const { countPx } = letteringOf(spacePx)
+  const gap = Math.max(2, COUNT_GAP * spacePx)
+  const [x, anchor] =
+    countSide === 'right' ? ([right + gap, 'start'] as const) : ([left - gap, 'end'] as const)
+  const baseline = y + textHeightPx('8', 'AlegreyaSansMedium', countPx).above / 2
+  const name = { role: 'count', ink: tone, group } as const
+  marks.push(
+    textMark(name, String(count), x, baseline, { face: 'AlegreyaSansMedium', sizePx: countPx, anchor }),
+  )
+  return marks
 }

@@ -1,5 +1,5 @@
-import { growBox, isOverlapping, moveBox, uniteBoxes } from '@/shared/notation/box'
-import { moveMark, type Mark, type MarkRole } from '@/shared/notation/mark'
+import { growBox, isOverlapping, moveBox, uniteBoxes, type Box } from '@/shared/notation/box'
+import type { Mark, MarkRole } from '@/shared/notation/mark'
 
 const CROSSED_BY_LEDGERS: readonly MarkRole[] = ['ledger', 'notehead', 'lozenge']
 
@@ -9,30 +9,51 @@ const mayTouch = (a: Mark, b: Mark): boolean =>
   (a.role === 'ledger' && CROSSED_BY_LEDGERS.includes(b.role)) ||
   (b.role === 'ledger' && CROSSED_BY_LEDGERS.includes(a.role))
 
-/** Whether two marks of the score stand in each other's way. */
-export const isColliding = (a: Mark, b: Mark): boolean => !mayTouch(a, b) && isOverlapping(a.box, b.box)
+type Lozenge = Extract<Mark, { kind: 'polygon' }>
+
+const isLozenge = (mark: Mark): mark is Lozenge => mark.kind === 'polygon'
 
 /**
- * Moves marks that belong together to the right until they are clear of those already standing, as the second of two
- * notes a step apart is moved in a chord. Returns them where they come to stand.
+ * How far to the right the first of two lozenges must go to stand clear of the other. Lozenges of one shape meet where
+ * the lozenge of their added sizes does, so that two a step apart nest along their slanted sides.
  */
-export function placeClear(
-  marks: readonly Mark[],
-  standing: readonly Mark[],
-  clearancePx: number,
-): readonly Mark[] {
+function lozengePush(moving: Box, still: Box): number {
+  const dx = (moving.left + moving.right - still.left - still.right) / 2
+  const dy = Math.abs(moving.top + moving.bottom - still.top - still.bottom) / 2
+  const halfHeight = (moving.bottom - moving.top + still.bottom - still.top) / 2
+  const halfWidth = (moving.right - moving.left + still.right - still.left) / 2
+  const needed = dy >= halfHeight ? 0 : halfWidth * (1 - dy / halfHeight)
+  return Math.abs(dx) >= needed ? 0 : needed - dx
+}
+
+/** How far to the right a mark must go to stand clear of another; 0 when it does. */
+function pushRight(moving: Mark, still: Mark): number {
+  if (mayTouch(moving, still)) return 0
+  if (isLozenge(moving) && isLozenge(still)) return lozengePush(moving.box, still.box)
+  return isOverlapping(moving.box, still.box) ? still.box.right - moving.box.left : 0
+}
+
+/** Whether two marks of the score stand in each other's way. */
+export const isColliding = (a: Mark, b: Mark): boolean => pushRight(a, b) > 0
+
+const HAIR_PX = 0.01
+
+/**
+ * How far marks that belong together have to move to the right to be clear of those already standing, as the second of
+ * two notes a step apart is moved in a chord.
+ */
+export function clearingPx(marks: readonly Mark[], standing: readonly Mark[], clearancePx: number): number {
   let dx = 0
   for (;;) {
     let push = 0
     for (const mark of marks) {
       const grown = { ...mark, box: growBox(moveBox(mark.box, dx, 0), clearancePx) }
-      for (const other of standing)
-        if (isColliding(grown, other)) push = Math.max(push, other.box.right - grown.box.left)
+      for (const other of standing) push = Math.max(push, pushRight(grown, other))
     }
-    if (push === 0) return dx === 0 ? marks : marks.map((mark) => moveMark(mark, dx, 0))
-    dx += push + 0.01
+    if (push === 0) return dx
+    dx += push + HAIR_PX
   }
 }
 
-export const boxOf = (marks: readonly Mark[]) =>
-  marks.length === 0 ? null : uniteBoxes(marks.map((m) => m.box))
+export const boxOf = (marks: readonly Mark[]): Box | null =>
+  marks.length === 0 ? null : uniteBoxes(marks.map((mark) => mark.box))

@@ -23,7 +23,7 @@ export const barOf = (number: number, over: Partial<ScoreBar> = {}): ScoreBar =>
   ...over,
 })
 
-const figure = (text: string) => ({ text, tone: 'quiet' as const })
+const figure = (text: string) => ({ text, tone: 'cantus' as const })
 
 /** A lesson under way over a cantus in D: the opening and the cadence adopted, bars 6 to 8 in play. */
 export const LESSON_SCORE: ScoreInput = {
