@@ -1,4 +1,5 @@
 export type {
+  AnyRule,
   Breach,
   Example,
   Exercise,
