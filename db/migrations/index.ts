@@ -4,6 +4,7 @@ import * as courses from './002-courses'
 import * as cantus from './003-cantus'
 import * as lessons from './004-lessons'
 import * as attempts from './005-attempts'
+import * as journal from './006-journal'
 
 /** Every migration by name. Names sort in the order they run in; one that has shipped is never changed. */
 export const MIGRATIONS: Readonly<Record<string, Migration>> = {
@@ -12,4 +13,5 @@ export const MIGRATIONS: Readonly<Record<string, Migration>> = {
   '003-cantus': cantus,
   '004-lessons': lessons,
   '005-attempts': attempts,
+  '006-journal': journal,
 }

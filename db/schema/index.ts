@@ -2,6 +2,7 @@ import type { AccountTable, SessionTable, UserTable, VerificationTable } from '.
 import type { AttemptTable } from './attempts'
 import type { CantusTable } from './cantus'
 import type { CourseMemberTable, CourseTable, InvitationTable } from './courses'
+import type { JournalChangeTable, JournalEventTable, JournalSnapshotTable } from './journal'
 import type { LessonMemberTable, LessonTable, WallSessionTable } from './lessons'
 
 /** Tables of the database as Kysely sees them; one file an aggregate. */
@@ -18,4 +19,7 @@ export interface Database {
   lessonMember: LessonMemberTable
   wallSession: WallSessionTable
   attempt: AttemptTable
+  journalChange: JournalChangeTable
+  journalEvent: JournalEventTable
+  journalSnapshot: JournalSnapshotTable
 }
