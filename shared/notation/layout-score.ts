@@ -6,6 +6,7 @@ import { assignLevels } from '@/shared/notation/levels'
 import type { Mark } from '@/shared/notation/mark'
 import type { ScoreInput } from '@/shared/notation/score-input'
 import type {
+  BarFrame,
   BarLayout,
   ScoreLayout,
   ScoreLayoutOptions,
@@ -83,32 +84,61 @@ const unite = (boxes: readonly (Box | null)[]): Box | null => {
   return present.length === 0 ? null : uniteBoxes(present)
 }
 
-type Levels = Readonly<{ arcs: readonly number[]; brackets: readonly number[] }>
-
 const isReleased = (bar: MeasuredBar | undefined): boolean =>
   bar !== undefined && bar.bar.state === 'released' && !bar.isFolded
 
-function layoutSystem(setting: Setting, from: number, to: number, yPx: number, levels: Levels): SystemLayout {
-  const { input, options, spacePx, prefixPx, measured } = setting
-  const isMini = options.size === 'mini'
+/** A system with its bars spaced, before any mark is made. */
+type Frame = Readonly<{ from: number; to: number; widthPx: number; bars: readonly BarFrame[] }>
+
+function frameSystem(setting: Setting, from: number, to: number): Frame {
+  const { prefixPx, measured } = setting
   const bars = measured.slice(from, to)
   const widths = barWidths(setting, bars, from === 0 && to === measured.length)
-
   let xPx = prefixPx
-  const frames = bars.map(({ bar, isFolded }, i): Omit<BarLayout, 'marks'> => {
+  const frames = bars.map((measuredBar, i): BarFrame => {
     const widthPx = widths[i] as number
-    const frame = {
-      index: from + i,
-      number: bar.number,
-      isFolded,
-      xPx,
-      widthPx,
-      axisPx: axisIn(bars[i] as MeasuredBar, widthPx),
-    }
+    const { bar, isFolded } = measuredBar
+    const place = { xPx, widthPx, axisPx: axisIn(measuredBar, widthPx) }
     xPx += widthPx
-    return frame
+    return { index: from + i, number: bar.number, isFolded, ...place }
   })
-  const widthPx = xPx
+  return { from, to, widthPx: xPx, bars: frames }
+}
+
+/** What spans bars, for the whole score: the level of each, and the system on which a bracket has its words. */
+type Spans = Readonly<{
+  arcs: readonly number[]
+  brackets: readonly number[]
+  labelSystems: readonly number[]
+}>
+
+function arrangeSpans({ input }: Setting, frames: readonly Frame[]): Spans {
+  const widthOn = (frame: Frame, span: { fromBar: number; toBar: number }): number => {
+    const segment = segmentOn(frame.bars, span)
+    return segment ? segment.last.xPx + segment.last.widthPx - segment.first.xPx : 0
+  }
+  return {
+    // An arch ends beside the axis of its last bar, so the next may begin there; a lozenge fills its bar.
+    arcs: assignLevels(input.arcs, (a, b) => a.fromBar < a.toBar && b.fromBar < b.toBar),
+    brackets: assignLevels(input.brackets, () => false),
+    labelSystems: input.brackets.map((bracket) => {
+      const widths = frames.map((frame) => widthOn(frame, bracket))
+      return widths.indexOf(Math.max(...widths))
+    }),
+  }
+}
+
+function layoutSystem(
+  setting: Setting,
+  frame: Frame,
+  index: number,
+  yPx: number,
+  levels: Spans,
+): SystemLayout {
+  const { input, options, spacePx, prefixPx, measured } = setting
+  const isMini = options.size === 'mini'
+  const { from, to, widthPx, bars: frames } = frame
+  const bars = measured.slice(from, to)
 
   const arcsHere = input.arcs.map((arc) => (isMini ? null : segmentOn(frames, arc)))
   const bracketsHere = input.brackets.map((bracket) => (isMini ? null : segmentOn(frames, bracket)))
@@ -147,7 +177,15 @@ function layoutSystem(setting: Setting, from: number, to: number, yPx: number, l
     ),
     ...input.brackets.flatMap((bracket, i) =>
       bracketsHere[i]
-        ? bracketMarks(bracket, i, levels.brackets[i] as number, true, frames, rows, spacePx)
+        ? bracketMarks(
+            bracket,
+            i,
+            levels.brackets[i] as number,
+            levels.labelSystems[i] === index,
+            frames,
+            rows,
+            spacePx,
+          )
         : [],
     ),
   ]
@@ -173,15 +211,12 @@ function layoutSystem(setting: Setting, from: number, to: number, yPx: number, l
 function layoutAt(setting: Setting): ScoreLayout {
   const { input, options, spacePx, measured } = setting
   const starts = systemStarts(setting)
-  const levels: Levels = {
-    // An arch ends beside the axis of its last bar, so the next may begin there; a lozenge fills its bar.
-    arcs: assignLevels(input.arcs, (a, b) => a.fromBar < a.toBar && b.fromBar < b.toBar),
-    brackets: assignLevels(input.brackets, () => false),
-  }
+  const frames = starts.map((from, i) => frameSystem(setting, from, starts[i + 1] ?? measured.length))
+  const spans = arrangeSpans(setting, frames)
   const systems: SystemLayout[] = []
   let yPx = 0
-  starts.forEach((from, i) => {
-    const system = layoutSystem(setting, from, starts[i + 1] ?? measured.length, yPx, levels)
+  frames.forEach((frame, i) => {
+    const system = layoutSystem(setting, frame, i, yPx, spans)
     systems.push(system)
     yPx += system.heightPx + Math.round(SYSTEM_GAP_STAFF_SPACES * spacePx)
   })

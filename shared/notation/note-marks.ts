@@ -85,9 +85,10 @@ export const wholeRestMarks = (spacePx: number, look: { ink: Ink; group: string 
   ),
 ]
 
-const UNCOUNTED_RADIUS = 0.76
-const LEAST_RADIUS = 0.46
-const MOST_RADIUS = 1.14
+const UNCOUNTED_RADIUS = 0.74
+const LEAST_RADIUS = 0.4
+const MOST_RADIUS = 1.1
+const RADIUS_BY_DOUBLING = 0.105
 
 /**
  * Half the height of a proposal's lozenge in staff spaces. Each doubling of the number adds the same, so that a crowd
@@ -96,7 +97,7 @@ const MOST_RADIUS = 1.14
 export const lozengeRadiusStaffSpaces = (count: number | null): number =>
   count === null
     ? UNCOUNTED_RADIUS
-    : Math.min(MOST_RADIUS, LEAST_RADIUS + 0.125 * Math.log2(Math.max(1, count)))
+    : Math.min(MOST_RADIUS, LEAST_RADIUS + RADIUS_BY_DOUBLING * Math.log2(Math.max(1, count)))
 
 /** A proposal: its lozenge centred on x = 0, the number on the side asked for, outside any accidental. */
 export function proposalMarks(

@@ -21,8 +21,8 @@ export type Voice = 'cantus' | 'line'
 
 export type StaffLayout = Readonly<{ voice: Voice; clef: Clef; topPx: number }>
 
-/** One bar. Its marks are placed from its own left edge, so that a bar which only moves is the same drawing. */
-export type BarLayout = Readonly<{
+/** A bar's place in its system. */
+export type BarFrame = Readonly<{
   /** Place in the input's list of bars, and the bar's written number. */
   index: number
   number: number
@@ -32,8 +32,10 @@ export type BarLayout = Readonly<{
   widthPx: number
   /** Where its notes stand, from its own left edge. */
   axisPx: number
-  marks: readonly Mark[]
 }>
+
+/** One bar. Its marks are placed from its own left edge, so that a bar which only moves is the same drawing. */
+export type BarLayout = BarFrame & Readonly<{ marks: readonly Mark[] }>
 
 /** One line of music. Every place inside it is measured from its own top left corner. */
 export type SystemLayout = Readonly<{

@@ -7,9 +7,9 @@ import {
   type Mark,
   type Point,
 } from '@/shared/notation/mark'
-import { ellipsise } from '@/shared/notation/measure-text'
+import { ellipsise, measureTextPx } from '@/shared/notation/measure-text'
 import type { ScoreArc, ScoreBracket } from '@/shared/notation/score-input'
-import type { BarLayout } from '@/shared/notation/score-layout'
+import type { BarFrame } from '@/shared/notation/score-layout'
 import { letteringOf } from '@/shared/notation/sizes'
 import {
   ARC_LEVEL_STAFF_SPACES,
@@ -18,15 +18,13 @@ import {
 } from '@/shared/notation/system-heights'
 
 /** The part of a span that falls on a system, and whether it runs on past either end of it. */
-type Segment = Readonly<{ first: BarLayout; last: BarLayout; isOpenLeft: boolean; isOpenRight: boolean }>
+type Segment = Readonly<{ first: BarFrame; last: BarFrame; isOpenLeft: boolean; isOpenRight: boolean }>
 
 export function segmentOn(
-  bars: readonly Omit<BarLayout, 'marks'>[],
+  bars: readonly BarFrame[],
   span: { fromBar: number; toBar: number },
 ): Segment | null {
-  const within = (bars as readonly BarLayout[]).filter(
-    ({ number }) => number >= span.fromBar && number <= span.toBar,
-  )
+  const within = bars.filter(({ number }) => number >= span.fromBar && number <= span.toBar)
   const [first, last] = [within[0], within.at(-1)]
   if (!first || !last) return null
   return {
@@ -37,13 +35,13 @@ export function segmentOn(
   }
 }
 
-const axisOf = (bar: BarLayout): number => bar.xPx + bar.axisPx
+const axisOf = (bar: BarFrame): number => bar.xPx + bar.axisPx
 
 /** A finding over the staff: an arch from bar to bar (dashed for a remark), or a lozenge over its only bar. */
 export function findingMarks(
   arc: ScoreArc,
   level: number,
-  bars: readonly Omit<BarLayout, 'marks'>[],
+  bars: readonly BarFrame[],
   rows: SystemRows,
   spacePx: number,
 ): readonly Mark[] {
@@ -77,7 +75,7 @@ export function bracketMarks(
   index: number,
   level: number,
   isLabelHere: boolean,
-  bars: readonly Omit<BarLayout, 'marks'>[],
+  bars: readonly BarFrame[],
   rows: SystemRows,
   spacePx: number,
 ): readonly Mark[] {
@@ -97,7 +95,9 @@ export function bracketMarks(
   if (!isOpenRight) marks.push(rectangleMark(name, { left: right - thickness, right, top, bottom }))
   const face = 'AlegreyaItalic'
   const sizePx = letteringOf(spacePx).bracketPx
-  const text = isLabelHere ? ellipsise(bracket.label, face, sizePx, right - left) : ''
+  // Words that fit whole are said again on every system; shortened ones only where there is most room.
+  const whole = measureTextPx(bracket.label, face, sizePx) <= right - left ? bracket.label : ''
+  const text = isLabelHere ? ellipsise(bracket.label, face, sizePx, right - left) : whole
   if (text !== '')
     marks.push(
       textMark({ role: 'bracket-label', ink: 'quiet', group }, text, (left + right) / 2, row.baselinePx, {

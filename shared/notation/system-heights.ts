@@ -87,7 +87,7 @@ export function arrangeRows(content: SystemContent): SystemRows {
   if (hasLabels) y = labelBaselinePx + label.below
   const text = textHeightPx('b', 'AlegreyaItalic', lettering.bracketPx)
   const brackets = Array.from({ length: bracketLevels }, () => {
-    const linePx = Math.round(y + (0.4 + BRACKET_HOOK_STAFF_SPACES) * spacePx)
+    const linePx = Math.round(y + (0.6 + BRACKET_HOOK_STAFF_SPACES) * spacePx)
     const baselinePx = Math.round(linePx + 0.1 * spacePx + text.above)
     y = baselinePx + text.below
     return { linePx, baselinePx }
