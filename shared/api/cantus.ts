@@ -21,6 +21,7 @@ export const cantusBodySchema = z.strictObject({
   /** Course it is shared with, or null to keep it to oneself. */
   courseId: idSchema.nullable().default(null),
 })
+export type CantusBody = z.output<typeof cantusBodySchema>
 
 export const cantusSchema = z.strictObject({
   id: idSchema,
