@@ -31,7 +31,7 @@ function openAudio(): Audio | null {
 function createAudio(): Audio | null {
   if (typeof AudioContext === 'undefined') return null
   try {
-    const context = new AudioContext({ latencyHint: 'playback' })
+    const context = new AudioContext({ latencyHint: 'interactive' })
     const output = context.createGain()
     output.gain.value = gainOf(pageVolume.get())
     output.connect(context.destination)
