@@ -55,15 +55,18 @@ export function Dialog({
             {title}
           </Heading>
           {children}
-          {actions ? (
-            <View
-              style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small, justifyContent: 'flex-end' }}
-            >
-              {actions}
-            </View>
-          ) : null}
+          {actions ? <DialogActions>{actions}</DialogActions> : null}
         </View>
       ) : null}
     </dialog>
+  )
+}
+
+/** The buttons at a dialog's foot, the safe one first. */
+export function DialogActions({ children }: Readonly<{ children: ReactNode }>) {
+  return (
+    <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small, justifyContent: 'flex-end' }}>
+      {children}
+    </View>
   )
 }

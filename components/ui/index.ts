@@ -1,7 +1,7 @@
 export { Button, type ButtonKind, type ButtonProps } from './button'
 export { Choice, type Option } from './choice'
 export { CopyField } from './copy-field'
-export { Dialog } from './dialog'
+export { Dialog, DialogActions } from './dialog'
 export { Field, type FieldProps } from './field'
 export { Form } from './form'
 export { Heading } from './heading'

@@ -1,3 +1,4 @@
+import { courses } from './en/courses'
 import { people } from './en/people'
 import { account } from './en/account'
 import { entry } from './en/entry'
@@ -14,6 +15,7 @@ import { wall } from './en/wall'
 
 /** Every word of the interface, one typed table an area. */
 const EN = {
+  courses,
   people,
   account,
   entry,

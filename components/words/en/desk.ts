@@ -20,6 +20,8 @@ export const desk = {
     next: (bar: number) => `Bar ${bar} ›`,
     previousSpoken: (bar: number) => `Back to bar ${bar}`,
     nextSpoken: (bar: number) => `On to bar ${bar}`,
+    noneBefore: 'There is no bar before this one',
+    noneAfter: 'There is no bar after this one',
     noPrevious: '‹',
     noNext: '›',
   },
@@ -27,6 +29,7 @@ export const desk = {
   stop: 'Stop',
   hearHint: 'Plays on this device, quietly.',
   hearNothing: 'Nothing to hear yet',
+  hand: 'Hand',
   handUp: 'Raise hand',
   handDown: 'Lower hand',
   handIsUp: 'Your hand is up.',
@@ -37,7 +40,9 @@ export const desk = {
     degrees: 'Degrees',
     naming: 'Name the pitches by',
     accidentals: 'All accidentals',
+    accidentalsHint: 'Every note also with a flat and a sharp.',
     erase: 'Take the note away',
+    eraseShort: 'Take away',
     degreeSpoken: (degree: number, alteration: number) =>
       alteration === 0
         ? `degree ${degree}`
@@ -48,6 +53,7 @@ export const desk = {
     crossing: 'voices cross',
   },
   rubric: {
+    label: 'Findings and the task',
     none: 'No finding on what you have written.',
     hidden: 'The teacher keeps the findings back for now.',
     empty: (bars: readonly number[]) => `Choose a pitch for ${lesson.barsInSentence(bars)}.`,
@@ -65,6 +71,14 @@ export const desk = {
   },
   earlier: (pitch: string) => `The room was cleared for another round. Before, you had ${pitch}.`,
   offerAgain: (pitch: string) => `Propose ${pitch} again`,
+  again: 'Propose it again',
+  against: (bar: number, cantus: string) => `Bar ${bar}, against ${cantus}`,
+  settings: {
+    open: 'Settings',
+    title: 'This device',
+    ground: 'Ground',
+    grounds: { system: 'as the device', light: 'light', dark: 'dark' },
+  },
   prepared: 'The lesson has not been opened yet. This page comes alive when it is.',
   notMember: 'You have no desk in this lesson. Join it with the syllables on the wall.',
   leave: 'Leave for the home page',
