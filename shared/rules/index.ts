@@ -16,6 +16,7 @@ export type {
 export { checkCantus, checkLine, createChecker, type Checker, type Proposal } from './checker'
 export { judgeExample, readExample, type ReadExample } from './example'
 export { readExercise, type WrittenExercise } from './exercise'
+export { findPreset, PRESETS } from './presets'
 export { type SetAside } from './reading'
 export { findRule, RULES } from './registry'
 export { ruleSetProblems, type RuleSetProblem } from './rule-set'

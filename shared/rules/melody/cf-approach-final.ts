@@ -4,8 +4,10 @@ import type { Rule } from '@/shared/rules/rule'
 import { stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** From which side the last note may be reached. */
-  direction: z.enum(['above', 'either']).default('either'),
+  direction: z
+    .enum(['above', 'either'])
+    .default('either')
+    .describe('From which side the last note may be reached.'),
 })
 type Params = z.infer<typeof params>
 

@@ -3,10 +3,8 @@ import { ALL_SPECIES, breachAt, pack } from '@/shared/rules/fold'
 import type { Moment, Rule, Voice } from '@/shared/rules/rule'
 
 const params = z.strictObject({
-  /** Fewest notes. */
-  least: z.int().min(3).max(40).default(8),
-  /** Most notes. */
-  most: z.int().min(3).max(40).default(16),
+  least: z.int().min(3).max(40).default(8).describe('Fewest notes.'),
+  most: z.int().min(3).max(40).default(16).describe('Most notes.'),
 })
 type Params = z.infer<typeof params>
 

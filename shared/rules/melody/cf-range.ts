@@ -6,10 +6,18 @@ import { stepsFrom } from '@/shared/theory/interval'
 import { nameSize } from '@/shared/theory/interval-name'
 
 const params = z.strictObject({
-  /** Widest span, as the number of the interval: 8 is an octave, 10 a tenth. */
-  most: z.int().min(3).max(22).default(10),
-  /** Span that taste prefers, reported as a remark; `null` for none. */
-  preferred: z.int().min(3).max(22).nullable().default(null),
+  most: z
+    .int()
+    .min(3)
+    .max(22)
+    .default(10)
+    .describe('Widest span, as the number of the interval: 8 is an octave, 10 a tenth.'),
+  preferred: z
+    .int()
+    .min(3)
+    .max(22)
+    .default(22)
+    .describe('Span that taste prefers; a wider one is told as a remark.'),
 })
 type Params = z.infer<typeof params>
 
@@ -32,10 +40,10 @@ export const cfRange: Rule<State, Params> = {
     const { low, high } = extremes
     const size = stepsFrom(low.note, high.note) + 1
     const isTooWide = size > most
-    if (!isTooWide && (preferred === null || size <= preferred || said === 1)) {
+    if (!isTooWide && (size <= preferred || said === 1)) {
       return goOn({ voice, extremes, said })
     }
-    const limit = nameSize((isTooWide ? most : (preferred as number)) - 1)
+    const limit = nameSize((isTooWide ? most : preferred) - 1)
     const code = isTooWide ? 'too-wide' : 'rather-wide'
     const breach = breachAt(voice, code, [low, high], { ...spanArgs(low, high), limit })
     return isTooWide

@@ -5,8 +5,7 @@ import { formatPitch, formatPitchClass } from '@/shared/theory/pitch'
 import { alterationInMode, degreeOf, isFinal } from '@/shared/theory/scale'
 
 const params = z.strictObject({
-  /** Whether the fifth degree will do for a beginning. */
-  allowDominant: z.boolean().default(false),
+  allowDominant: z.boolean().default(false).describe('Whether the fifth degree will do for a beginning.'),
 })
 type Params = z.infer<typeof params>
 

@@ -15,10 +15,14 @@ import { comparePitches } from '@/shared/theory/pitch'
 import { directionFrom, type Direction } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /**
-   * Most turns on neighbouring notes. No published number; Fux's canti firmi have at most four, so the fifth is told.
-   */
-  turns: z.int().min(2).max(12).default(4),
+  turns: z
+    .int()
+    .min(2)
+    .max(12)
+    .default(4)
+    .describe(
+      'Most turns on neighbouring notes. No published number; Fux’s canti firmi have at most four, so the fifth is told.',
+    ),
 })
 type Params = z.infer<typeof params>
 

@@ -13,8 +13,12 @@ import type { Breach, Rule, Voice } from '@/shared/rules/rule'
 import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Diminished leaps: never; the fifth, when the next note steps back inside it; any, on the same condition. */
-  diminished: z.enum(['never', 'fifth-turned-back', 'turned-back']).default('never'),
+  diminished: z
+    .enum(['never', 'fifth-turned-back', 'turned-back'])
+    .default('never')
+    .describe(
+      'Diminished leaps: never; the fifth, when the next note steps back inside it; any, on the same condition.',
+    ),
 })
 type Params = z.infer<typeof params>
 

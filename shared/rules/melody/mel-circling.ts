@@ -14,8 +14,14 @@ import { stepsFrom } from '@/shared/theory/interval'
 import { formatPitch, isSamePitch } from '@/shared/theory/pitch'
 
 const params = z.strictObject({
-  /** How often the line may strike one note, leaving it by step and coming straight back, before it is told. */
-  strikes: z.int().min(2).max(6).default(3),
+  strikes: z
+    .int()
+    .min(2)
+    .max(6)
+    .default(3)
+    .describe(
+      'How often the line may strike one note, leaving it by step and coming straight back, before it is told.',
+    ),
 })
 type Params = z.infer<typeof params>
 

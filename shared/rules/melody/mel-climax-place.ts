@@ -13,8 +13,10 @@ import type { Rule, Voice } from '@/shared/rules/rule'
 import { comparePitches, formatPitch } from '@/shared/theory/pitch'
 
 const params = z.strictObject({
-  /** Whether the peak may stand in the last bar but one. */
-  allowPenultimate: z.boolean().default(false),
+  allowPenultimate: z
+    .boolean()
+    .default(false)
+    .describe('Whether the peak may stand in the last bar but one.'),
 })
 type Params = z.infer<typeof params>
 

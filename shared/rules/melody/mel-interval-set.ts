@@ -4,16 +4,14 @@ import type { Rule } from '@/shared/rules/rule'
 import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /**
-   * `strict`: seconds, thirds, fourth, fifth and octave, and the minor sixth upward. `consonances`: seconds and every
-   * consonant leap, both sixths both ways. `no-major-sixth`: as `consonances` without the major sixth. `broad`:
-   * everything but sevenths, what is wider than an octave, and what is augmented or chromatic.
-   */
-  set: z.enum(['strict', 'consonances', 'no-major-sixth', 'broad']).default('strict'),
-  /** Whether the set also holds the diminished fifth. */
-  diminishedFifth: z.boolean().default(false),
-  /** Leaves sixths to the rule that speaks of sixths. */
-  leaveSixths: z.boolean().default(false),
+  set: z
+    .enum(['strict', 'consonances', 'no-major-sixth', 'broad'])
+    .default('strict')
+    .describe(
+      'strict: seconds, thirds, fourth, fifth and octave, and the minor sixth upward. consonances: seconds and every consonant leap, both sixths both ways. no-major-sixth: as consonances without the major sixth. broad: everything but sevenths, what is wider than an octave, and what is augmented or chromatic.',
+    ),
+  diminishedFifth: z.boolean().default(false).describe('Whether the set also holds the diminished fifth.'),
+  leaveSixths: z.boolean().default(false).describe('Leaves sixths to the rule that speaks of sixths.'),
 })
 type Params = z.infer<typeof params>
 

@@ -16,8 +16,10 @@ import { formatPitch, isSamePitch } from '@/shared/theory/pitch'
 import { isFinal, isLeadingTone } from '@/shared/theory/scale'
 
 const params = z.strictObject({
-  /** Lets the leading tone go on down when the line has come down to it from the final. */
-  excuseDescent: z.boolean().default(false),
+  excuseDescent: z
+    .boolean()
+    .default(false)
+    .describe('Lets the leading tone go on down when the line has come down to it from the final.'),
 })
 type Params = z.infer<typeof params>
 

@@ -4,10 +4,16 @@ import type { Rule } from '@/shared/rules/rule'
 import { directionFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Smallest leap that wants to be prepared, as the number of the interval: 5 is a fifth. */
-  threshold: z.int().min(3).max(8).default(5),
-  /** What prepares it, in the opposite direction: any motion, or a step. */
-  by: z.enum(['opposite', 'step']).default('opposite'),
+  threshold: z
+    .int()
+    .min(3)
+    .max(8)
+    .default(5)
+    .describe('Smallest leap that wants to be prepared, as the number of the interval: 5 is a fifth.'),
+  by: z
+    .enum(['opposite', 'step'])
+    .default('opposite')
+    .describe('What prepares it, in the opposite direction: any motion, or a step.'),
 })
 type Params = z.infer<typeof params>
 

@@ -4,12 +4,20 @@ import type { Rule } from '@/shared/rules/rule'
 import { directionFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Smallest leap that wants an answer, as the number of the interval: 4 is a fourth. */
-  threshold: z.int().min(3).max(8).default(5),
-  /** What answers it, always in the opposite direction: a step; a step or a third; any motion. */
-  answer: z.enum(['step', 'step-or-third', 'opposite']).default('opposite'),
-  /** Excuses a leap into the last note but one, whose answer is the close. */
-  excusePenultimate: z.boolean().default(false),
+  threshold: z
+    .int()
+    .min(3)
+    .max(8)
+    .default(5)
+    .describe('Smallest leap that wants an answer, as the number of the interval: 4 is a fourth.'),
+  answer: z
+    .enum(['step', 'step-or-third', 'opposite'])
+    .default('opposite')
+    .describe('What answers it, always in the opposite direction: a step; a step or a third; any motion.'),
+  excusePenultimate: z
+    .boolean()
+    .default(false)
+    .describe('Excuses a leap into the last note but one, whose answer is the close.'),
 })
 type Params = z.infer<typeof params>
 

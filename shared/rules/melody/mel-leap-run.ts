@@ -13,10 +13,8 @@ import type { Rule, Voice } from '@/shared/rules/rule'
 import { directionFrom, stepsFrom, type Direction } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Most leaps in a row. */
-  most: z.int().min(1).max(8).default(2),
-  /** Whether only leaps in one direction count together. */
-  sameDirection: z.boolean().default(false),
+  most: z.int().min(1).max(8).default(2).describe('Most leaps in a row.'),
+  sameDirection: z.boolean().default(false).describe('Whether only leaps in one direction count together.'),
 })
 type Params = z.infer<typeof params>
 

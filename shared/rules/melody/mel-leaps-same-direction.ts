@@ -15,11 +15,12 @@ import { directionFrom, semitonesFrom, stepsFrom } from '@/shared/theory/interva
 import { formatPitch } from '@/shared/theory/pitch'
 
 const params = z.strictObject({
-  /**
-   * When two leaps may go the same way: never; when the three notes spell a major or minor triad; when both are thirds
-   * or fourths; when both are minor thirds, or both fourths with a step back after them.
-   */
-  allow: z.enum(['never', 'triad', 'small', 'minor-thirds-or-fourths']).default('never'),
+  allow: z
+    .enum(['never', 'triad', 'small', 'minor-thirds-or-fourths'])
+    .default('never')
+    .describe(
+      'When two leaps may go the same way: never; when the three notes spell a major or minor triad; when both are thirds or fourths; when both are minor thirds, or both fourths with a step back after them.',
+    ),
 })
 type Params = z.infer<typeof params>
 

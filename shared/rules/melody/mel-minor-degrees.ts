@@ -16,8 +16,12 @@ import { formatPitch, isSamePitch } from '@/shared/theory/pitch'
 import { alterationInMode, degreeOf, isRaisedSeventh } from '@/shared/theory/scale'
 
 const params = z.strictObject({
-  /** Raised degrees: only for the close, the seventh just before the last note; or wherever they rise by step. */
-  where: z.enum(['penultimate', 'rising']).default('penultimate'),
+  where: z
+    .enum(['penultimate', 'rising'])
+    .default('penultimate')
+    .describe(
+      'Raised degrees: only for the close, the seventh just before the last note; or wherever they rise by step.',
+    ),
 })
 type Params = z.infer<typeof params>
 

@@ -4,8 +4,7 @@ import type { Rule, Voice } from '@/shared/rules/rule'
 import { isSamePitch } from '@/shared/theory/pitch'
 
 const params = z.strictObject({
-  /** Notes that make a figure. */
-  notes: z.int().min(3).max(4).default(3),
+  notes: z.int().min(3).max(4).default(3).describe('Notes that make a figure.'),
 })
 type Params = z.infer<typeof params>
 

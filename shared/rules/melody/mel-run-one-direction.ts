@@ -13,8 +13,14 @@ import type { Rule, Voice } from '@/shared/rules/rule'
 import { directionFrom, type Direction } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Most notes in one direction, the first included. No published number; six is this catalogue's proposal. */
-  most: z.int().min(3).max(16).default(6),
+  most: z
+    .int()
+    .min(3)
+    .max(16)
+    .default(6)
+    .describe(
+      'Most notes in one direction, the first included. No published number; six is this catalogue’s proposal.',
+    ),
 })
 type Params = z.infer<typeof params>
 

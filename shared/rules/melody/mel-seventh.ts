@@ -4,8 +4,10 @@ import type { Rule } from '@/shared/rules/rule'
 import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Whether a minor seventh may be leapt within one bar, over an unchanged cantus note. */
-  minorInsideBar: z.boolean().default(false),
+  minorInsideBar: z
+    .boolean()
+    .default(false)
+    .describe('Whether a minor seventh may be leapt within one bar, over an unchanged cantus note.'),
 })
 type Params = z.infer<typeof params>
 

@@ -14,11 +14,12 @@ import type { Moment, Rule } from '@/shared/rules/rule'
 import { comparePitches, formatPitch } from '@/shared/theory/pitch'
 
 const params = z.strictObject({
-  /**
-   * Which extreme sounds once: the highest note; the highest or, in a line below the cantus, the lowest instead; either
-   * in any line; both.
-   */
-  extreme: z.enum(['high', 'low-below', 'either', 'both']).default('high'),
+  extreme: z
+    .enum(['high', 'low-below', 'either', 'both'])
+    .default('high')
+    .describe(
+      'Which extreme sounds once: the highest note; the highest or, in a line below the cantus, the lowest instead; either in any line; both.',
+    ),
 })
 type Params = z.infer<typeof params>
 

@@ -4,10 +4,11 @@ import type { Rule } from '@/shared/rules/rule'
 import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Whether a minor sixth may fall. It may always rise. */
-  minorDown: z.boolean().default(false),
-  /** Major sixths: never; inside a bar, and there as a remark; inside a bar; anywhere. */
-  major: z.enum(['no', 'inside-bar-as-remark', 'inside-bar', 'yes']).default('no'),
+  minorDown: z.boolean().default(false).describe('Whether a minor sixth may fall. It may always rise.'),
+  major: z
+    .enum(['no', 'inside-bar-as-remark', 'inside-bar', 'yes'])
+    .default('no')
+    .describe('Major sixths: never; inside a bar, and there as a remark; inside a bar; anywhere.'),
 })
 type Params = z.infer<typeof params>
 

@@ -13,8 +13,7 @@ import type { Moment, Rule, Voice } from '@/shared/rules/rule'
 import { stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Fewest leaps. */
-  least: z.int().min(1).max(10).default(1),
+  least: z.int().min(1).max(10).default(1).describe('Fewest leaps.'),
 })
 type Params = z.infer<typeof params>
 

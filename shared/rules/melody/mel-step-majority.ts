@@ -13,10 +13,8 @@ import type { Rule, Voice } from '@/shared/rules/rule'
 import { stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Share of steps among all moves, in per cent. */
-  percent: z.int().min(1).max(100).default(50),
-  /** Whether just that share is enough, or more is wanted. */
-  isInclusive: z.boolean().default(false),
+  percent: z.int().min(1).max(100).default(50).describe('Share of steps among all moves, in per cent.'),
+  isInclusive: z.boolean().default(false).describe('Whether just that share is enough, or more is wanted.'),
 })
 type Params = z.infer<typeof params>
 

@@ -5,8 +5,7 @@ import type { Rule, Voice } from '@/shared/rules/rule'
 import { stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Most notes of one triad in a row by leap. */
-  most: z.union([z.literal(2), z.literal(3)]).default(2),
+  most: z.int().min(2).max(3).default(2).describe('Most notes of one triad in a row by leap.'),
 })
 type Params = z.infer<typeof params>
 

@@ -5,8 +5,10 @@ import type { Rule } from '@/shared/rules/rule'
 import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** The diminished fifth: let pass, reported as a remark, or treated as the augmented fourth is. */
-  diminishedFifth: z.enum(['allow', 'remark', 'ban']).default('remark'),
+  diminishedFifth: z
+    .enum(['allow', 'remark', 'ban'])
+    .default('remark')
+    .describe('The diminished fifth: let pass, reported as a remark, or treated as the augmented fourth is.'),
 })
 type Params = z.infer<typeof params>
 

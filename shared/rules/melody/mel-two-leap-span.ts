@@ -4,8 +4,10 @@ import type { Rule } from '@/shared/rules/rule'
 import { directionFrom, semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 
 const params = z.strictObject({
-  /** Whether a rising fifth and a minor third on top of it may span a seventh. */
-  allowFifthThenThird: z.boolean().default(true),
+  allowFifthThenThird: z
+    .boolean()
+    .default(true)
+    .describe('Whether a rising fifth and a minor third on top of it may span a seventh.'),
 })
 type Params = z.infer<typeof params>
 

@@ -9,14 +9,18 @@ import { comparePitches, formatPitch, parsePitch, type Pitch } from '@/shared/th
 const pitchName = z.string().refine((name) => parsePitch(name).ok, 'Not a pitch, such as C4.')
 
 const params = z.strictObject({
-  /** Lowest and highest note of a line above the cantus. */
-  aboveLow: pitchName.default('C4'),
-  aboveHigh: pitchName.default('A5'),
-  /** Lowest and highest note of a line below the cantus. */
-  belowLow: pitchName.default('D2'),
-  belowHigh: pitchName.default('D4'),
-  /** Widest span of the whole line, as the number of the interval (10 a tenth); `null` for none. */
-  span: z.int().min(3).max(22).nullable().default(null),
+  aboveLow: pitchName.default('C4').describe('Lowest note of a line above the cantus.'),
+  aboveHigh: pitchName.default('A5').describe('Highest note of a line above the cantus.'),
+  belowLow: pitchName.default('D2').describe('Lowest note of a line below the cantus.'),
+  belowHigh: pitchName.default('D4').describe('Highest note of a line below the cantus.'),
+  span: z
+    .int()
+    .min(3)
+    .max(22)
+    .default(22)
+    .describe(
+      'Widest span of the whole line, as the number of the interval: 10 is a tenth; 22, three octaves, never binds.',
+    ),
 })
 type Params = z.infer<typeof params>
 
@@ -24,7 +28,6 @@ type State = Readonly<{
   frame: Frame
   low: Pitch
   high: Pitch
-  /** Kept only where a span is asked for. */
   extremes: Extremes | null
   isTooWide: boolean
 }>
@@ -66,14 +69,14 @@ export const voiceCompass: Rule<State, Params> = {
             high: formatPitch(high),
           })
         : null
-    if (span === null || isTooWide) return { state, breach: outside }
+    if (isTooWide) return { state, breach: outside }
     const extremes = widen(state.extremes, moment)
     // One breach a moment: where this note lies outside as well, the span is told at the next note or at the end.
     const wide = outside === null ? judgeSpan(frame, extremes, span) : null
     return { state: { frame, low, high, extremes, isTooWide: wide !== null }, breach: outside ?? wide }
   },
   finish: ({ frame, extremes, isTooWide }, { span }) =>
-    span === null || isTooWide || extremes === null ? null : judgeSpan(frame, extremes, span),
+    isTooWide || extremes === null ? null : judgeSpan(frame, extremes, span),
   key: ({ extremes, isTooWide }) => (isTooWide ? 1 : 2 + packExtremes(extremes)),
   explain: {
     title: 'A singable compass',
