@@ -35,7 +35,7 @@ function tableOf(path) {
   const known = CHARACTERS.filter((character) => font.nominalGlyph(character.codePointAt(0)))
   const extents = (text) => font.glyphExtents(shaped(text).glyph)
   return {
-    digitTop: thousandths(extents('8').yBearing),
+    digitTop: thousandths(Math.max(...[...'0123456789'].map((digit) => extents(digit).yBearing))),
     ascent: thousandths(Math.max(...[...'lbhJÅ'].map((letter) => extents(letter).yBearing))),
     descent: thousandths(Math.max(...[...'gpqyj,'].map((letter) => -(extents(letter).yBearing + extents(letter).height)))),
     characters: known.join(''),

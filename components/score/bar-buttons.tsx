@@ -81,6 +81,7 @@ export const BarButtons = memo(function BarButtons({ layout, bars, handBar, onPr
 })
 
 const styles = StyleSheet.create({
-  bar: { position: 'absolute' },
+  // The ring stays inside, as the score is cut at its edges.
+  bar: { position: 'absolute', outlineOffset: -3 },
   silent: { pointerEvents: 'none' },
 })

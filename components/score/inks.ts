@@ -29,3 +29,13 @@ export function inkOf(ink: Ink, colors: Pigments): Pigmented {
 }
 
 export const familyOf = (face: FaceName): string => fonts[face]
+
+/** Colour of a ground under a thin wash of another: `#F2F4F0` under a tenth of minium. Both are `#RRGGBB`. */
+export function washed(ground: string, wash: string, opacity: number): string {
+  const channel = (from: number): string => {
+    const [below, above] = [ground, wash].map((hex) => Number.parseInt(hex.slice(from, from + 2), 16))
+    const mixed = Math.round((below ?? 0) * (1 - opacity) + (above ?? 0) * opacity)
+    return mixed.toString(16).padStart(2, '0')
+  }
+  return `#${channel(1)}${channel(3)}${channel(5)}`
+}

@@ -32,8 +32,8 @@ function PaintedShape({
   )
 }
 
-/** Lettering with a rim of the ground, so that a staff line behind a number does not cross it. */
-const RIM = { paintOrder: 'stroke', strokeLinejoin: 'round', fontVariantNumeric: 'lining-nums' }
+const LETTERING = { fontVariantNumeric: 'lining-nums' }
+const RIMMED = { ...LETTERING, paintOrder: 'stroke', strokeLinejoin: 'round' }
 
 function PaintedWords({
   words,
@@ -47,10 +47,10 @@ function PaintedWords({
       fill={inkOf(words.ink, colors).color}
       fontFamily={familyOf(words.face)}
       fontSize={words.sizePx}
-      stroke={ground}
-      strokeWidth={words.sizePx / 5}
+      stroke={words.hasRim ? ground : 'none'}
+      strokeWidth={words.sizePx / 4}
       // Web styles that the native types do not know.
-      {...({ style: RIM } as object)}
+      {...({ style: words.hasRim ? RIMMED : LETTERING } as object)}
     >
       {words.text}
     </Text>

@@ -90,7 +90,8 @@ export function Score(props: ScoreProps) {
   )
   const isStrip = size === 'strip'
   const followed = playhead?.bar ?? handBar
-  const offsetPx = isStrip ? stripOffsetPx(layout, followed, widthPx) : 0
+  const strip = isStrip ? layout.systems[0] : undefined
+  const offsetPx = strip ? stripOffsetPx(strip, followed, widthPx) : 0
   const isPressable = onPressBar !== undefined || onPressStaff !== undefined
 
   return (

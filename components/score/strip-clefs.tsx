@@ -7,6 +7,19 @@ import type { ScoreLayout } from '@/shared/notation/score-layout'
 import { staffLineMarks } from '@/shared/notation/system-marks'
 import { PaintedMarks } from './painted-marks'
 
+/** Bars go out of sight softly beside the clefs. */
+const fadeFrom = (ground: string, leftPx: number, widthPx: number): object => ({
+  style: {
+    position: 'absolute',
+    left: leftPx,
+    top: 0,
+    bottom: 0,
+    width: widthPx,
+    // A web style that the native types do not know.
+    backgroundImage: `linear-gradient(to right, ${ground}, ${ground}00)`,
+  },
+})
+
 /** Clefs and signature of a strip, which stay while the bars pass under them. */
 export const StripClefs = memo(function StripClefs({
   layout,
@@ -23,10 +36,18 @@ export const StripClefs = memo(function StripClefs({
   )
   if (!system) return null
   return (
-    <View
-      aria-hidden
-      style={{ position: 'absolute', pointerEvents: 'none', left: 0, top: 0, backgroundColor: ground }}
-    >
+    <View aria-hidden style={{ position: 'absolute', pointerEvents: 'none', left: 0, top: 0 }}>
+      <View
+        style={{
+          position: 'absolute',
+          left: 0,
+          top: 0,
+          bottom: 0,
+          width: system.prefixPx,
+          backgroundColor: ground,
+        }}
+      />
+      <View {...fadeFrom(ground, system.prefixPx, layout.spacePx)} />
       <Svg width={system.prefixPx} height={layout.heightPx} style={{ display: 'flex' }}>
         <PaintedMarks painted={painted} colors={colors} ground={ground} />
       </Svg>

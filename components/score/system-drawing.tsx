@@ -3,12 +3,15 @@ import { G, Rect } from 'react-native-svg'
 import { MOTION_MS, useTheme, type Pigments } from '@/components/theme'
 import { paintMarks } from '@/shared/notation/paint-marks'
 import type { BarLayout, SystemLayout } from '@/shared/notation/score-layout'
-import { inkOf } from './inks'
+import { inkOf, washed } from './inks'
 import { PaintedMarks } from './painted-marks'
 import { easedTransform } from './eased'
 
 /** Bars a finding speaks of, tinted while a reader points at it. */
 export type Highlight = Readonly<{ fromBar: number; toBar: number; tone: 'breach' | 'remark' | 'quiet' }>
+
+/** How much of its tone lies over the bars a finding speaks of. */
+const WASH = 0.12
 
 type BarProps = Readonly<{ bar: BarLayout; colors: Pigments; ground: string; easeMs: number }>
 
@@ -39,38 +42,33 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
   const lines = useMemo(() => paintMarks(system.staffLines), [system.staffLines])
   const prefix = useMemo(() => paintMarks(system.prefix), [system.prefix])
   const spans = useMemo(() => paintMarks(system.spans), [system.spans])
+  const isLit = ({ number }: BarLayout): boolean =>
+    highlight !== null && number >= highlight.fromBar && number <= highlight.toBar
+  const groundOf = (bar: BarLayout): string => {
+    const under = bar.number === handBar ? colors.leaf : ground
+    return highlight !== null && isLit(bar) ? washed(under, inkOf(highlight.tone, colors).color, WASH) : under
+  }
   const hand = system.bars.find(({ number }) => number === handBar)
-  const lit = highlight
-    ? system.bars.filter(({ number }) => number >= highlight.fromBar && number <= highlight.toBar)
-    : []
   const top = system.stavesBox.top - spacePx
   return (
     <G x={system.xPx} y={system.yPx}>
       {hand && (
         <Rect x={hand.xPx + 1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
       )}
-      {highlight &&
-        lit.map((bar) => (
-          <Rect
-            key={bar.number}
-            x={bar.xPx}
-            y={top}
-            width={bar.widthPx}
-            height={system.stavesBox.bottom + spacePx - top}
-            fill={inkOf(highlight.tone, colors).color}
-            fillOpacity={0.12}
-          />
-        ))}
+      {system.bars.filter(isLit).map((bar) => (
+        <Rect
+          key={bar.number}
+          x={bar.xPx}
+          y={top}
+          width={bar.widthPx}
+          height={system.stavesBox.bottom + spacePx - top}
+          fill={groundOf(bar)}
+        />
+      ))}
       <PaintedMarks painted={lines} colors={colors} ground={ground} />
       {hasPrefix && <PaintedMarks painted={prefix} colors={colors} ground={ground} />}
       {system.bars.map((bar) => (
-        <BarDrawing
-          key={bar.number}
-          bar={bar}
-          colors={colors}
-          ground={bar === hand ? colors.leaf : ground}
-          easeMs={easeMs}
-        />
+        <BarDrawing key={bar.number} bar={bar} colors={colors} ground={groundOf(bar)} easeMs={easeMs} />
       ))}
       <PaintedMarks painted={spans} colors={colors} ground={ground} />
     </G>

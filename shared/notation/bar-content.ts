@@ -136,7 +136,7 @@ function columnOf(entries: readonly Entry[], clearancePx: number): readonly Mark
 /** The line's staff in a bar: the agreed line and the proposals, moment by moment from left to right. */
 export function lineContent(bar: ScoreBar, signature: number, setting: StaffSetting): StaffContent {
   const entries = entriesOf(bar, signature, setting)
-  const clearancePx = 0.1 * setting.spacePx
+  const clearancePx = 0.08 * setting.spacePx
   const marks: Mark[] = []
   for (const tick of [...new Set(entries.map((entry) => entry.tick))].sort((a, b) => a - b)) {
     const column = columnOf(

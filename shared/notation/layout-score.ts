@@ -14,7 +14,8 @@ import type {
   Voice,
 } from '@/shared/notation/score-layout'
 import { SIZE_FACTS } from '@/shared/notation/sizes'
-import { bracketMarks, findingMarks, segmentOn } from '@/shared/notation/span-marks'
+import { bracketMarks, findingMarks, segmentOn, type ShownPart } from '@/shared/notation/span-marks'
+import { stripOffsetPx } from '@/shared/notation/strip-offset'
 import { endBarlineMarks, prefixMarks, prefixWidthPx, staffLineMarks } from '@/shared/notation/system-marks'
 import { arrangeRows, type SystemRows } from '@/shared/notation/system-heights'
 import type { Clef } from '@/shared/theory/clef'
@@ -88,7 +89,13 @@ const isReleased = (bar: MeasuredBar | undefined): boolean =>
   bar !== undefined && bar.bar.state === 'released' && !bar.isFolded
 
 /** A system with its bars spaced, before any mark is made. */
-type Frame = Readonly<{ from: number; to: number; widthPx: number; bars: readonly BarFrame[] }>
+type Frame = Readonly<{
+  from: number
+  to: number
+  prefixPx: number
+  widthPx: number
+  bars: readonly BarFrame[]
+}>
 
 function frameSystem(setting: Setting, from: number, to: number): Frame {
   const { prefixPx, measured } = setting
@@ -102,7 +109,7 @@ function frameSystem(setting: Setting, from: number, to: number): Frame {
     xPx += widthPx
     return { index: from + i, number: bar.number, isFolded, ...place }
   })
-  return { from, to, widthPx: xPx, bars: frames }
+  return { from, to, prefixPx, widthPx: xPx, bars: frames }
 }
 
 /** What spans bars, for the whole score: the level of each, and the system on which a bracket has its words. */
@@ -128,16 +135,24 @@ function arrangeSpans({ input }: Setting, frames: readonly Frame[]): Spans {
   }
 }
 
+/** What of a system is in view: all of it, or the window of a strip around the bar in hand. */
+function shownPart({ options, prefixPx }: Setting, frame: Frame): ShownPart {
+  if (options.size !== 'strip') return { leftPx: 0, rightPx: frame.widthPx }
+  const offsetPx = stripOffsetPx(frame, options.handBar ?? null, options.widthPx)
+  return { leftPx: offsetPx + prefixPx, rightPx: offsetPx + options.widthPx }
+}
+
 function layoutSystem(
   setting: Setting,
   frame: Frame,
   index: number,
   yPx: number,
-  levels: Spans,
+  spanning: Spans,
 ): SystemLayout {
   const { input, options, spacePx, prefixPx, measured } = setting
   const isMini = options.size === 'mini'
   const { from, to, widthPx, bars: frames } = frame
+  const shown = shownPart(setting, frame)
   const bars = measured.slice(from, to)
 
   const arcsHere = input.arcs.map((arc) => (isMini ? null : segmentOn(frames, arc)))
@@ -153,8 +168,8 @@ function layoutSystem(
       box: unite(bars.map((bar) => bar.content[voice].box)),
     })),
     hasLabels: !isMini && input.bars.some((bar) => bar.label !== null),
-    arcLevels: highest(levels.arcs, arcsHere),
-    bracketLevels: isMini ? 0 : Math.max(...levels.brackets.map((level) => level + 1), 0),
+    arcLevels: highest(spanning.arcs, arcsHere),
+    bracketLevels: isMini ? 0 : Math.max(...spanning.brackets.map((level) => level + 1), 0),
   })
 
   const placedBars = frames.map((frame, i): BarLayout => {
@@ -173,15 +188,18 @@ function layoutSystem(
   const spans: Mark[] = [
     ...(isMini ? [] : endBarlineMarks(rows.staves, widthPx, spacePx, to === measured.length)),
     ...input.arcs.flatMap((arc, i) =>
-      arcsHere[i] ? findingMarks(arc, levels.arcs[i] as number, frames, rows, spacePx) : [],
+      arcsHere[i] ? findingMarks(arc, spanning.arcs[i] as number, frames, rows, spacePx) : [],
     ),
     ...input.brackets.flatMap((bracket, i) =>
       bracketsHere[i]
         ? bracketMarks(
             bracket,
-            i,
-            levels.brackets[i] as number,
-            levels.labelSystems[i] === index,
+            {
+              index: i,
+              level: spanning.brackets[i] as number,
+              isLabelHere: spanning.labelSystems[i] === index,
+              shown,
+            },
             frames,
             rows,
             spacePx,

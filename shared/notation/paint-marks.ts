@@ -20,6 +20,8 @@ export type PaintedText = Readonly<{
   x: number
   y: number
   ink: Ink
+  /** Numbers among the staff lines have a rim of the ground, so that no line crosses them. */
+  hasRim: boolean
 }>
 
 export type Painted = PaintedPath | PaintedText
@@ -76,7 +78,16 @@ export function paintMarks(marks: readonly Mark[]): readonly Painted[] {
   for (const mark of marks) {
     if (mark.kind === 'text') {
       const { text, face, sizePx, ink } = mark
-      texts.push({ kind: 'text', text, face, sizePx, ink, x: round(mark.x), y: round(mark.y) })
+      texts.push({
+        kind: 'text',
+        text,
+        face,
+        sizePx,
+        ink,
+        hasRim: mark.role === 'count',
+        x: round(mark.x),
+        y: round(mark.y),
+      })
       continue
     }
     const paint = paintOf(mark)

@@ -46,7 +46,7 @@ export const SIZE_FACTS: Readonly<Record<ScoreSize, SizeFacts>> = {
     weights: { frozen: 4.4, plain: 5, released: 7.7 },
     maxStretch: 2.6,
     staffGap: 5.7,
-    spaceFor: (widthPx) => Math.round(within(6.8 + widthPx / 220, 8, 13)),
+    spaceFor: (widthPx) => Math.round(within(6.8 + widthPx / 220, 8, 16)),
     leastSpacePx: 6,
   },
   strip: {

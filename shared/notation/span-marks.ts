@@ -35,6 +35,9 @@ export function segmentOn(
   }
 }
 
+/** Words of a bracket keep this far from the edge of a strip's window, in staff spaces. */
+const LABEL_INSET = 0.4
+
 const axisOf = (bar: BarFrame): number => bar.xPx + bar.axisPx
 
 /** A finding over the staff: an arch from bar to bar (dashed for a remark), or a lozenge over its only bar. */
@@ -69,16 +72,20 @@ export function findingMarks(
   ]
 }
 
-/** A gesture under the staff: a bracket, open where it runs on, its words shortened to what it spans. */
+/** The stretch of a system that is in view, from its left edge. */
+export type ShownPart = Readonly<{ leftPx: number; rightPx: number }>
+
+type BracketPlace = Readonly<{ index: number; level: number; isLabelHere: boolean; shown: ShownPart }>
+
+/** A gesture under the staff: a bracket, open where it runs on, its words shortened to what it spans and what shows. */
 export function bracketMarks(
   bracket: ScoreBracket,
-  index: number,
-  level: number,
-  isLabelHere: boolean,
+  place: BracketPlace,
   bars: readonly BarFrame[],
   rows: SystemRows,
   spacePx: number,
 ): readonly Mark[] {
+  const { index, level, isLabelHere, shown } = place
   const segment = segmentOn(bars, bracket)
   const row = rows.brackets[level]
   if (!segment || !row) return []
@@ -95,16 +102,14 @@ export function bracketMarks(
   if (!isOpenRight) marks.push(rectangleMark(name, { left: right - thickness, right, top, bottom }))
   const face = 'AlegreyaItalic'
   const sizePx = letteringOf(spacePx).bracketPx
+  const isShown = right > shown.leftPx && left < shown.rightPx
+  const from = isShown ? Math.max(left, shown.leftPx + LABEL_INSET * spacePx) : left
+  const to = isShown ? Math.min(right, shown.rightPx - LABEL_INSET * spacePx) : right
   // Words that fit whole are said again on every system; shortened ones only where there is most room.
-  const whole = measureTextPx(bracket.label, face, sizePx) <= right - left ? bracket.label : ''
-  const text = isLabelHere ? ellipsise(bracket.label, face, sizePx, right - left) : whole
+  const whole = measureTextPx(bracket.label, face, sizePx) <= to - from ? bracket.label : ''
+  const text = isLabelHere ? ellipsise(bracket.label, face, sizePx, to - from) : whole
+  const label = { role: 'bracket-label', ink: 'quiet', group } as const
   if (text !== '')
-    marks.push(
-      textMark({ role: 'bracket-label', ink: 'quiet', group }, text, (left + right) / 2, row.baselinePx, {
-        face,
-        sizePx,
-        anchor: 'middle',
-      }),
-    )
+    marks.push(textMark(label, text, (from + to) / 2, row.baselinePx, { face, sizePx, anchor: 'middle' }))
   return marks
 }

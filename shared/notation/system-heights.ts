@@ -55,7 +55,9 @@ export function arrangeRows(content: SystemContent): SystemRows {
   const under = staves.map(({ box }) => Math.max(KEPT_UNDER_STAFF * spacePx, (box?.bottom ?? 0) - staffPx))
   const clefs = staves.map(({ clef }) => (isMini ? { over: 0, under: 0 } : clefReach(clef)))
 
-  const numberBaselinePx = isMini ? 0 : Math.ceil(textHeightPx('8', 'Alegreya', lettering.numberPx).above)
+  const numberBaselinePx = isMini
+    ? 0
+    : Math.ceil(0.2 * spacePx + textHeightPx('8', 'Alegreya', lettering.numberPx).above)
   const headLinePx = isMini ? 0 : Math.round(numberBaselinePx + 0.6 * spacePx)
   const headsPx = isMini ? 0 : headLinePx + (HOOK_STAFF_SPACES + 0.2) * spacePx
   const arcsPx = isMini ? 0 : Math.max(1, arcLevels) * ARC_LEVEL_STAFF_SPACES * spacePx

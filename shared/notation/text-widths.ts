@@ -12,7 +12,7 @@ export type FaceWidths = Readonly<{
 
 export const FACE_WIDTHS = {
   Alegreya: {
-    digitTop: 598,
+    digitTop: 631,
     ascent: 838,
     descent: 242,
     characters:
@@ -37,7 +37,7 @@ export const FACE_WIDTHS = {
     ],
   },
   AlegreyaItalic: {
-    digitTop: 598,
+    digitTop: 631,
     ascent: 838,
     descent: 241,
     characters:
@@ -62,7 +62,7 @@ export const FACE_WIDTHS = {
     ],
   },
   AlegreyaSans: {
-    digitTop: 592,
+    digitTop: 595,
     ascent: 880,
     descent: 194,
     characters:
@@ -87,7 +87,7 @@ export const FACE_WIDTHS = {
     ],
   },
   AlegreyaSansMedium: {
-    digitTop: 593,
+    digitTop: 595,
     ascent: 889,
     descent: 194,
     characters:

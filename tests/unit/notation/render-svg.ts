@@ -68,7 +68,7 @@ export function renderSvg(layout: ScoreLayout, ground: keyof typeof PIGMENTS): s
   const body = paintMarks(allMarks(layout)).map((painted) =>
     painted.kind === 'path'
       ? `<path d='${painted.d}' ${colour(painted.fill, 'fill')} ${colour(painted.stroke, 'stroke')} stroke-width='${painted.strokePx}' ${painted.isDashed ? `stroke-dasharray='${3 * painted.strokePx} ${2 * painted.strokePx}'` : ''}/>`
-      : `<text x='${painted.x}' y='${painted.y}' ${FACES[painted.face]} font-size='${painted.sizePx}' ${colour(painted.ink, 'fill')} stroke='${PIGMENTS[ground].vellum}' stroke-width='3' paint-order='stroke'>${escape(painted.text)}</text>`,
+      : `<text x='${painted.x}' y='${painted.y}' ${FACES[painted.face]} font-size='${painted.sizePx}' ${colour(painted.ink, 'fill')} stroke='${painted.hasRim ? PIGMENTS[ground].vellum : 'none'}' stroke-width='${painted.sizePx / 4}' paint-order='stroke'>${escape(painted.text)}</text>`,
   )
   const { widthPx, heightPx } = layout
   return `<svg xmlns='http://www.w3.org/2000/svg' width='${widthPx}' height='${heightPx}' style='font-variant-numeric:lining-nums;overflow:visible'>${body.join('')}</svg>`
