@@ -2,6 +2,7 @@ import { lesson } from './lesson'
 
 /** What is projected. */
 export const wall = {
+  position: { above: 'above', below: 'below' },
   joinBySyllables: 'Join, by the syllables',
   joinAt: (address: string) => `or at ${address}/join`,
   doorClosed: 'The door is closed',

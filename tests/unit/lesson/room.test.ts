@@ -36,7 +36,9 @@ const judge: Judge = {
 const OPEN: BarState = { state: 'released', setAside: false, round: 1 }
 
 /** The groups of a room whose members wrote these notes, in this order. */
-const room = (many: readonly Readonly<Record<number, string>>[], bars: readonly number[] = [6, 7]) => {
+type Written = Readonly<Record<number, string>>
+
+const room = (many: readonly Written[], bars: readonly number[] = [6, 7]) => {
   const chorus: Record<
     number,
     Record<string, { notes: { pitch: string; ticks: number }[]; round: number }>
@@ -50,7 +52,7 @@ const room = (many: readonly Readonly<Record<number, string>>[], bars: readonly 
 }
 
 describe('the room, grouped over a span', () => {
-  const members = [
+  const members: readonly Written[] = [
     { 6: 'C5', 7: 'C5' },
     { 6: 'C5', 7: 'E5' },
     { 6: 'C5', 7: 'C5' },
@@ -91,7 +93,7 @@ describe('the room, grouped over a span', () => {
 })
 
 describe('the room, read as lozenges and counts', () => {
-  const many = [
+  const many: readonly Written[] = [
     ...Array.from({ length: 9 }, () => ({ 6: 'C5', 7: 'E5' })),
     { 6: 'C5', 7: 'C5' },
     { 6: 'A4', 7: 'E5' },

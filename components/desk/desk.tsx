@@ -1,0 +1,165 @@
+import { useCallback, useMemo, useState } from 'react'
+import { View } from 'react-native'
+import { lineWith } from '@/components/lesson/line-with'
+import { PlayingScore } from '@/components/lesson/playing-score'
+import { ScoreText } from '@/components/lesson/score-text'
+import { speakScore } from '@/components/lesson/spoken'
+import { usePlayer, useStopOnLeave } from '@/components/sound'
+import { space, useTheme, useWidth } from '@/components/theme'
+import { Notice, Txt } from '@/components/ui'
+import { useWords } from '@/components/words'
+import type { BoardState, SheetState } from '@/shared/board'
+import { DEFAULT_TEMPO } from '@/shared/playback'
+import { formatPitch } from '@/shared/theory/pitch'
+import { DeskFooter } from './desk-footer'
+import { DeskHeader, type KeptState } from './desk-header'
+import { DeskLadder } from './desk-ladder'
+import { DeskRubric } from './desk-rubric'
+import { DeskSettings } from './desk-settings'
+import { useDesk, type SheetPen } from './use-desk'
+
+const RUBRIC_PX = 92
+const SIDE_PX = 400
+
+export type DeskProps = Readonly<{
+  title: string
+  board: BoardState
+  sheet: SheetState
+  pen: SheetPen
+  kept: KeptState
+  here: number | null
+  isOffline: boolean
+  isHandUp: boolean
+  onHand: () => void
+}>
+
+/** The student's desk: the score in a strip, the bar in hand, their own notes, what is said of them. */
+export function Desk(props: DeskProps) {
+  const { board, sheet, pen } = props
+  const words = useWords()
+  const { colors } = useTheme()
+  const { widthPx, isWide } = useWidth()
+  const player = usePlayer()
+  useStopOnLeave()
+  const model = useDesk(board, sheet, pen)
+  const [isSetting, setSetting] = useState(false)
+  const { view, desk, hand, pitches, take } = model
+
+  const read = useMemo(() => lineWith(view.line, desk.own), [view, desk])
+  const sentences = useMemo(() => speakScore(view, read, desk.findings, words), [view, read, desk, words])
+  const { play, strike } = player
+  const hear = useCallback(() => {
+    const { cantus } = view.written
+    const released = view.released
+    play({
+      score: { cantus, line: read, setAside: [...view.setAside] },
+      voices: 'both',
+      // The work in its surroundings: the open bars with one on either side, or all of it where none is open.
+      fromBar: released.length > 0 ? Math.max(1, (released[0] ?? 1) - 1) : 1,
+      toBar: released.length > 0 ? Math.min(view.barCount, (released.at(-1) ?? 1) + 1) : view.barCount,
+      tempo: DEFAULT_TEMPO,
+    })
+  }, [view, read, play])
+  const hearRung = useCallback(
+    (index: number) => {
+      const pitch = pitches[index]
+      if (pitch) strike(formatPitch(pitch))
+    },
+    [pitches, strike],
+  )
+  const isBarOpen = useCallback((bar: number) => desk.bars[bar - 1]?.kind === 'open', [desk])
+  const pressStaff = useCallback(
+    (bar: number, pitch: string) => {
+      take(bar)
+      model.propose(bar, pitch)
+    },
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- the model's other parts do not matter to a press
+    [take, model.propose],
+  )
+
+  const score = (
+    <PlayingScore
+      input={model.score}
+      size={isWide ? 'page' : 'strip'}
+      width={isWide ? widthPx - SIDE_PX - 2 * space.double : widthPx}
+      handBar={hand}
+      onPressBar={take}
+      onPressStaff={isWide ? pressStaff : undefined}
+      isBarOpen={isBarOpen}
+      accessibilityLabel={words.desk.scoreLabel(props.title)}
+    />
+  )
+  const rubric = (
+    <DeskRubric
+      findings={desk.findings}
+      hand={hand}
+      released={view.released}
+      hasWritten={Object.keys(desk.own).length > 0}
+      prompt={view.stage.prompt}
+      heightPx={isWide ? null : RUBRIC_PX}
+    />
+  )
+  const notices = (
+    <>
+      {props.isOffline ? <Notice kind="note" title={words.lesson.connection.offline} /> : null}
+      {player.problem ? <Notice kind="note" title={player.problem} /> : null}
+    </>
+  )
+  const ladder = <DeskLadder model={model} onHearRung={hearRung} onSettings={() => setSetting(true)} />
+  const footer = (
+    <DeskFooter
+      before={model.before}
+      after={model.after}
+      isPlaying={player.isPlaying}
+      isLoading={player.isLoading}
+      canHear
+      isHandUp={props.isHandUp}
+      canRaiseHand={!props.isOffline}
+      onHear={hear}
+      onStop={player.stop}
+      onStep={model.step}
+      onHand={props.onHand}
+    />
+  )
+
+  return (
+    <View role="main" id="page" style={{ height: (isWide ? '100dvh' : 'max(100dvh, 640px)') as never }}>
+      <DeskHeader released={view.released} kept={props.kept} here={props.here} />
+      <ScoreText title={words.desk.textTitle} sentences={sentences} />
+      {isWide ? (
+        <View style={{ flex: 1, flexDirection: 'row', minHeight: 0 }}>
+          <View style={{ flex: 1, minWidth: 0, overflow: 'auto' as never }}>
+            <View style={{ paddingHorizontal: space.double, paddingVertical: space.wide, gap: space.one }}>
+              <Txt kind="note" tone="lead">
+                {props.title}
+              </Txt>
+              {score}
+            </View>
+            {rubric}
+            {notices}
+          </View>
+          <View style={{ width: SIDE_PX, borderLeftWidth: 1, borderColor: colors.hairline }}>
+            {ladder}
+            {footer}
+          </View>
+        </View>
+      ) : (
+        <>
+          {score}
+          {rubric}
+          {notices}
+          {ladder}
+          {footer}
+        </>
+      )}
+      <DeskSettings
+        isOpen={isSetting}
+        onClose={() => setSetting(false)}
+        naming={model.naming}
+        onNaming={model.setNaming}
+        isChromatic={model.isChromatic}
+        onChromatic={model.setChromatic}
+      />
+    </View>
+  )
+}

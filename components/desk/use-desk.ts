@@ -1,0 +1,128 @@
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
+import { ladderPitches, rungOfLetter } from '@/components/ladder/rungs'
+import { nextReadBar } from '@/components/lesson/desk-bars'
+import { deskScoreOf } from '@/components/lesson/score-of'
+import { firstPitch } from '@/components/lesson/spoken'
+import { useLessonView } from '@/components/lesson/use-lesson-view'
+import { useWords } from '@/components/words'
+import type { BoardState, SheetState } from '@/shared/board'
+import type { BarNotes } from '@/shared/theory/note'
+import { comparePitches, parsePitch, type PitchName } from '@/shared/theory/pitch'
+import { barInHand, readDesk } from './desk-model'
+import { readLadder, wholeNote, type Naming } from './ladder-model'
+
+/** How the desk writes on the student's own sheet. */
+export type SheetPen = Readonly<{
+  write: (bar: number, notes: BarNotes, round: number) => void
+  erase: (bar: number) => void
+}>
+
+const NO_FINDINGS = [] as const
+
+/** All that a desk shows and does, each part made anew only when what it is made of changes. */
+export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
+  const words = useWords()
+  const { view, judge } = useLessonView(board)
+  const [chosen, setChosen] = useState<number | null>(null)
+  const [naming, setNaming] = useState<Naming>('letters')
+  const [isChromatic, setChromatic] = useState(false)
+
+  const desk = useMemo(() => readDesk(view, sheet, judge), [view, sheet, judge])
+  const hand = barInHand(desk.bars, chosen)
+  const bar = desk.bars[hand - 1]
+
+  // When the teacher opens other bars, a desk that holds a closed one takes up the work.
+  const releasedKey = view.released.join(',')
+  const latest = useRef(desk)
+  latest.current = desk
+  useEffect(() => {
+    setChosen((before) =>
+      before !== null && releasedKey !== '' && latest.current.bars[before - 1]?.kind !== 'open'
+        ? null
+        : before,
+    )
+  }, [releasedKey])
+
+  const score = useMemo(() => deskScoreOf(view, desk.own, desk.findings ?? NO_FINDINGS), [view, desk])
+
+  const written = firstPitch(desk.own[hand])
+  const pitches = useMemo(() => {
+    const ladder = ladderPitches(view.exercise, isChromatic)
+    // A note written on the staff, or with accidentals, keeps its rung.
+    const isMissing = written && !ladder.some((pitch) => comparePitches(pitch, written) === 0)
+    return isMissing ? [...ladder, written].sort((a, b) => comparePitches(b, a)) : ladder
+  }, [view.exercise, isChromatic, written])
+  const isOpen = bar?.kind === 'open'
+  const ladder = useMemo(
+    () =>
+      isOpen
+        ? readLadder(
+            { view, own: desk.own, bar: hand, pitches, judge, naming, isTold: view.stage.showsFindings },
+            words,
+          )
+        : null,
+    [isOpen, view, desk.own, hand, pitches, judge, naming, words],
+  )
+
+  const propose = useCallback(
+    (at: number, name: PitchName) => {
+      const pitch = parsePitch(name)
+      const state = view.bars[at]
+      if (pitch.ok && state) pen.write(at, wholeNote(pitch.value), state.round)
+    },
+    [view, pen],
+  )
+  const proposeRung = useCallback(
+    (index: number) => {
+      const pitch = pitches[index]
+      const state = view.bars[hand]
+      if (pitch && state) pen.write(hand, wholeNote(pitch), state.round)
+    },
+    [pitches, view, hand, pen],
+  )
+  const offerAgain = useCallback(
+    (at: number, notes: BarNotes) => {
+      const state = view.bars[at]
+      if (state) pen.write(at, notes, state.round)
+    },
+    [view, pen],
+  )
+  const erase = useCallback(() => pen.erase(hand), [pen, hand])
+  const step = useCallback(
+    (by: 1 | -1) => {
+      const next = nextReadBar(latest.current.bars, hand, by)
+      if (next !== null) setChosen(next)
+    },
+    [hand],
+  )
+  const letterRung = useCallback(
+    (letter: string, from: number) => rungOfLetter(pitches, letter, from),
+    [pitches],
+  )
+
+  return {
+    view,
+    judge,
+    desk,
+    score,
+    hand,
+    bar,
+    take: setChosen,
+    step,
+    before: nextReadBar(desk.bars, hand, -1),
+    after: nextReadBar(desk.bars, hand, 1),
+    pitches,
+    ladder,
+    letterRung,
+    propose,
+    proposeRung,
+    offerAgain,
+    erase,
+    naming,
+    setNaming,
+    isChromatic,
+    setChromatic,
+  }
+}
+
+export type DeskModel = ReturnType<typeof useDesk>
