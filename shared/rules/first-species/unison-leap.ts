@@ -62,12 +62,12 @@ export const unisonLeap: Rule<State, Params> = {
     disagreement:
       'One school turns back out of a unison; another, when the line came to it alone, lets it go on in the same direction.',
     right: {
-      cantus: 'D4 F4 E4 F4 E4 D4',
-      line: 'D5 A4 G4 F4 C#4 D4',
+      cantus: 'D4 F4 E4 D4',
+      line: 'D4 D4 C#4 D4',
+      position: 'below',
       mode: 'dorian',
       final: 'D',
-      breaches: [5],
-      params: { leave: 'any-step' },
+      breaches: [],
     },
     wrong: { cantus: 'D4 F4 E4 D4', line: 'D4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: {
