@@ -13,6 +13,13 @@ const LEFT_OUT = [
   // Schemas out of JSON Schema, and the compiler of validators, which a content security policy forbids anyway.
   /[\\/]zod[\\/]v4[\\/]classic[\\/]from-json-schema\.js$/,
   /[\\/]zod[\\/]v4[\\/]core[\\/]compile\.js$/,
+  // Navigators with headers, tabs and cards: here a route is a page, drawn in a `Slot`.
+  /[\\/]expo-router[\\/]build[\\/](stack[\\/]index|layouts[\\/]Tabs|layouts[\\/]experimental-stack[\\/]index(\.web)?)\.js$/,
+  /[\\/]react-navigation[\\/](native-stack|bottom-tabs)[\\/]views[\\/]\w+\.js$/,
+  /[\\/]expo-router[\\/]build[\\/]layouts[\\/]stack-utils[\\/]index\.js$/,
+  /[\\/]expo-router[\\/]build[\\/]views[\\/]Sitemap\.js$/,
+  // Lists that draw only what is in sight, which in a browser lose what is read aloud or searched for.
+  /[\\/]react-native-web[\\/]dist[\\/]exports[\\/](FlatList|SectionList|VirtualizedList)[\\/]index\.js$/,
 ]
 
 const resolveRequest = config.resolver.resolveRequest

@@ -43,10 +43,12 @@ export const findSideScroll = (page: Page): Promise<number> =>
 /** Controls that a finger would miss: smaller than `minPx` either way, and not a link within a sentence. */
 export const findSmallTargets = (page: Page, minPx: number): Promise<readonly string[]> =>
   page.evaluate((min) => {
-    const controls = document.querySelectorAll<HTMLElement>(
-      'button, [role="button"], [role="radio"], [role="checkbox"], [role="switch"], [role="tab"], input:not([type="hidden"]), select, textarea',
+    const controls = Array.from(
+      document.querySelectorAll<HTMLElement>(
+        'button, [role="button"], [role="radio"], [role="checkbox"], [role="switch"], [role="tab"], input:not([type="hidden"]), select, textarea',
+      ),
     )
-    return [...controls].flatMap((control) => {
+    return controls.flatMap((control) => {
       const label =
         control.closest('label') ?? (control.id ? document.querySelector(`label[for="${control.id}"]`) : null)
       const boxes = [control, label].flatMap((element) => (element ? [element.getBoundingClientRect()] : []))
