@@ -25,15 +25,19 @@ export default function Landing() {
           </View>
         }
       />
-      <Page
-        title={words.common.motto}
-        heading={words.entry.landing.heading}
-        size="display"
-        lede={words.entry.landing.lede}
-      >
+      <Page title={words.common.motto} heading={words.entry.landing.heading} size="display">
         <View style={{ gap: isWide ? space.triple : space.double }}>
-          <View style={{ maxWidth: 560 }}>
-            <JoinField />
+          <View
+            style={{ flexDirection: isWide ? 'row' : 'column', columnGap: space.triple, rowGap: space.wide }}
+          >
+            <View style={isWide ? { flex: 1, maxWidth: 720 } : null}>
+              <Txt kind={isWide ? 'title' : 'text'} face="sans" tone="lead">
+                {words.entry.landing.lede}
+              </Txt>
+            </View>
+            <View style={isWide ? { flex: 1, maxWidth: 620, marginLeft: 'auto' } : null}>
+              <JoinField />
+            </View>
           </View>
           <Bicinium />
           <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: space.one }}>

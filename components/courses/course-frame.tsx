@@ -62,7 +62,7 @@ export function CourseFrame({
           ))}
         </View>
       ) : null}
-      {children}
+      {course ? <View style={{ gap: space.one, marginTop: -space.one }}>{children}</View> : children}
     </Frame>
   )
 }

@@ -40,11 +40,13 @@ export function CoursePage({ me, courseId }: Readonly<{ me: Me; courseId: string
           {own && !own.isArchived ? (
             <>
               <Button
+                kind="quiet"
                 label={words.courses.course.rename}
                 hasPopup="dialog"
                 onPress={() => setAsking('name')}
               />
               <Button
+                kind="quiet"
                 label={words.courses.course.archive}
                 hasPopup="dialog"
                 onPress={() => setAsking('archive')}

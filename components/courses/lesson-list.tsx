@@ -43,7 +43,7 @@ export function LessonList({ course, mayLead }: Readonly<{ course: Course; mayLe
               {mayLead ? words.courses.course.noneTeacher : words.courses.course.noneStudent}
             </Empty>
           ) : (
-            <Rows label={words.courses.course.lessons}>
+            <Rows label={words.courses.course.lessons} isOpen>
               {[...lessons]
                 .sort((a, b) => ORDER[a.status] - ORDER[b.status] || timeOf(b).localeCompare(timeOf(a)))
                 .map((lesson) => (
@@ -106,15 +106,6 @@ function LessonRow({
     <Row
       side={
         <>
-          {mayLead && !isOpen ? (
-            <Button
-              kind="quiet"
-              label={words.removeLesson}
-              hint={words.removeLessonOf(lesson.title)}
-              hasPopup="dialog"
-              onPress={onRemove}
-            />
-          ) : null}
           {isOpen ? (
             <LinkButton kind="go" href={href} label={mayLead ? words.lead : words.enter} />
           ) : mayLead && !isArchived ? (
@@ -123,6 +114,15 @@ function LessonRow({
               hint={`${lesson.status === 'prepared' ? words.openIt : words.openAgain}: ${lesson.title}`}
               isBusy={isBusy}
               onPress={onOpen}
+            />
+          ) : null}
+          {mayLead && !isOpen ? (
+            <Button
+              kind="quiet"
+              label={words.removeLesson}
+              hint={words.removeLessonOf(lesson.title)}
+              hasPopup="dialog"
+              onPress={onRemove}
             />
           ) : null}
         </>

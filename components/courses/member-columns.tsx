@@ -72,6 +72,7 @@ export function memberColumns({
       cell: (member) =>
         member.userId === myId ? null : (
           <Button
+            kind="quiet"
             label={words.remove}
             hint={words.removeOf(member.name)}
             hasPopup="dialog"

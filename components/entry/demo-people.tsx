@@ -27,7 +27,7 @@ export function DemoPeople({
             key={person.email}
             side={
               <Button
-                label={person.role}
+                label={words.signIn.demoUse}
                 hint={words.signIn.demoFill(person.name)}
                 isOn={chosen === person.email}
                 onPress={() => onChoose(person.email, data.password)}
@@ -38,7 +38,7 @@ export function DemoPeople({
               <Name>{person.name}</Name>
             </Txt>
             <Txt kind="note" tone="lead">
-              {person.email}
+              {`${person.role}, ${person.email}`}
             </Txt>
           </Row>
         ))}

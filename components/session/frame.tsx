@@ -34,19 +34,32 @@ export function SiteHeader({ me, side }: Readonly<{ me: Me | null; side?: ReactN
         borderColor: colors.hairline,
       }}
     >
-      <View style={{ flexDirection: 'row', alignItems: 'center', gap: space.half }}>
-        <Lozenge />
+      <View style={{ justifyContent: 'center' }}>
         <LinkText
           href={me ? '/home' : '/'}
+          label={words.product}
           kind="title"
           tone="lampblack"
           style={{ textDecorationLine: 'none', paddingVertical: space.small }}
         >
-          {isWide || !me ? words.product : <span aria-label={words.product}>B</span>}
+          <Brand isShort={!isWide && me !== null} />
         </LinkText>
       </View>
       <View style={{ flexGrow: 1 }} />
       {me ? <SiteNav me={me} /> : side}
+    </View>
+  )
+}
+
+/** The lozenge and the name; where the places need the room, the lozenge alone, with the name for those who listen. */
+function Brand({ isShort }: Readonly<{ isShort: boolean }>) {
+  const words = useWords().common
+  return (
+    <View
+      style={{ flexDirection: 'row', alignItems: 'center', gap: space.half, minHeight: 36, minWidth: 28 }}
+    >
+      <Lozenge sizePx={isShort ? 16 : 12} />
+      {isShort ? <span className="unseen">{words.product}</span> : <Txt kind="title">{words.product}</Txt>}
     </View>
   )
 }

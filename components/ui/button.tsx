@@ -1,15 +1,6 @@
 import { useContext } from 'react'
 import { Pressable, Text, View } from 'react-native'
-import {
-  createStyles,
-  CORNER_PX,
-  fonts,
-  leading,
-  RULE_PX,
-  space,
-  TOUCH_TARGET_PX,
-  type,
-} from '@/components/theme'
+import { createStyles, CORNER_PX, fonts, leading, RULE_PX, space, useTarget, type } from '@/components/theme'
 import { FormContext } from './form'
 
 export type ButtonKind = 'plain' | 'go' | 'danger' | 'quiet'
@@ -47,6 +38,7 @@ export function Button({
 }: ButtonProps) {
   const form = useContext(FormContext)
   const styles = useButtonStyles()
+  const target = useTarget()
   const isOff = isDisabled || isBusy
   const ink =
     kind === 'go' || isOn
@@ -74,6 +66,7 @@ export function Button({
         const { hovered } = state as { hovered?: boolean }
         return [
           styles.box,
+          { minHeight: target.heightPx, minWidth: target.heightPx },
           kind === 'go' && styles.go,
           kind === 'danger' && styles.danger,
           kind === 'quiet' && styles.quiet,
@@ -85,7 +78,9 @@ export function Button({
         ]
       }}
     >
-      <Text style={[styles.label, ink]}>{label}</Text>
+      <Text style={[styles.label, { fontSize: type[target.kind], lineHeight: leading[target.kind] }, ink]}>
+        {label}
+      </Text>
       {isBusy ? <View style={[styles.busy, kind === 'go' ? styles.busyOnGround : null]} /> : null}
     </Pressable>
   )
@@ -93,8 +88,6 @@ export function Button({
 
 const useButtonStyles = createStyles((colors) => ({
   box: {
-    minHeight: TOUCH_TARGET_PX,
-    minWidth: TOUCH_TARGET_PX,
     paddingHorizontal: space.one - 2,
     paddingVertical: space.tiny,
     borderWidth: RULE_PX,
@@ -106,7 +99,7 @@ const useButtonStyles = createStyles((colors) => ({
     cursor: 'pointer',
   },
   wide: { alignSelf: 'stretch' },
-  go: { backgroundColor: colors.verdigris, borderColor: colors.verdigris },
+  go: { minWidth: 96, backgroundColor: colors.verdigris, borderColor: colors.verdigris },
   danger: { borderColor: colors.minium },
   quiet: { borderColor: 'transparent', paddingHorizontal: space.small },
   on: { backgroundColor: colors.azurite, borderColor: colors.azurite },
@@ -116,8 +109,6 @@ const useButtonStyles = createStyles((colors) => ({
   off: { opacity: 0.55, cursor: 'auto' },
   label: {
     fontFamily: fonts.AlegreyaSansMedium,
-    fontSize: type.text,
-    lineHeight: leading.text,
     textAlign: 'center',
     userSelect: 'none',
   },

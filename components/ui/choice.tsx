@@ -1,15 +1,6 @@
 import { useId } from 'react'
 import { View } from 'react-native'
-import {
-  CORNER_PX,
-  fonts,
-  leading,
-  RULE_PX,
-  space,
-  TOUCH_TARGET_PX,
-  type,
-  useTheme,
-} from '@/components/theme'
+import { CORNER_PX, fonts, leading, RULE_PX, space, type, useTarget, useTheme } from '@/components/theme'
 import { Lozenge } from './lozenge'
 import { Txt } from './txt'
 
@@ -34,6 +25,7 @@ export function Choice<Value extends string>({
   problem?: string | null
 }>) {
   const { colors } = useTheme()
+  const target = useTarget()
   const name = useId()
   return (
     <View role="radiogroup" aria-labelledby={`${name}-label`} style={{ gap: space.tiny + 1 }}>
@@ -56,7 +48,7 @@ export function Choice<Value extends string>({
                 alignItems: 'center',
                 justifyContent: 'center',
                 gap: space.small,
-                minHeight: TOUCH_TARGET_PX,
+                minHeight: target.heightPx,
                 padding: `0 ${space.one - 2}px`,
                 // Neighbours share an edge, so that they read as one control.
                 marginLeft: -RULE_PX,
@@ -74,7 +66,7 @@ export function Choice<Value extends string>({
                 zIndex: isOn ? 1 : 0,
                 background: isOn ? colors.leaf : 'transparent',
                 color: isOn ? colors.lampblack : colors.lead,
-                font: `${type.text}px/${leading.text}px ${isOn ? fonts.AlegreyaSansMedium : fonts.AlegreyaSans}`,
+                font: `${type[target.kind]}px/${leading[target.kind]}px ${isOn ? fonts.AlegreyaSansMedium : fonts.AlegreyaSans}`,
                 cursor: isDisabled ? 'auto' : 'pointer',
                 opacity: isDisabled ? 0.55 : 1,
               }}

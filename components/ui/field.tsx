@@ -8,6 +8,7 @@ import {
   space,
   TOUCH_TARGET_PX,
   type,
+  useTarget,
   useTheme,
 } from '@/components/theme'
 import { useWords } from '@/components/words'
@@ -52,6 +53,8 @@ export function Field(props: FieldProps) {
   const id = useId()
   const [isShown, setShown] = useState(false)
   const [isFocused, setFocused] = useState(false)
+  const { heightPx } = useTarget()
+  const fieldPx = heightPx + (props.isLarge ? 12 : 2)
   const about = problem || hint ? `${id}-about` : undefined
 
   const style: CSSProperties = {
@@ -64,11 +67,11 @@ export function Field(props: FieldProps) {
     backgroundColor: colors.leaf,
     border: `${RULE_PX}px solid ${problem ? colors.minium : isFocused ? colors.lampblack : colors.edge}`,
     borderRadius: CORNER_PX,
-    padding: `${(TOUCH_TARGET_PX - leading.text - 2 * RULE_PX) / 2}px ${space.half}px`,
+    padding: `${(fieldPx - (props.isLarge ? leading.large : leading.text) - 2 * RULE_PX) / 2}px ${space.half}px`,
     paddingRight: kind === 'password' ? 72 : space.half,
     width: '100%',
     minWidth: 0,
-    minHeight: TOUCH_TARGET_PX,
+    minHeight: fieldPx,
     margin: 0,
     resize: 'vertical',
     appearance: 'none',
@@ -142,7 +145,7 @@ export function Field(props: FieldProps) {
               position: 'absolute',
               right: 0,
               top: 0,
-              height: TOUCH_TARGET_PX,
+              height: fieldPx,
               minWidth: TOUCH_TARGET_PX,
               padding: `0 ${space.half}px`,
               border: 0,

@@ -1,16 +1,7 @@
 import { Link, type Href } from 'expo-router'
 import type { ReactNode } from 'react'
 import { View, type StyleProp, type TextStyle } from 'react-native'
-import {
-  CORNER_PX,
-  fonts,
-  leading,
-  RULE_PX,
-  space,
-  TOUCH_TARGET_PX,
-  type,
-  useTheme,
-} from '@/components/theme'
+import { CORNER_PX, fonts, leading, RULE_PX, space, type, useTarget, useTheme } from '@/components/theme'
 import { useTxtStyle, type Tone, type TxtKind } from './txt'
 
 /** A link in the run of a text. */
@@ -60,6 +51,7 @@ export function LinkButton({
   isWide = false,
 }: Readonly<{ href: string; label: string; kind?: 'plain' | 'go'; isWide?: boolean }>) {
   const { colors } = useTheme()
+  const target = useTarget()
   return (
     <View style={{ alignSelf: isWide ? 'stretch' : 'flex-start' }}>
       <Link
@@ -69,7 +61,7 @@ export function LinkButton({
             display: 'flex',
             alignItems: 'center',
             justifyContent: 'center',
-            minHeight: TOUCH_TARGET_PX,
+            minHeight: target.heightPx,
             paddingInline: space.one - 2,
             paddingBlock: space.tiny,
             borderWidth: RULE_PX,
@@ -79,8 +71,8 @@ export function LinkButton({
             backgroundColor: kind === 'go' ? colors.verdigris : 'transparent',
             color: kind === 'go' ? colors.vellum : colors.lampblack,
             fontFamily: fonts.AlegreyaSansMedium,
-            fontSize: type.text,
-            lineHeight: leading.text,
+            fontSize: type[target.kind],
+            lineHeight: leading[target.kind],
             textAlign: 'center',
             textDecorationLine: 'none',
           } as unknown as TextStyle

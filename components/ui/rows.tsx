@@ -3,10 +3,23 @@ import { View } from 'react-native'
 import { space, useTheme } from '@/components/theme'
 
 /** A list ruled like a page: hairlines between, a firm line above. */
-export function Rows({ label, children }: Readonly<{ label: string; children: ReactNode }>) {
+export function Rows({
+  label,
+  children,
+  isOpen = false,
+}: Readonly<{
+  label: string
+  children: ReactNode
+  /** Without the line above: under something that draws one. */
+  isOpen?: boolean
+}>) {
   const { colors } = useTheme()
   return (
-    <View role="list" aria-label={label} style={{ borderTopWidth: 1.5, borderColor: colors.lampblack }}>
+    <View
+      role="list"
+      aria-label={label}
+      style={{ borderTopWidth: isOpen ? 0 : 1.5, borderColor: colors.lampblack }}
+    >
       {children}
     </View>
   )

@@ -1,15 +1,6 @@
 import { useId } from 'react'
 import { View } from 'react-native'
-import {
-  CORNER_PX,
-  fonts,
-  leading,
-  RULE_PX,
-  space,
-  TOUCH_TARGET_PX,
-  type,
-  useTheme,
-} from '@/components/theme'
+import { CORNER_PX, fonts, leading, RULE_PX, space, type, useTarget, useTheme } from '@/components/theme'
 import type { Option } from './choice'
 import { Txt } from './txt'
 
@@ -34,6 +25,7 @@ export function Select<Value extends string>({
   problem?: string | null
 }>) {
   const { colors } = useTheme()
+  const target = useTarget()
   const id = useId()
   const about = hint || problem ? `${id}-about` : undefined
   return (
@@ -57,13 +49,13 @@ export function Select<Value extends string>({
           style={{
             appearance: 'none',
             width: '100%',
-            minHeight: TOUCH_TARGET_PX,
+            minHeight: target.heightPx,
             padding: `0 ${space.double}px 0 ${space.half}px`,
             border: `${RULE_PX}px solid ${problem ? colors.minium : colors.edge}`,
             borderRadius: CORNER_PX,
             background: colors.leaf,
             color: colors.lampblack,
-            font: `${type.text}px/${leading.text}px ${fonts.AlegreyaSans}`,
+            font: `${type[target.kind]}px/${leading[target.kind]}px ${fonts.AlegreyaSans}`,
             textOverflow: 'ellipsis',
             cursor: 'pointer',
           }}
@@ -74,7 +66,15 @@ export function Select<Value extends string>({
             </option>
           ))}
         </select>
-        <View style={{ position: 'absolute', right: space.half, top: 13, pointerEvents: 'none' }} aria-hidden>
+        <View
+          style={{
+            position: 'absolute',
+            right: space.half,
+            top: (target.heightPx - leading.note) / 2,
+            pointerEvents: 'none',
+          }}
+          aria-hidden
+        >
           <Txt tone="lead" kind="note">
             ↓
           </Txt>

@@ -46,10 +46,10 @@ function WideTable<Row>({ label, columns, rows, keyOf, sort, onSort }: Parameter
   const { colors } = useTheme()
   const words = useWords().common
   const cell: CSSProperties = {
-    padding: `${space.small}px ${space.one}px ${space.small}px 0`,
+    padding: `${space.tiny}px ${space.one}px ${space.tiny}px 0`,
     borderBottom: `1px solid ${colors.hairline}`,
     verticalAlign: 'middle',
-    height: 52,
+    height: 50,
     font: `${type.text}px/${leading.text}px ${fonts.AlegreyaSans}`,
     fontVariantNumeric: 'tabular-nums lining-nums',
     overflowWrap: 'anywhere',
@@ -62,6 +62,7 @@ function WideTable<Row>({ label, columns, rows, keyOf, sort, onSort }: Parameter
     color: colors.lead,
     borderBottom: `1.5px solid ${colors.lampblack}`,
   }
+  const ends = (place: number): CSSProperties => (place === columns.length - 1 ? { paddingRight: 0 } : {})
   const next = (key: string): Sort => ({
     by: key,
     direction: sort?.by === key && sort.direction === 'up' ? 'down' : 'up',
@@ -78,14 +79,14 @@ function WideTable<Row>({ label, columns, rows, keyOf, sort, onSort }: Parameter
       </colgroup>
       <thead>
         <tr>
-          {columns.map((column) => {
+          {columns.map((column, place) => {
             const isBy = sort?.by === column.key
             return (
               <th
                 key={column.key}
                 scope="col"
                 aria-sort={isBy ? (sort.direction === 'up' ? 'ascending' : 'descending') : undefined}
-                style={{ ...head, textAlign: column.align ?? 'left' }}
+                style={{ ...head, ...ends(place), textAlign: column.align ?? 'left' }}
               >
                 {column.isSortable && onSort ? (
                   <button
@@ -124,14 +125,18 @@ function WideTable<Row>({ label, columns, rows, keyOf, sort, onSort }: Parameter
       <tbody>
         {rows.map((row) => (
           <tr key={keyOf(row)}>
-            {columns.map((column) =>
+            {columns.map((column, place) =>
               column.onPhone === 'heading' ? (
                 <th key={column.key} scope="row" style={{ ...cell, textAlign: 'left', fontWeight: 'normal' }}>
                   {column.cell(row)}
                 </th>
               ) : (
-                <td key={column.key} style={{ ...cell, textAlign: column.align ?? 'left' }}>
-                  {column.cell(row)}
+                <td key={column.key} style={{ ...cell, ...ends(place), textAlign: column.align ?? 'left' }}>
+                  {column.align === 'right' ? (
+                    <View style={{ alignItems: 'flex-end' }}>{column.cell(row)}</View>
+                  ) : (
+                    column.cell(row)
+                  )}
                 </td>
               ),
             )}

@@ -19,8 +19,9 @@ export const entry = {
     makeAccount: 'Make an account',
     yourCourses: 'Go to your courses',
     pictureLabel:
-      'A bicinium of eleven bars: the cantus firmus in D from Fux’s Gradus ad Parnassum below, and the counterpoint written against it above.',
-    pictureCaption: 'Cantus firmus: J. J. Fux, Gradus ad Parnassum, Vienna 1725. The upper voice is ours.',
+      'A bicinium of eleven bars: a cantus firmus in D, and above it the counterpoint that Fux wrote against it.',
+    pictureCaption: 'J. J. Fux, Gradus ad Parnassum, Vienna 1725: the first exercise.',
+    gestures: ['first gesture', 'second gesture: apex A, then home'] as const,
   },
   fields: {
     name: 'Name',
@@ -46,6 +47,7 @@ export const entry = {
     signedInAs: 'You are signed in already.',
     demoTitle: 'This is the demo',
     demoLead: 'Sign in as one of these invented people. All share one password.',
+    demoUse: 'Fill in',
     demoFill: (name: string) => `Fill in the address of ${name}`,
     demoPassword: (password: string) => `Password: ${password}`,
   },
