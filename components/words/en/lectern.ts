@@ -6,6 +6,11 @@ export const lectern = {
   doorClosed: 'door closed',
   closeDoor: 'Close the door',
   openDoor: 'Open the door',
+  closeDoorShort: 'Close',
+  openDoorShort: 'Open',
+  wallHint: 'Show the wall',
+  wallSound:
+    'The wall asks for one touch before it may sound. It starts quiet: set the volume of the room before the first note.',
   wall: 'Wall',
   openWall: 'Open the wall here',
   wallLink: 'Link for another machine',
@@ -41,9 +46,14 @@ export const lectern = {
   hearLine: 'Hear the line',
   hearSpan: (bars: string) => `Hear ${bars}`,
   stop: 'Stop',
-  hearOn: { label: 'Sound comes from', here: 'this device', wall: 'the wall' },
-  voices: { label: 'Voices', both: 'both', cantus: 'cantus', line: 'line' },
-  tempo: 'Tempo',
+  hearCantus: 'Hear the cantus',
+  actsLabel: 'What to do with the bars',
+  hearing: {
+    open: 'Sound',
+    title: 'How it is heard',
+    from: { label: 'It sounds from', here: 'this device', wall: 'the wall' },
+    voices: { label: 'Voices', both: 'both', cantus: 'cantus', line: 'line' },
+  },
   stage: {
     title: 'The task',
     promptLabel: 'What the class is to do',
@@ -51,6 +61,12 @@ export const lectern = {
     promptSaved: 'On the wall',
     promptEdited: 'Put it on the wall',
     suggestion: 'Take this',
+    suggest: (bars: readonly number[], barCount: number) =>
+      bars.at(-1) === barCount
+        ? `Bring the line home: ${lesson.barsInSentence(bars)}.`
+        : bars[0] === 1
+          ? `Open the line: ${lesson.barsInSentence(bars)}.`
+          : `Carry the line through ${lesson.barsInSentence(bars)}.`,
     shows: 'What may be seen',
     findings: 'Phones are told the findings',
     spread: 'The room’s notes are shown',
@@ -72,12 +88,16 @@ export const lectern = {
     hear: 'Hear',
     noFinding: 'No finding.',
     more: (count: number) => (count === 1 ? 'and 1 more finding' : `and ${count} more findings`),
-    proposers: (names: readonly string[], more: number) =>
-      more === 0 ? lesson.listed(names) : `${names.join(', ')} and ${more} more`,
     showProposers: 'Show who',
     hideProposers: 'Hide who',
     hiddenCount: (count: number) => (count === 1 ? '1 student' : `${count} students`),
-    mixed: 'Released bars are taken together here.',
+    and: 'and',
+    andMore: (count: number) => `and ${count} more`,
+    begun: 'Not finished.',
+    proposalLabel: (bars: readonly number[]) => `Proposal for ${lesson.barsInSentence(bars)}`,
+    hearSpoken: (count: number) => `Hear the proposal of ${count}`,
+    adoptSpoken: (count: number) => `Adopt the proposal of ${count}`,
+    rest: (count: number) => (count === 1 ? 'and one other proposal' : `and ${count} other proposals`),
   },
   line: {
     title: 'The line as it stands',
@@ -86,6 +106,8 @@ export const lectern = {
   },
   people: {
     title: 'The class',
+    jump: (here: number, hands: number) =>
+      `${here} here, ${hands === 1 ? 'one hand' : `${hands} hands`} raised. Go to the class.`,
     none: 'Nobody has come in yet. The syllables are on the wall.',
     handUp: 'hand up',
     lower: 'Lower',

@@ -120,6 +120,7 @@ export const lesson = {
     live: 'live',
     offline:
       'Out of touch with the lesson. What you write is kept on this device and sent when the connection is back.',
+    offlineTeacher: 'Out of touch with the lesson. What you change is sent when the connection is back.',
     closed: 'The connection is closed.',
   },
   loading: 'The lesson is coming up.',

@@ -1,0 +1,295 @@
+import { useCallback, useDeferredValue, useMemo, useRef, useState } from 'react'
+import { View } from 'react-native'
+import { runsOf, selectedBars, type Selection } from '@/components/lesson/bars'
+import { RubricLine } from '@/components/lesson/rubric-line'
+import { rubricsOf, setAsideRubrics, type Rubric } from '@/components/lesson/rubrics'
+import type { RoomGroup } from '@/components/lesson/room'
+import { useLessonView } from '@/components/lesson/use-lesson-view'
+import { space, useTheme, useWidth } from '@/components/theme'
+import { Button, Heading, Notice, Txt } from '@/components/ui'
+import { useWords } from '@/components/words'
+import type { Highlight } from '@/components/score'
+import type { Lesson } from '@/shared/api/lessons'
+import type { BoardState, ChorusState } from '@/shared/board'
+import type { Line } from '@/shared/theory/note'
+import type { StageSettings } from '@/shared/wire/documents'
+import type { PresentMember } from '@/shared/wire/rooms'
+import { BarActButtons, type BarAct } from './bar-acts'
+import { HearingDialog } from './hearing-dialog'
+import { LecternHeader } from './lectern-header'
+import { actsFor, readLectern, sortPeople } from './lectern-model'
+import { PeoplePanel } from './people-panel'
+import { RoomList } from './room-list'
+import { SelectableScore } from './selectable-score'
+import { TaskPanel } from './task-panel'
+import { useHearing, type WallCue } from './use-hearing'
+
+const SIDE_PX = 280
+const SCORE_PX = 290
+
+/** Every act of the lectern on the board; each is one change of the document. */
+export type LecternPen = Readonly<{
+  act: (act: BarAct, bars: readonly number[]) => void
+  adopt: (notes: Line) => void
+  /** Undoes an adoption: the bars stand again as they stood. */
+  undoAdopt: (notes: Line, before: BoardState) => void
+  stage: (patch: Partial<StageSettings>) => void
+}>
+
+export type LecternProps = Readonly<{
+  lesson: Lesson
+  board: BoardState
+  chorus: ChorusState
+  here: number
+  hands: number
+  people: readonly PresentMember[]
+  /** Names of everyone who ever came in, by member id. */
+  names: ReadonlyMap<string, string>
+  isOffline: boolean
+  pen: LecternPen
+  onLesson: (lesson: Lesson) => void
+  onLower: (memberId: string) => void
+  onRemove: (memberId: string) => void
+  onCue: (cue: WallCue) => void
+}>
+
+const NOTHING: Selection = null
+
+/** The teacher's place: the score and every act on it, the room's proposals, the task, the class. */
+export function Lectern(props: LecternProps) {
+  const { lesson, board, pen } = props
+  // A room of hundreds may speak faster than rows can be drawn: typing and pressing go first.
+  const chorus = useDeferredValue(props.chorus)
+  const words = useWords()
+  const { colors } = useTheme()
+  const { widthPx, isWide } = useWidth()
+  const { view, judge } = useLessonView(board)
+  const [selection, setSelection] = useState<Selection>(NOTHING)
+  const [isNamed, setNamed] = useState(true)
+  const [isHearingOpen, setHearingOpen] = useState(false)
+  const [adopted, setAdopted] = useState<Readonly<{ notes: Line; before: BoardState }> | null>(null)
+  const [pointedAt, setPointedAt] = useState<Rubric | null>(null)
+  const peopleAnchor = useRef<View>(null)
+
+  const selected = useMemo(
+    () => selectedBars(selection).filter((bar) => bar >= 1 && bar <= view.barCount),
+    [selection, view.barCount],
+  )
+  const reading = useMemo(() => readLectern(view, chorus, judge, selected), [view, chorus, judge, selected])
+  const acts = useMemo(() => actsFor(view, chorus, selected), [view, chorus, selected])
+  const lineRubrics = useMemo(
+    () => [...rubricsOf(judge.ofLine(), words), ...setAsideRubrics(view, words)],
+    [judge, view, words],
+  )
+  const people = useMemo(() => sortPeople(props.people), [props.people])
+  const hearing = useHearing(view, props.onCue)
+  const { hear, stop, playingId } = hearing
+
+  const act = useCallback(
+    (kind: BarAct, bars: readonly number[]) => {
+      setAdopted(null)
+      pen.act(kind, bars)
+    },
+    [pen],
+  )
+  const hearGroup = useCallback(
+    (group: RoomGroup) => {
+      if (playingId === group.key) return stop()
+      const bars = Object.keys(group.notes).map(Number)
+      // One bar of what stands on either side, so that it is heard how the proposal is come to and left.
+      const from = Math.max(1, Math.min(...bars) - 1)
+      const to = Math.min(view.barCount, Math.max(...bars) + 1)
+      hear(group.key, [from, to], group.notes)
+    },
+    [hear, stop, playingId, view.barCount],
+  )
+  const latestBoard = useRef(board)
+  latestBoard.current = board
+  const adopt = useCallback(
+    (group: RoomGroup) => {
+      setAdopted({ notes: group.notes, before: latestBoard.current })
+      pen.adopt(group.notes)
+    },
+    [pen],
+  )
+  const hearSelection = () => (playingId === 'line' ? stop() : hear('line', selected))
+
+  const suggestion = useMemo(
+    () => (reading.bars.length > 0 ? words.lectern.stage.suggest(reading.bars, view.barCount) : null),
+    [reading.bars, words, view.barCount],
+  )
+  const highlight: Highlight | null = pointedAt && {
+    fromBar: pointedAt.bars[0] ?? 1,
+    toBar: pointedAt.bars.at(-1) ?? 1,
+    tone: pointedAt.tone,
+  }
+  const marginPx = isWide ? space.wide : space.one
+  const scoreWidthPx = (isWide ? widthPx - SIDE_PX : widthPx) - 2 * marginPx
+
+  const side = (
+    <>
+      <TaskPanel stage={view.stage} suggestion={suggestion} onStage={pen.stage} />
+      <View ref={peopleAnchor}>
+        <PeoplePanel people={people} onLower={props.onLower} onRemove={props.onRemove} />
+      </View>
+    </>
+  )
+  const main = (
+    <View style={{ flex: 1, minWidth: 0 }}>
+      <View style={{ paddingHorizontal: marginPx, paddingTop: space.half, gap: space.small }}>
+        <View
+          style={{
+            flexDirection: 'row',
+            flexWrap: 'wrap',
+            alignItems: 'center',
+            justifyContent: 'space-between',
+            columnGap: space.one,
+            rowGap: space.tiny,
+            minHeight: 44,
+          }}
+        >
+          <View
+            role="status"
+            style={{ flexDirection: 'row', alignItems: 'center', gap: space.small, minHeight: 44 }}
+          >
+            <Txt kind="note" tone="lead">
+              {adopted
+                ? words.lectern.adopted(Object.keys(adopted.notes).map(Number))
+                : selected.length > 0
+                  ? words.lectern.selection(selected)
+                  : words.lectern.nothingSelected}
+            </Txt>
+            {adopted ? (
+              <Button
+                label={words.lectern.undo}
+                onPress={() => {
+                  pen.undoAdopt(adopted.notes, adopted.before)
+                  setAdopted(null)
+                }}
+              />
+            ) : null}
+          </View>
+          <BarActButtons
+            bars={selected}
+            acts={acts}
+            isHearing={playingId === 'line'}
+            hasLine={Object.keys(view.line).length > 0}
+            onAct={act}
+            onHear={hearSelection}
+            onHearing={() => setHearingOpen(true)}
+          />
+        </View>
+        <SelectableScore
+          input={reading.score}
+          width={scoreWidthPx}
+          maxHeight={isWide ? SCORE_PX : undefined}
+          selection={selection}
+          onSelect={setSelection}
+          highlight={highlight}
+          label={words.lectern.scoreLabel}
+        />
+        {hearing.problem ? <Notice kind="note" title={hearing.problem} /> : null}
+      </View>
+      <View
+        style={{
+          flexGrow: 1,
+          backgroundColor: colors.leaf,
+          borderTopWidth: 1,
+          borderColor: colors.hairline,
+          paddingHorizontal: marginPx,
+          paddingTop: space.half,
+          paddingBottom: space.wide,
+          gap: space.wide,
+        }}
+      >
+        <RoomList
+          reading={reading}
+          view={view}
+          names={props.names}
+          isNamed={isNamed}
+          onNamed={setNamed}
+          isWide={isWide}
+          heardKey={playingId}
+          onHear={hearGroup}
+          onAdopt={adopt}
+        />
+        <View role="region" aria-label={words.lectern.line.title} style={{ gap: space.small }}>
+          <Heading level={2}>{words.lectern.line.title}</Heading>
+          {lineRubrics.length === 0 ? (
+            <Txt tone="lead">
+              {Object.keys(view.line).length === 0 ? words.lectern.line.empty : words.lectern.line.none}
+            </Txt>
+          ) : (
+            lineRubrics.map((rubric) => (
+              <button
+                key={rubric.id}
+                type="button"
+                className="bare"
+                onClick={() => {
+                  const run = runsOf(rubric.bars)[0] ?? rubric.bars
+                  setSelection({ anchor: run[0] ?? 1, head: rubric.bars.at(-1) ?? 1 })
+                }}
+                onPointerEnter={() => setPointedAt(rubric)}
+                onPointerLeave={() => setPointedAt(null)}
+                onFocus={() => setPointedAt(rubric)}
+                onBlur={() => setPointedAt(null)}
+                style={{
+                  background: 'none',
+                  border: 0,
+                  padding: `${space.small}px 0`,
+                  minHeight: 44,
+                  textAlign: 'left',
+                  cursor: 'pointer',
+                }}
+              >
+                <RubricLine rubric={rubric} kind="note" />
+              </button>
+            ))
+          )}
+        </View>
+        {isWide ? null : side}
+      </View>
+    </View>
+  )
+
+  return (
+    <View role="main" id="page" style={{ flexGrow: 1, minHeight: '100dvh' as never }}>
+      <LecternHeader
+        lesson={lesson}
+        here={props.here}
+        hands={props.hands}
+        isWide={isWide}
+        onLesson={props.onLesson}
+        onPeople={() =>
+          (peopleAnchor.current as unknown as HTMLElement | null)?.scrollIntoView({ block: 'start' })
+        }
+      />
+      {props.isOffline ? <Notice kind="note" title={words.lesson.connection.offlineTeacher} /> : null}
+      {lesson.status === 'prepared' ? <Notice kind="note" title={words.lectern.openLead} /> : null}
+      {lesson.status === 'ended' ? <Notice kind="note" title={words.lectern.endedLead} /> : null}
+      <View style={{ flex: 1, flexDirection: isWide ? 'row' : 'column' }}>
+        {isWide ? (
+          <View
+            style={{
+              width: SIDE_PX,
+              borderRightWidth: 1,
+              borderColor: colors.hairline,
+              paddingHorizontal: space.one + 4,
+              paddingVertical: space.one,
+              gap: space.wide,
+            }}
+          >
+            {side}
+          </View>
+        ) : null}
+        {main}
+      </View>
+      <HearingDialog
+        isOpen={isHearingOpen}
+        settings={hearing.settings}
+        onChange={hearing.setSettings}
+        onClose={() => setHearingOpen(false)}
+      />
+    </View>
+  )
+}

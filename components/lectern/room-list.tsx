@@ -1,0 +1,86 @@
+import { View } from 'react-native'
+import type { LessonView } from '@/components/lesson/lesson-view'
+import type { RoomGroup } from '@/components/lesson/room'
+import { space } from '@/components/theme'
+import { Button, Heading, Txt } from '@/components/ui'
+import { useWords } from '@/components/words'
+import { MOST_GROUPS, type LecternReading } from './lectern-model'
+import { RoomRow } from './room-row'
+
+/** The room's distinct proposals for the bars in question, the most proposed first. */
+export function RoomList({
+  reading,
+  view,
+  names,
+  isNamed,
+  onNamed,
+  isWide,
+  heardKey,
+  onHear,
+  onAdopt,
+}: Readonly<{
+  reading: LecternReading
+  view: LessonView
+  names: ReadonlyMap<string, string>
+  isNamed: boolean
+  onNamed: (isNamed: boolean) => void
+  isWide: boolean
+  /** The proposal that sounds now. */
+  heardKey: string | null
+  onHear: (group: RoomGroup) => void
+  onAdopt: (group: RoomGroup) => void
+}>) {
+  const words = useWords().lectern.room
+  const { bars, groups, finished, unfinished, distinct } = reading
+  const isSpan = bars.length > 1
+  const isOpen = bars.some((bar) => view.bars[bar]?.state === 'released')
+  const rest = groups.length - MOST_GROUPS
+  return (
+    <View role="region" aria-label={bars.length > 0 ? words.title(bars) : words.titleNone}>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: space.one }}>
+        <Heading level={2}>{bars.length > 0 ? words.title(bars) : words.titleNone}</Heading>
+        <View role="status" style={{ flexGrow: 1 }}>
+          {bars.length > 0 ? (
+            <Txt kind="note" tone="lead" isTabular>
+              {words.summary(finished, distinct, isSpan)}
+              {unfinished > 0 ? ` · ${words.unfinished(unfinished)}` : ''}
+            </Txt>
+          ) : null}
+        </View>
+        {groups.length > 0 ? (
+          <Button
+            kind="quiet"
+            label={isNamed ? words.hideProposers : words.showProposers}
+            onPress={() => onNamed(!isNamed)}
+          />
+        ) : null}
+      </View>
+      {groups.length > 0 ? (
+        <View role="list">
+          {groups.slice(0, MOST_GROUPS).map((group) => (
+            <RoomRow
+              key={group.key}
+              group={group}
+              view={view}
+              names={isNamed ? names : null}
+              isWide={isWide}
+              isHeard={heardKey === group.key}
+              isSpan={isSpan}
+              onHear={onHear}
+              onAdopt={onAdopt}
+            />
+          ))}
+          {rest > 0 ? (
+            <Txt kind="note" tone="lead" style={{ paddingVertical: space.half }}>
+              {words.rest(rest)}
+            </Txt>
+          ) : null}
+        </View>
+      ) : (
+        <Txt tone="lead" style={{ paddingVertical: space.small }}>
+          {bars.length === 0 ? words.emptyNone : isOpen ? words.empty(bars) : words.emptyFrozen(bars)}
+        </Txt>
+      )}
+    </View>
+  )
+}
