@@ -14,6 +14,7 @@ export type {
   Voice,
 } from './rule'
 export { checkCantus, checkLine, createChecker, type Checker, type Proposal } from './checker'
+export { describeFinding, type Description } from './describe'
 export { judgeExample, readExample, type ReadExample } from './example'
 export { readExercise, type WrittenExercise } from './exercise'
 export { findPreset, PRESETS } from './presets'

@@ -19,7 +19,7 @@ export const cadPhrygian: Rule<Exercise, NoParams> = {
     title: 'The Phrygian close',
     statement: 'Phrygian keeps its natural seventh at the close; the semitone is in the step 2–1.',
     why: 'F falls to E by a semitone already. With D raised as well both voices would have one, and the sixth between them would be augmented.',
-    mends: 'Leave the seventh as the mode has it: D to E over F to E.',
+    mends: 'Leave the seventh as the mode has it, as in D to E over F to E.',
     sources: cite('SEQ (quoting Jeppesen)', 'EX Figs 11, 12, 36, 37, 57, 58, 75, 76, 84'),
     right: { cantus: 'E4 G4 F4 E4', line: 'B4 B4 D5 E5', mode: 'phrygian', final: 'E', breaches: [] },
     wrong: { cantus: 'E4 G4 F4 E4', line: 'B4 B4 D#5 E5', mode: 'phrygian', final: 'E', breaches: [3] },

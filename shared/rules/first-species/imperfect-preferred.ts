@@ -52,6 +52,6 @@ export const imperfectPreferred: Rule<State, Params> = {
       final: 'D',
       breaches: [4],
     },
-    messages: { 'too-many': 'Of {of} inner bars {count} are fifths or octaves.' },
+    messages: { 'too-many': 'Fifths and octaves fill {count} of {of} inner bars.' },
   },
 }

@@ -74,7 +74,7 @@ export const intervalVariety: Rule<State, Params> = {
       final: 'C',
       breaches: [5],
     },
-    messages: { mostly: 'Of {of} inner bars {count} are {kind}.' },
+    messages: { mostly: '{kind} fill {count} of {of} inner bars.' },
   },
 }
 

@@ -48,7 +48,7 @@ export const motionContrary: Rule<State, Params> = {
   },
   finish: ({ contrary, moves, together }, { minContraryPercent }, isComplete) =>
     isComplete && together.length > 0 && 100 * contrary < minContraryPercent * moves
-      ? breachAt('too-little', together, { count: contrary, of: moves })
+      ? breachAt(contrary === 0 ? 'never' : 'too-little', together, { count: contrary, of: moves })
       : null,
   key: ({ before, contrary, moves, together }) =>
     pack(
@@ -72,6 +72,9 @@ export const motionContrary: Rule<State, Params> = {
       final: 'C',
       breaches: [6],
     },
-    messages: { 'too-little': 'Of {of} moves {count} go in contrary motion.' },
+    messages: {
+      'too-little': 'Contrary motion makes up {count} of {of} moves.',
+      never: 'The voices never move against each other.',
+    },
   },
 }

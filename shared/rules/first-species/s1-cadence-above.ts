@@ -24,7 +24,7 @@ export const s1CadenceAbove: Rule<Exercise, NoParams> = {
     messages: {
       'not-leading':
         'Before the close the voices sound a {interval}, not a major sixth that opens to the octave.',
-      'wrong-size': 'Before the close the sixth is {interval}, not a major sixth.',
+      'wrong-size': 'Before the close the voices sound a {interval}, where the sixth must be major.',
       'not-second':
         'The cantus rises to its final from below, and the line does not come down to it by step.',
       'not-second.mend': 'Write the second degree, so that the line falls by step to the final.',
