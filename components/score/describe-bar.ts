@@ -6,7 +6,7 @@ import type { BarNotes } from '@/shared/theory/note'
 import { pitchOf, type PitchName } from '@/shared/theory/pitch'
 
 /** A bar as a screen reader tells it: "bar 4, cantus F, line A, tenth, released". */
-export function describeBar(bar: ScoreBar, words: Words): string {
+export function describeBar(bar: ScoreBar, words: Pick<Words, 'lesson' | 'score'>): string {
   if (bar.isSetAside) return words.score.setAside(bar.number)
   const spoken = (name: PitchName): string => words.lesson.pitchSpoken(pitchOf(name))
   const notesSpoken = (notes: BarNotes): string =>

@@ -48,9 +48,11 @@ export const StripClefs = memo(function StripClefs({
         }}
       />
       <View {...fadeFrom(ground, system.prefixPx, layout.spacePx)} />
-      <Svg width={system.prefixPx} height={layout.heightPx} style={{ display: 'flex' }}>
-        <PaintedMarks painted={painted} colors={colors} ground={ground} />
-      </Svg>
+      <View>
+        <Svg width={system.prefixPx} height={layout.heightPx} style={{ display: 'flex' }}>
+          <PaintedMarks painted={painted} colors={colors} ground={ground} />
+        </Svg>
+      </View>
     </View>
   )
 })

@@ -27,7 +27,7 @@ export type MeasuredBar = Readonly<{
   isMotionInside: boolean
   leftPx: number
   rightPx: number
-  /** The least width, and the share of spare width it asks for. */
+  /** The least width in whole px, and the share of spare width it asks for. */
   leastPx: number
   weight: number
   endPx: number
@@ -49,7 +49,7 @@ export function measureBars(
     const numberPx = isMini ? 0 : measureTextPx(String(bar.number), 'Alegreya', lettering.numberPx)
     if (isFolded) {
       const content = { cantus: EMPTY_CONTENT, line: EMPTY_CONTENT }
-      const leastPx = Math.max(FOLD_WIDTH * spacePx, numberPx + 0.6 * spacePx)
+      const leastPx = Math.ceil(Math.max(FOLD_WIDTH * spacePx, numberPx + 0.6 * spacePx))
       const half = leastPx / 2
       return {
         bar,
@@ -92,7 +92,9 @@ export function measureBars(
       isMotionInside,
       leftPx,
       rightPx,
-      leastPx: Math.max(leftPx + rightPx, numberPx + 1.2 * spacePx, labelPx + 0.8 * spacePx + endPx),
+      leastPx: Math.ceil(
+        Math.max(leftPx + rightPx, numberPx + 1.2 * spacePx, labelPx + 0.8 * spacePx + endPx),
+      ),
       weight: weights[bar.state] * (options.size === 'strip' && bar.number === options.handBar ? 1.15 : 1),
       endPx,
     }

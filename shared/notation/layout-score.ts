@@ -101,9 +101,12 @@ function frameSystem(setting: Setting, from: number, to: number): Frame {
   const { prefixPx, measured } = setting
   const bars = measured.slice(from, to)
   const widths = barWidths(setting, bars, from === 0 && to === measured.length)
+  // Bar lines stand on whole px. No bar loses by it, as the least widths are whole.
+  let edge = prefixPx
   let xPx = prefixPx
   const frames = bars.map((measuredBar, i): BarFrame => {
-    const widthPx = widths[i] as number
+    edge += widths[i] as number
+    const widthPx = Math.round(edge) - xPx
     const { bar, isFolded } = measuredBar
     const place = { xPx, widthPx, axisPx: axisIn(measuredBar, widthPx) }
     xPx += widthPx

@@ -1,6 +1,7 @@
 import { FACE_WIDTHS, type FaceName } from '@/shared/notation/text-widths'
 
 const ELLIPSIS = '…'
+const LEAST_LETTERS = 3
 
 const advancesOf = (face: FaceName): ReadonlyMap<string, number> =>
   new Map([...FACE_WIDTHS[face].characters].map((c, i) => [c, FACE_WIDTHS[face].advances[i] as number]))
@@ -32,7 +33,7 @@ export function textHeightPx(text: string, face: FaceName, sizePx: number): { ab
   }
 }
 
-/** The text, or its beginning with an ellipsis where it is too long, or '' where not even one letter fits. */
+/** The text, or its beginning with an ellipsis where it is too long, or '' where fewer than three letters would be left. */
 export function ellipsise(text: string, face: FaceName, sizePx: number, widthPx: number): string {
   if (measureTextPx(text, face, sizePx) <= widthPx) return text
   const letters = [...text]
@@ -43,5 +44,5 @@ export function ellipsise(text: string, face: FaceName, sizePx: number, widthPx:
     if (used > widthPx) break
     kept += 1
   }
-  return kept === 0 ? '' : letters.slice(0, kept).join('').trimEnd() + ELLIPSIS
+  return kept < LEAST_LETTERS ? '' : letters.slice(0, kept).join('').trimEnd() + ELLIPSIS
 }

@@ -36,7 +36,7 @@ export function segmentOn(
 }
 
 /** Words of a bracket keep this far from the edge of a strip's window, in staff spaces. */
-const LABEL_INSET = 0.4
+const LABEL_INSET = 1
 
 const axisOf = (bar: BarFrame): number => bar.xPx + bar.axisPx
 
@@ -60,8 +60,8 @@ export function findingMarks(
     return [lozengeMark({ role: 'finding', ink: arc.tone, group }, axisOf(first), y, 0.42 * spacePx, look)]
   }
   const inset = 0.4 * spacePx
-  const from: Point = [isOpenLeft ? first.xPx : axisOf(first) + inset, foot - strokePx]
-  const to: Point = [isOpenRight ? last.xPx + last.widthPx : axisOf(last) - inset, foot - strokePx]
+  const from: Point = [isOpenLeft ? first.xPx + strokePx : axisOf(first) + inset, foot - strokePx]
+  const to: Point = [isOpenRight ? last.xPx + last.widthPx - strokePx : axisOf(last) - inset, foot - strokePx]
   if (to[0] - from[0] < inset) return []
   const height = Math.min(0.95 * spacePx, 0.35 * (to[0] - from[0]))
   return [
