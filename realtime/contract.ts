@@ -15,7 +15,8 @@ export type LessonIdentity = Readonly<{
   sessionId: string
 }>
 
-export type IdentityRefusal = 'signed-out' | 'forbidden' | 'not-found' | 'lesson-ended' | 'removed' | 'lesson-full'
+export type IdentityRefusal =
+  'signed-out' | 'forbidden' | 'not-found' | 'lesson-ended' | 'removed' | 'lesson-full'
 
 /** Given by the server: reads the cookie of an upgrade request afresh (no cache) and says who it is in that lesson. */
 export type IdentifyConnection = (
@@ -30,6 +31,10 @@ export type RealtimeOptions = Readonly<{
   /** Origins from which an upgrade is taken, such as `http://localhost:8080`. */
   allowedOrigins: readonly string[]
   log: Logger
+  /** The clock; the machine's unless a test brings its own. */
+  nowMs?: () => number
+  /** How long a lesson stays in memory after the last one left. */
+  graceMs?: number
 }>
 
 /** What the routes may ask of the live rooms after they changed something in the database. */

@@ -3,6 +3,7 @@
  * `new WebsocketProvider(origin + DOCUMENT_PATH, roomOf.sheet(lessonId, memberId), doc)`.
  */
 import { z } from 'zod'
+import { barNotesSchema, MAX_BARS } from './documents'
 
 export const DOCUMENT_PATH = '/live'
 export const CHANNEL_PATH = '/socket.io'
@@ -26,6 +27,9 @@ export const WIRE_LIMITS = {
   membersALesson: 600,
   connectionsAMember: 8,
   beatMs: 25,
+  /** One message of the class channel; the longest is a cue with a proposal. */
+  channelBytes: 32 * 1024,
+  channelMessagesASecond: 10,
 } as const
 
 /** Close codes 4400 to 4499 tell y-websocket not to come back. Outside that range it reconnects by itself. */
@@ -66,11 +70,11 @@ export const CHANNEL_REQUESTS = {
     z.strictObject({
       kind: z.literal('play'),
       voices: z.enum(['cantus', 'line', 'both']),
-      fromBar: z.int().min(1).max(40),
-      toBar: z.int().min(1).max(40),
+      fromBar: z.int().min(1).max(MAX_BARS),
+      toBar: z.int().min(1).max(MAX_BARS),
       tempo: z.number().min(20).max(240),
       /** A proposal laid over the line for this hearing: bar number to notes. */
-      proposal: z.record(z.string(), z.array(z.json())).optional(),
+      proposal: z.record(z.string().regex(/^[1-9][0-9]?$/), barNotesSchema).optional(),
     }),
     z.strictObject({ kind: z.literal('stop') }),
   ]),
@@ -89,9 +93,17 @@ export type ChannelEvents = Readonly<{
    */
   kept: (ack: Readonly<{ room: string; clocks: Readonly<Record<string, number>> }>) => void
   cue: (cue: z.infer<(typeof CHANNEL_REQUESTS)['cue']>) => void
+  /**
+   * Whether what is written is being kept. While it is not, phones hold their own notes and send them by themselves when
+   * it is again; reading goes on.
+   */
+  keeping: (state: Readonly<{ ok: true } | { ok: false; because: 'database' | 'disk-full' }>) => void
   /** The lesson changed outside its documents: door, ended, role. Ask the API again. */
   lesson: (change: Readonly<{ kind: 'door' | 'ended' | 'role' | 'removed' | 'roster' }>) => void
 }>
+
+/** What a client gives with its connection to the class channel. */
+export const channelAuthSchema = z.strictObject({ lessonId: z.string().regex(/^[A-Za-z0-9_-]{8,64}$/) })
 
 /** Answer to every channel request. */
 export type ChannelReply = Readonly<{ ok: true } | { ok: false; error: string }>
