@@ -1,5 +1,5 @@
 import type { Words } from '@/components/words'
-import type { Finding } from '@/shared/rules'
+import { describeFinding, type Finding } from '@/shared/rules'
 import type { BarMotion } from '@/shared/notation/score-input'
 import { intervalBetween, qualityOf } from '@/shared/theory/interval'
 import { nameInterval, nameSize } from '@/shared/theory/interval-name'
@@ -7,7 +7,6 @@ import type { BarNotes, Line } from '@/shared/theory/note'
 import { comparePitches, parsePitch, type Pitch } from '@/shared/theory/pitch'
 import type { LessonView } from './lesson-view'
 import { railOf } from './rail'
-import { rubricOf } from './rubrics'
 
 /** The first pitch of a bar, or null where there is none. */
 export function firstPitch(notes: BarNotes | null | undefined): Pitch | null {
@@ -52,7 +51,7 @@ export function speakSounding(
     isAbove: order >= 0,
     isUnison: order === 0,
     motion: motion && words.lesson.motion[motion],
-    findings: findings && findings.map((finding) => rubricOf(finding, words).sentence),
+    findings: findings && findings.map((finding) => describeFinding(finding).spoken),
   })
 }
 

@@ -44,7 +44,7 @@ const sheet = (notes: Readonly<Record<number, string>>, round = 1): SheetState =
 })
 
 const risen: Finding = {
-  ruleId: 'direct-perfects',
+  ruleId: 'dir-perfect',
   code: 'similar-into-fifth',
   level: 'law',
   voice: 'line',
@@ -98,7 +98,7 @@ describe('the desk', () => {
     const score = deskScoreOf(view, own, [risen])
     expect(score.bars[5]).toMatchObject({ figure: { text: '5', tone: 'cantus' }, motion: 'contrary' })
     expect(score.bars[5]?.proposals).toMatchObject([{ count: null, tone: 'line' }])
-    expect(score.bars[6]).toMatchObject({ figure: { text: '5', tone: 'breach' }, motion: 'similar' })
+    expect(score.bars[6]).toMatchObject({ figure: { text: '5', tone: 'breach' }, motion: 'parallel' })
     expect(score.bars[6]?.proposals).toMatchObject([{ count: null, tone: 'breach' }])
     expect(score.bars[4]).toMatchObject({ line: note('B4'), proposals: [], state: 'frozen' })
     expect(score.bars[1]?.isSetAside).toBe(true)
@@ -127,7 +127,7 @@ describe('the ladder of a bar', () => {
 
   test('each rung names the interval and the motion into it', () => {
     const model = ladder({ 6: 'C5' }, 7)
-    expect(rungOf(model, 'E5')).toMatchObject({ name: 'E', interval: 'fifth', motion: 'similar' })
+    expect(rungOf(model, 'E5')).toMatchObject({ name: 'E', interval: 'fifth', motion: 'parallel' })
     expect(rungOf(model, 'C5')).toMatchObject({ interval: 'minor third', motion: 'oblique' })
     expect(rungOf(model, 'B4')).toMatchObject({ interval: 'major second', motion: 'contrary' })
     expect(rungOf(model, 'A4')).toMatchObject({ interval: 'unison' })
@@ -150,7 +150,7 @@ describe('the ladder of a bar', () => {
     )
     expect(rungOf(ladder({ 6: 'C5' }, 7, false), 'E5')).toMatchObject({
       mark: null,
-      spoken: 'bar 7, E, fifth above A, similar motion.',
+      spoken: 'bar 7, E, fifth above A, parallel motion.',
     })
     expect(rungOf(ladder({}, 9), 'F4')?.spoken).toBe('bar 9, F, unison with F; no finding.')
   })

@@ -14,7 +14,7 @@ const finding = (
   level: Finding['level'] = 'law',
   code = 'similar-into-fifth',
 ): Finding => ({
-  ruleId: 'direct-perfects',
+  ruleId: 'dir-perfect',
   code,
   level,
   voice: 'line',

@@ -1,0 +1,337 @@
+import { useRouter, type Href } from 'expo-router'
+import { useCallback, useMemo, useState } from 'react'
+import { View } from 'react-native'
+import { Asked, RefusalNotice, useMutation, useQuery } from '@/components/api'
+import { RubricLine } from '@/components/lesson/rubric-line'
+import { rubricOf } from '@/components/lesson/rubrics'
+import { Score } from '@/components/score'
+import { Frame } from '@/components/session'
+import { space, useTheme, useWidth } from '@/components/theme'
+import { Button, Choice, Field, Form, Heading, Notice, Select, Txt } from '@/components/ui'
+import { useWords, type Words } from '@/components/words'
+import { api } from '@/shared/api'
+import type { Cantus } from '@/shared/api/cantus'
+import { MAX_TITLE_CHARACTERS } from '@/shared/api/fields'
+import type { Me } from '@/shared/api/people'
+import { findPreset, PRESETS, type Position, type RuleSet } from '@/shared/rules'
+import { MODES, type Mode } from '@/shared/theory/mode'
+import { MAX_PROMPT_CHARACTERS } from '@/shared/wire/documents'
+import { CantusPicker } from './cantus-picker'
+import { exerciseScoreOf } from './cantus-score'
+import { MelodySummary } from './melody-summary'
+import { RuleList } from './rule-list'
+import {
+  changedRules,
+  exerciseOf,
+  firstStage,
+  readPitchClass,
+  setupProblems,
+  startForm,
+  withCantus,
+  withFinal,
+  withLevel,
+  withParam,
+  withPosition,
+  withPreset,
+  type SetupForm,
+  type SetupProblem,
+} from './setup-form'
+import { doubtsOf, type Doubt } from './soundness'
+import { CLEF_CHOICES } from './suggest-clefs'
+
+const FIRST_PRESET = 'open-undergrad'
+const FINALS = ['C', 'C#', 'Db', 'D', 'Eb', 'E', 'F', 'F#', 'G', 'Ab', 'A', 'Bb', 'B'] as const
+
+/** Setting up a lesson: the melody, what is done with it, by which rules, and the first task. */
+export function SetupScreen({ me, courseId }: Readonly<{ me: Me; courseId: string }>) {
+  const words = useWords()
+  const course = useQuery(api.courses.get, { params: { courseId } })
+  const library = useQuery(api.cantus.list, {})
+  return (
+    <Frame
+      me={me}
+      title={words.setup.title}
+      lede={words.setup.lead}
+      up={{ href: `/courses/${courseId}`, label: course.data?.course.name ?? words.courses.course.up }}
+    >
+      <Asked query={library}>{({ cantus }) => <Setup courseId={courseId} library={cantus} />}</Asked>
+    </Frame>
+  )
+}
+
+function Setup({ courseId, library }: Readonly<{ courseId: string; library: readonly Cantus[] }>) {
+  const words = useWords()
+  const { setup, lesson } = words
+  const router = useRouter()
+  const { widthPx, isWide } = useWidth()
+  const create = useMutation(api.lessons.create)
+  const [form, setForm] = useState<SetupForm>(() =>
+    startForm(findPreset(FIRST_PRESET) ?? (PRESETS[0] as RuleSet), setup.promptSuggestion),
+  )
+  const [isListOpen, setListOpen] = useState(false)
+  const [hasTried, setTried] = useState(false)
+
+  const titleOf = useCallback(
+    (position: Position, final: string) =>
+      setup.titleSuggestion(position, final.replace('#', '♯').replace('b', '♭')),
+    [setup],
+  )
+  const problems = setupProblems(form)
+  const problemOf = (...kinds: SetupProblem[]): string | null => {
+    const problem = problems.find((each) => kinds.includes(each))
+    return hasTried && problem ? problemText(problem, words) : null
+  }
+  const exercise = useMemo(() => exerciseOf(form), [form])
+  const doubts = useMemo(() => (exercise ? doubtsOf(exercise) : []), [exercise])
+  const changed = useMemo(() => changedRules(form), [form])
+
+  const submit = async () => {
+    setTried(true)
+    if (problems.length > 0 || !exercise) return
+    const result = await create.run({
+      params: { courseId },
+      body: { title: form.title, exercise, stage: firstStage(form) },
+    })
+    if (result.ok) router.replace(`/lessons/${result.value.lesson.id}/lectern` as Href)
+  }
+
+  const columnPx = Math.min(widthPx, 1560) - (isWide ? 2 * space.double + 440 + space.double : 2 * space.one)
+  const previewPx = Math.max(240, isWide ? columnPx : widthPx - 2 * space.one)
+
+  return (
+    <Form label={setup.title} onSubmit={() => void submit()} gapPx={space.wide}>
+      <View style={{ flexDirection: isWide ? 'row' : 'column', gap: isWide ? space.double : space.wide }}>
+        <View style={{ width: isWide ? 440 : undefined, gap: space.wide }}>
+          <Section title={setup.cantus}>
+            <CantusPicker
+              library={library}
+              chosen={form.cantus}
+              problem={problemOf('noCantus')}
+              onChoose={(cantus) => setForm((before) => withCantus(before, cantus, titleOf))}
+            />
+          </Section>
+          <Section title={setup.work}>
+            <Choice<Position>
+              label={setup.position}
+              value={form.position}
+              options={[
+                { value: 'above', label: setup.above },
+                { value: 'below', label: setup.below },
+              ]}
+              onChange={(position) => setForm((before) => withPosition(before, position, titleOf))}
+            />
+            <Txt kind="note" tone="lead">
+              {`${setup.species}: ${setup.first}`}
+            </Txt>
+            <Pair>
+              <Select<Mode>
+                label={setup.mode}
+                value={form.mode}
+                options={MODES.map((mode) => ({ value: mode, label: lesson.mode[mode] }))}
+                onChange={(mode) => setForm((before) => ({ ...before, mode }))}
+                problem={problemOf('noSpelling')}
+              />
+              <Select
+                label={setup.final}
+                value={form.final}
+                options={FINALS.map((final) => ({
+                  value: final,
+                  label: final.replace('#', '♯').replace('b', '♭'),
+                }))}
+                onChange={(final) => setForm((before) => withFinal(before, final, titleOf))}
+              />
+            </Pair>
+            <Pair>
+              <Select
+                label={setup.clefLine}
+                value={form.clefs.line}
+                options={CLEF_CHOICES.map((clef) => ({ value: clef, label: lesson.clef[clef] }))}
+                onChange={(line) =>
+                  setForm((before) => ({ ...before, isClefsTouched: true, clefs: { ...before.clefs, line } }))
+                }
+              />
+              <Select
+                label={setup.clefCantus}
+                value={form.clefs.cantus}
+                options={CLEF_CHOICES.map((clef) => ({ value: clef, label: lesson.clef[clef] }))}
+                onChange={(cantus) =>
+                  setForm((before) => ({
+                    ...before,
+                    isClefsTouched: true,
+                    clefs: { ...before.clefs, cantus },
+                  }))
+                }
+              />
+            </Pair>
+          </Section>
+        </View>
+        <View style={{ flex: 1, minWidth: 0, gap: space.wide }}>
+          <Section title={setup.preview}>
+            <Preview exercise={exercise} form={form} doubts={doubts} widthPx={previewPx} />
+          </Section>
+          <Section title={setup.words}>
+            <Field
+              label={setup.lessonTitle}
+              value={form.title}
+              maxLength={MAX_TITLE_CHARACTERS}
+              problem={problemOf('titleEmpty', 'titleTooLong', 'titleHidden') ?? create.problemOf('title')}
+              onChangeText={(title) => setForm((before) => ({ ...before, title, isTitleTouched: true }))}
+            />
+            <Field
+              label={setup.prompt}
+              value={form.prompt}
+              rows={2}
+              isOptional
+              maxLength={MAX_PROMPT_CHARACTERS}
+              hint={setup.promptHint}
+              problem={problemOf('promptTooLong')}
+              onChangeText={(prompt) => setForm((before) => ({ ...before, prompt }))}
+            />
+          </Section>
+          <Section title={setup.rules}>
+            <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: space.one }}>
+              <View style={{ minWidth: 240 }}>
+                <Select
+                  label={setup.ruleSet}
+                  value={form.preset.id}
+                  options={PRESETS.map(({ id, name }) => ({ value: id, label: name }))}
+                  onChange={(id) => {
+                    const preset = findPreset(id)
+                    if (preset) setForm((before) => withPreset(before, preset))
+                  }}
+                />
+              </View>
+              <Button
+                label={isListOpen ? setup.rulesClose : setup.rulesOpen}
+                onPress={() => setListOpen(!isListOpen)}
+              />
+              {changed.length > 0 ? (
+                <Button
+                  kind="quiet"
+                  label={setup.rulesReset}
+                  onPress={() => setForm((before) => withPreset(before, before.preset))}
+                />
+              ) : null}
+            </View>
+            {changed.length > 0 ? (
+              <Txt kind="note" tone="verdigris" role="status">
+                {setup.rulesChanged(changed.length)}
+              </Txt>
+            ) : null}
+            {problemOf('params') ? (
+              <Txt kind="note" tone="minium" role="alert">
+                {problemOf('params')}
+              </Txt>
+            ) : null}
+            {isListOpen ? (
+              <RuleList
+                key={form.preset.id}
+                ruleSet={form.ruleSet}
+                changed={changed}
+                onLevel={(id, level) => setForm((before) => withLevel(before, id, level))}
+                onParam={(id, name, value) => setForm((before) => withParam(before, id, name, value))}
+              />
+            ) : null}
+          </Section>
+          <View style={{ gap: space.half }}>
+            <RefusalNotice refusal={create.refusal} />
+            {create.refusal ? (
+              <Txt kind="note" tone="lead">
+                {setup.problems.notSent}
+              </Txt>
+            ) : null}
+            {hasTried && problems.length > 0 ? (
+              <Txt kind="note" tone="minium" role="alert">
+                {problems.map((problem) => problemText(problem, words)).join(' ')}
+              </Txt>
+            ) : null}
+            <Button kind="go" label={setup.create} isSubmit isBusy={create.isBusy} />
+          </View>
+        </View>
+      </View>
+    </Form>
+  )
+}
+
+function Preview({
+  exercise,
+  form,
+  doubts,
+  widthPx,
+}: Readonly<{
+  exercise: ReturnType<typeof exerciseOf>
+  form: SetupForm
+  doubts: readonly Doubt[]
+  widthPx: number
+}>) {
+  const words = useWords()
+  const { setup } = words
+  const final = readPitchClass(form.final)
+  const score = useMemo(() => exercise && exerciseScoreOf(exercise), [exercise])
+  if (!score || !form.cantus || !final || !exercise)
+    return <Txt tone="lead">{form.cantus ? setup.problems.noSpelling : setup.previewNone}</Txt>
+  return (
+    <View style={{ gap: space.half }}>
+      <Score input={score} size="page" width={widthPx} accessibilityLabel={setup.preview} />
+      <MelodySummary cantus={form.cantus} mode={form.mode} final={final} />
+      {doubts.length === 0 ? (
+        <Notice kind="good" title={setup.sound}>
+          {setup.soundLead}
+        </Notice>
+      ) : (
+        <Notice kind="note" title={setup.unsound}>
+          <View style={{ gap: space.small }}>
+            <Txt kind="note" tone="lead">
+              {setup.unsoundLead}
+            </Txt>
+            {doubts.map((doubt, index) => (
+              <DoubtLine key={index} doubt={doubt} words={words} />
+            ))}
+          </View>
+        </Notice>
+      )}
+    </View>
+  )
+}
+
+function DoubtLine({ doubt, words }: Readonly<{ doubt: Doubt; words: Words }>) {
+  if (doubt.kind === 'finding')
+    return <RubricLine rubric={rubricOf(doubt.finding, words)} kind="note" isMendTold={false} />
+  const print = words.lesson.pitchPrinted
+  return (
+    <Txt kind="note">
+      {doubt.kind === 'clef'
+        ? words.setup.problems.clefCantus(print(doubt.pitch))
+        : words.setup.problems.lastNotFinal(print(doubt.pitch), doubt.final)}
+    </Txt>
+  )
+}
+
+const problemText = (problem: SetupProblem, { setup: { problems } }: Words): string => {
+  if (problem === 'titleTooLong') return problems.titleTooLong(MAX_TITLE_CHARACTERS)
+  if (problem === 'promptTooLong') return problems.promptTooLong(MAX_PROMPT_CHARACTERS)
+  return problems[problem]
+}
+
+function Section({ title, children }: Readonly<{ title: string; children: React.ReactNode }>) {
+  const { colors } = useTheme()
+  return (
+    <View
+      role="group"
+      aria-label={title}
+      style={{ gap: space.half, borderTopWidth: 1, borderColor: colors.hairline, paddingTop: space.half }}
+    >
+      <Heading level={2}>{title}</Heading>
+      {children}
+    </View>
+  )
+}
+
+function Pair({ children }: Readonly<{ children: [React.ReactNode, React.ReactNode] }>) {
+  return (
+    <View style={{ flexDirection: 'row', gap: space.half, alignItems: 'flex-end' }}>
+      <View style={{ flex: 1, minWidth: 0 }}>{children[0]}</View>
+      <View style={{ flex: 1, minWidth: 0 }}>{children[1]}</View>
+    </View>
+  )
+}
