@@ -94,3 +94,9 @@ export async function deleteStaleGuests(db: Connection): Promise<number> {
     .executeTakeFirst()
   return Number(numDeletedRows)
 }
+
+/** Logins and links whose time is over. */
+export async function deleteExpiredLogins(db: Connection): Promise<void> {
+  await db.deleteFrom('session').where('expiresAt', '<', new Date()).execute()
+  await db.deleteFrom('verification').where('expiresAt', '<', new Date()).execute()
+}

@@ -1,0 +1,24 @@
+import type { FieldProblem } from '@/shared/api/errors'
+
+const MARKS_IN_A_ROW = /\p{M}{4,}/u
+const INVISIBLE =
+  /[\u00ad\u034f\u115f\u1160\u17b4\u17b5\u180b-\u180e\u200b\u2060-\u2064\u206a-\u206f\u3164\ufe00-\ufe0f\uffa0\ufff9-\ufffb]/u
+
+const folded = (name: string) =>
+  name
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .replace(/[^\p{L}\p{N}]/gu, '')
+    .toLowerCase()
+
+/**
+ * What speaks against a guest's name, beside its length: it has to have a letter to be called by, no heap of accents
+ * that climbs over its neighbours, nothing that cannot be seen, and it must not be the name of one who leads.
+ */
+export function guestNameProblem(name: string, leaders: readonly string[]): FieldProblem | null {
+  if (INVISIBLE.test(name)) return { path: 'name', code: 'hidden-characters' }
+  if (!/\p{L}|\p{N}/u.test(name)) return { path: 'name', code: 'no-letters' }
+  if (MARKS_IN_A_ROW.test(name)) return { path: 'name', code: 'too-many-marks' }
+  if (leaders.some((leader) => folded(leader) === folded(name))) return { path: 'name', code: 'taken' }
+  return null
+}
