@@ -12,6 +12,7 @@ export function PlayheadLine({ layout, playhead }: Readonly<{ layout: ScoreLayou
   return (
     <View
       aria-hidden
+      dataSet={{ playhead: playhead.bar }}
       style={{
         position: 'absolute',
         pointerEvents: 'none',
