@@ -12,7 +12,7 @@ export function PlayheadLine({ layout, playhead }: Readonly<{ layout: ScoreLayou
   return (
     <View
       aria-hidden
-      dataSet={{ playhead: playhead.bar }}
+      {...({ dataSet: { playhead: playhead.bar } } as object)}
       style={{
         position: 'absolute',
         pointerEvents: 'none',

@@ -20,7 +20,7 @@ import { useStaffPointer } from './use-staff-pointer'
 export type ScoreProps = Readonly<{
   input: ScoreInput
   size: ScoreSize
-  /** Width of the drawing in px. The height follows from the music; `scoreHeightPx` tells it beforehand. */
+  /** Width of the drawing in px. The height follows from the music. */
   width: number
   /** On a wall or a page: shrink the staff, within reason, to keep to this height. */
   maxHeight?: number | undefined

@@ -19,13 +19,14 @@ export const growBox = (box: Box, by: number): Box => ({
   bottom: box.bottom + by,
 })
 
-export const uniteBoxes = (boxes: readonly Box[]): Box =>
-  boxes.reduce((all, box) => ({
-    left: Math.min(all.left, box.left),
-    top: Math.min(all.top, box.top),
-    right: Math.max(all.right, box.right),
-    bottom: Math.max(all.bottom, box.bottom),
-  }))
-
-export const isInside = (box: Box, x: number, y: number): boolean =>
-  x >= box.left && x < box.right && y >= box.top && y < box.bottom
+/** The least box around all of them; there must be one. */
+export function uniteBoxes(boxes: readonly Box[]): Box {
+  let [left, top, right, bottom] = [Infinity, Infinity, -Infinity, -Infinity]
+  for (const box of boxes) {
+    left = Math.min(left, box.left)
+    top = Math.min(top, box.top)
+    right = Math.max(right, box.right)
+    bottom = Math.max(bottom, box.bottom)
+  }
+  return { left, top, right, bottom }
+}

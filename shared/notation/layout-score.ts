@@ -258,6 +258,24 @@ const fitsWidth = ({ measured, options, prefixPx }: Setting): boolean =>
     ? measured.reduce((sum, bar) => sum + bar.leastPx, 0) <= options.widthPx
     : measured.every((bar) => prefixPx + bar.leastPx <= options.widthPx)
 
+/** The largest whole number from `least` to `most` that passes, or null; whatever is smaller than one that passes does too. */
+function largestPassing(least: number, most: number, isPassing: (value: number) => boolean): number | null {
+  if (most < least) return null
+  if (isPassing(most)) return most
+  if (!isPassing(least)) return null
+  let [passing, failing] = [least, most]
+  while (failing - passing > 1) {
+    const middle = Math.floor((passing + failing) / 2)
+    if (isPassing(middle)) passing = middle
+    else failing = middle
+  }
+  return passing
+}
+
+/** On a wall one system is worth a staff this much smaller than the width suggests; past that, several are better. */
+const LEAST_SHARE_FOR_ONE_SYSTEM = 0.6
+const SHARE_FOR_SEVERAL_SYSTEMS = 0.72
+
 /**
  * Engraves a score: every glyph, line and word of it with its place, in px. The staff space is the largest at which the
  * music fits: on the wall on one system where that keeps it legible from the back row, elsewhere on as many as it needs.
@@ -265,25 +283,34 @@ const fitsWidth = ({ measured, options, prefixPx }: Setting): boolean =>
 export function layoutScore(input: ScoreInput, options: ScoreLayoutOptions): ScoreLayout {
   const { spaceFor, leastSpacePx } = SIZE_FACTS[options.size]
   const preferred = spaceFor(options.widthPx)
-  const maxHeightPx = options.maxHeightPx ?? Infinity
-  const attempt = (spacePx: number, isOneSystem: boolean): ScoreLayout | null => {
-    const setting = settingAt(input, options, spacePx)
-    if (!fitsWidth(setting) || (isOneSystem && systemStarts(setting).length > 1)) return null
-    const layout = layoutAt(setting)
-    return layout.heightPx <= maxHeightPx ? layout : null
+  const { maxHeightPx } = options
+  const settings = new Map<number, Setting>()
+  const settingOf = (spacePx: number): Setting => {
+    const setting = settings.get(spacePx) ?? settingAt(input, options, spacePx)
+    settings.set(spacePx, setting)
+    return setting
   }
-  if (options.size === 'wall')
-    for (let space = preferred; space >= Math.max(leastSpacePx, Math.ceil(0.6 * preferred)); space--) {
-      const layout = attempt(space, true)
-      if (layout) return layout
-    }
-  const start = options.size === 'wall' ? Math.max(leastSpacePx, Math.round(0.72 * preferred)) : preferred
-  for (let space = start; space >= leastSpacePx; space--) {
-    const layout = attempt(space, false)
-    if (layout) return layout
+  const fits = (spacePx: number): boolean =>
+    fitsWidth(settingOf(spacePx)) &&
+    (maxHeightPx === undefined || layoutAt(settingOf(spacePx)).heightPx <= maxHeightPx)
+
+  if (options.size === 'wall') {
+    const least = Math.max(leastSpacePx, Math.ceil(LEAST_SHARE_FOR_ONE_SYSTEM * preferred))
+    const space = largestPassing(
+      least,
+      preferred,
+      (spacePx) => systemStarts(settingOf(spacePx)).length === 1 && fits(spacePx),
+    )
+    if (space !== null) return layoutAt(settingOf(space))
   }
+  const most =
+    options.size === 'wall'
+      ? Math.max(leastSpacePx, Math.round(SHARE_FOR_SEVERAL_SYSTEMS * preferred))
+      : preferred
+  const space = largestPassing(leastSpacePx, most, fits)
+  if (space !== null) return layoutAt(settingOf(space))
   // Too high at any size: the width alone decides, and the page scrolls.
-  let space = leastSpacePx
-  while (space > SMALLEST_SPACE_PX && !fitsWidth(settingAt(input, options, space))) space--
-  return layoutAt(settingAt(input, options, space))
+  let smallest = leastSpacePx
+  while (smallest > SMALLEST_SPACE_PX && !fitsWidth(settingOf(smallest))) smallest--
+  return layoutAt(settingOf(smallest))
 }

@@ -26,15 +26,15 @@ function lozengePush(moving: Box, still: Box): number {
   return Math.abs(dx) >= needed ? 0 : needed - dx
 }
 
-/** How far to the right a mark must go to stand clear of another; 0 when it does. */
-function pushRight(moving: Mark, still: Mark): number {
-  if (mayTouch(moving, still)) return 0
-  if (isLozenge(moving) && isLozenge(still)) return lozengePush(moving.box, still.box)
-  return isOverlapping(moving.box, still.box) ? still.box.right - moving.box.left : 0
+/** How far to the right a mark, with its box grown or moved, must go to stand clear of another; 0 when it does. */
+function pushRight(moving: Mark, box: Box, still: Mark): number {
+  if (!isOverlapping(box, still.box) || mayTouch(moving, still)) return 0
+  if (isLozenge(moving) && isLozenge(still)) return lozengePush(box, still.box)
+  return still.box.right - box.left
 }
 
 /** Whether two marks of the score stand in each other's way. */
-export const isColliding = (a: Mark, b: Mark): boolean => pushRight(a, b) > 0
+export const isColliding = (a: Mark, b: Mark): boolean => pushRight(a, a.box, b) > 0
 
 const HAIR_PX = 0.01
 
@@ -43,13 +43,15 @@ const HAIR_PX = 0.01
  * two notes a step apart is moved in a chord.
  */
 export function clearingPx(marks: readonly Mark[], standing: readonly Mark[], clearancePx: number): number {
+  if (standing.length === 0) return 0
+  const grown = marks.map((mark) => growBox(mark.box, clearancePx))
   let dx = 0
   for (;;) {
     let push = 0
-    for (const mark of marks) {
-      const grown = { ...mark, box: growBox(moveBox(mark.box, dx, 0), clearancePx) }
-      for (const other of standing) push = Math.max(push, pushRight(grown, other))
-    }
+    marks.forEach((mark, i) => {
+      const box = moveBox(grown[i] as Box, dx, 0)
+      for (const other of standing) push = Math.max(push, pushRight(mark, box, other))
+    })
     if (push === 0) return dx
     dx += push + HAIR_PX
   }
