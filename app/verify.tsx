@@ -1,6 +1,6 @@
 import { useLocalSearchParams } from 'expo-router'
 import { useEffect, useRef, useState } from 'react'
-import { auth, Frame, loadSession, parseReturnPath } from '@/components/session'
+import { auth, Frame, loadSession, takeReturnPath } from '@/components/session'
 import { LinkButton, Loading, Notice, Refused } from '@/components/ui'
 import { useWords } from '@/components/words'
 
@@ -10,14 +10,16 @@ import { useWords } from '@/components/words'
  */
 export default function Verify() {
   const words = useWords().entry
-  const { token, error, to } = useLocalSearchParams<{ token?: string; error?: string; to?: string }>()
+  const { token, error } = useLocalSearchParams<{ token?: string; error?: string }>()
   const [state, setState] = useState<'busy' | 'done' | 'bad'>(error ? 'bad' : token ? 'busy' : 'done')
   const isAsked = useRef(false)
+  const [to, setTo] = useState('/home')
 
   useEffect(() => {
     // A link works once: asking twice would say that it was used already.
     if (isAsked.current) return
     isAsked.current = true
+    setTo(takeReturnPath())
     if (token && !error) {
       void auth.verify(token).then(async (result) => {
         await loadSession()
@@ -34,7 +36,7 @@ export default function Verify() {
           <Notice kind="good" title={words.verify.doneTitle}>
             {words.verify.done}
           </Notice>
-          <LinkButton kind="go" href={parseReturnPath(to)} label={words.verify.on} />
+          <LinkButton kind="go" href={to} label={words.verify.on} />
         </>
       ) : null}
       {state === 'bad' ? (

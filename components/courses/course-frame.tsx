@@ -4,8 +4,11 @@ import { Frame } from '@/components/session'
 import { space, useTheme } from '@/components/theme'
 import { LinkText, Name } from '@/components/ui'
 import { useWords } from '@/components/words'
+import { canInCourse } from '@/shared/api/course-acts'
 import type { Course } from '@/shared/api/courses'
 import type { Me } from '@/shared/api/people'
+
+const PLACES = ['lessons', 'members'] as const
 
 /** The page of a course, with the two things there are in it: lessons and people. */
 export function CourseFrame({
@@ -41,25 +44,27 @@ export function CourseFrame({
             borderColor: colors.hairline,
           }}
         >
-          {(['lessons', 'members'] as const).map((place) => (
-            <View
-              key={place}
-              style={{
-                marginBottom: -1,
-                borderBottomWidth: 3,
-                borderColor: place === here ? colors.azurite : 'transparent',
-              }}
-            >
-              <LinkText
-                href={place === 'lessons' ? `/courses/${course.id}` : `/courses/${course.id}/members`}
-                isCurrent={place === here}
-                isStrong={place === here}
-                tone={place === here ? 'lampblack' : 'lead'}
-                label={words.courses.course[place]}
-                style={{ textDecorationLine: 'none', paddingVertical: 10 }}
-              />
-            </View>
-          ))}
+          {PLACES.filter((place) => place === 'lessons' || canInCourse(course.myRole, 'see members')).map(
+            (place) => (
+              <View
+                key={place}
+                style={{
+                  marginBottom: -1,
+                  borderBottomWidth: 3,
+                  borderColor: place === here ? colors.azurite : 'transparent',
+                }}
+              >
+                <LinkText
+                  href={place === 'lessons' ? `/courses/${course.id}` : `/courses/${course.id}/members`}
+                  isCurrent={place === here}
+                  isStrong={place === here}
+                  tone={place === here ? 'lampblack' : 'lead'}
+                  label={words.courses.course[place]}
+                  style={{ textDecorationLine: 'none', paddingVertical: 10 }}
+                />
+              </View>
+            ),
+          )}
         </View>
       ) : null}
       {course ? <View style={{ gap: space.one, marginTop: -space.one }}>{children}</View> : children}

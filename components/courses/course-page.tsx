@@ -3,16 +3,15 @@ import { Asked, useMutation, useQuery } from '@/components/api'
 import { Button, Dialog, LinkButton, Notice, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
+import { canInCourse } from '@/shared/api/course-acts'
 import type { Course } from '@/shared/api/courses'
 import type { Me } from '@/shared/api/people'
 import { CourseFrame } from './course-frame'
 import { LessonList } from './lesson-list'
 import { NameDialog } from './name-dialog'
 
-/** Who of a course may prepare and lead its lessons. */
-const leads = (course: Course): boolean => course.myRole !== 'student'
-/** Who may rename it, archive it and decide who is in it. */
-const owns = (course: Course): boolean => course.myRole === 'teacher' || course.myRole === 'administrator'
+const leads = (course: Course): boolean => canInCourse(course.myRole, 'prepare lesson')
+const owns = (course: Course): boolean => canInCourse(course.myRole, 'change course')
 
 /** A course: its lessons, and for its teacher the course itself. */
 export function CoursePage({ me, courseId }: Readonly<{ me: Me; courseId: string }>) {

@@ -5,6 +5,7 @@ import { space, useWidth } from '@/components/theme'
 import { Button, Dialog, Empty, Field, Pager, Select, Table, Txt, type Sort } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
+import { canInCourse } from '@/shared/api/course-acts'
 import type { Member } from '@/shared/api/courses'
 import { PAGE_SIZE, type CourseRole } from '@/shared/api/fields'
 import type { Me } from '@/shared/api/people'
@@ -35,7 +36,7 @@ export function MembersPage({ me, courseId }: Readonly<{ me: Me; courseId: strin
   const removeMember = useMutation(api.courses.removeMember)
   const [removing, setRemoving] = useState<Member | null>(null)
   const [isInviting, setInviting] = useState(false)
-  const mayChange = course?.myRole === 'teacher' || course?.myRole === 'administrator'
+  const mayChange = course !== null && canInCourse(course.myRole, 'change members')
 
   const setRole = async (member: Member, role: CourseRole) => {
     await updateMember.run({ params: { courseId, userId: member.userId }, body: { role } })

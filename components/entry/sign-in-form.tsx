@@ -1,7 +1,7 @@
 import { useRouter } from 'expo-router'
 import { View } from 'react-native'
 import { firstProblems, RefusalNotice, useAct } from '@/components/api'
-import { auth, loadSession } from '@/components/session'
+import { auth, keepReturnPath, loadSession } from '@/components/session'
 import { space } from '@/components/theme'
 import { Button, Field, Form, LinkText, Notice, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
@@ -15,9 +15,10 @@ export function SignInForm({ to, isDemo }: Readonly<{ to: string; isDemo: boolea
   const router = useRouter()
   const form = useForm({ email: '', password: '' })
   const signIn = useAct(auth.signIn)
-  const resend = useAct(() =>
-    auth.sendVerification(form.values.email, `/verify?to=${encodeURIComponent(to)}`),
-  )
+  const resend = useAct(() => {
+    keepReturnPath(to)
+    return auth.sendVerification(form.values.email.trim(), '/verify')
+  })
 
   const submit = async () => {
     if (!form.report(firstProblems(signInSchema, form.values))) return

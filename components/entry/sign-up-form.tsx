@@ -1,6 +1,6 @@
 import { useState } from 'react'
 import { firstProblems, RefusalNotice, useAct } from '@/components/api'
-import { auth } from '@/components/session'
+import { auth, keepReturnPath } from '@/components/session'
 import { Button, Field, Form, LinkText, Notice, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { signUpSchema } from './schemas'
@@ -20,10 +20,11 @@ export function SignUpForm({ to, isDemo }: Readonly<{ to: string; isDemo: boolea
       name: name.trim(),
       email: email.trim(),
       password,
-      callbackURL: `/verify?to=${encodeURIComponent(to)}`,
+      callbackURL: '/verify',
     })
-    if (result.ok) setSentTo(email.trim())
-    else form.report(result.reason.fields)
+    if (!result.ok) return void form.report(result.reason.fields)
+    keepReturnPath(to)
+    setSentTo(email.trim())
   }
 
   if (sentTo) {

@@ -32,6 +32,8 @@ async function send(
     return fail(refusalOf('offline'))
   }
   if (response.ok) return ok(answer)
+  // Refusals that our own limits and schemas made inside it.
+  if ((answer as { error?: unknown } | null)?.error) return fail(readRefusal(response.status, answer))
   const code = (answer as { code?: unknown } | null)?.code
   const field = typeof code === 'string' ? FIELDS[code] : undefined
   if (field) return fail(refusalOf('invalid', { fields: [field] }))

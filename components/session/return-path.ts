@@ -12,3 +12,27 @@ export function parseReturnPath(to: unknown): string {
     return '/home'
   }
 }
+
+const KEY = 'bicinium.return'
+
+/**
+ * Keeps where somebody was going while their address is confirmed: the message's link opens a page that knows nothing of
+ * it. In the same browser, until it is taken.
+ */
+export function keepReturnPath(to: string): void {
+  try {
+    localStorage.setItem(KEY, to)
+  } catch {
+    // Then the way leads home.
+  }
+}
+
+export function takeReturnPath(): string {
+  try {
+    const to = localStorage.getItem(KEY)
+    localStorage.removeItem(KEY)
+    return parseReturnPath(to)
+  } catch {
+    return parseReturnPath(null)
+  }
+}

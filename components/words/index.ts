@@ -1,3 +1,4 @@
+import { cantus } from './en/cantus'
 import { courses } from './en/courses'
 import { people } from './en/people'
 import { account } from './en/account'
@@ -15,6 +16,7 @@ import { wall } from './en/wall'
 
 /** Every word of the interface, one typed table an area. */
 const EN = {
+  cantus,
   courses,
   people,
   account,
