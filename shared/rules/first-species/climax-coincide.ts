@@ -9,7 +9,6 @@ import { comparePitches, type Pitch } from '@/shared/theory/pitch'
 type State = Readonly<{
   lineTop: Pitch | null
   cantusTop: Pitch | null
-  /** Sonorities with the line at its top, by which a later equal top of the cantus is not confused. */
   shared: readonly Sonority[]
 }>
 
@@ -23,19 +22,19 @@ export const climaxCoincide: Rule<State, NoParams> = {
   species: FIRST_SPECIES,
   params: NO_PARAMS,
   start: () => ({ lineTop: null, cantusTop: null, shared: [] }),
+  // The cantus is read on where the line is not written, so that its top is known from the place in the reading.
   step: (state, moment) => {
     const now = sonorityOf(moment)
-    if (now === null) return goOn(state)
-    const lineTop = isHigher(now.note, state.lineTop) ? now.note : state.lineTop
-    const cantusTop = isHigher(now.other, state.cantusTop) ? now.other : state.cantusTop
+    const { other } = moment
+    const lineTop = now !== null && isHigher(now.note, state.lineTop) ? now.note : state.lineTop
+    const cantusTop = other !== null && isHigher(other, state.cantusTop) ? other : state.cantusTop
     const isNewTop = lineTop !== state.lineTop || cantusTop !== state.cantusTop
     const kept = isNewTop ? [] : state.shared
-    const isBoth = isEqual(now.note, lineTop) && isEqual(now.other, cantusTop)
+    const isBoth = now !== null && isEqual(now.note, lineTop) && isEqual(now.other, cantusTop)
     return goOn({ lineTop, cantusTop, shared: isBoth ? [...kept, now] : kept })
   },
   finish: ({ shared }, _params, isComplete) =>
     isComplete && shared.length > 0 ? breachAt('together', shared) : null,
-  // The cantus's own top is known from the place in the reading.
   key: ({ lineTop, shared }) => pack([packPitch(lineTop), PITCH_ROOM], [shared.length > 0 ? 1 : 0, 2]),
   explain: {
     title: 'Two peaks, not one',
