@@ -1,8 +1,8 @@
 import type { FieldProblem } from '@/shared/api/errors'
 
 const MARKS_IN_A_ROW = /\p{M}{4,}/u
-const INVISIBLE =
-  /[\u00ad\u034f\u115f\u1160\u17b4\u17b5\u180b-\u180e\u200b\u2060-\u2064\u206a-\u206f\u3164\ufe00-\ufe0f\uffa0\ufff9-\ufffb]/u
+/** Characters that show nothing, but for the joiners and the emoji selector that names and scripts do use. */
+const INVISIBLE = /(?!\u200c|\u200d|\ufe0f)\p{Default_Ignorable_Code_Point}/u
 
 const folded = (name: string) =>
   name
