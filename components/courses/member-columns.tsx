@@ -54,7 +54,11 @@ export function memberColumns({
   if (!mayChange) return facts
   return [
     facts[0] as Column<Member>,
-    { key: 'email', label: words.email, cell: ({ email }) => <Txt>{email ?? ''}</Txt> },
+    {
+      key: 'email',
+      label: words.email,
+      cell: ({ email }) => <Txt>{email ? <Name isAddress>{email}</Name> : null}</Txt>,
+    },
     facts[1] as Column<Member>,
     {
       key: 'joined',

@@ -2,7 +2,7 @@ import { useDeferredValue, useState } from 'react'
 import { View } from 'react-native'
 import { Asked, RefusalNotice, useMutation, useQuery, type ReplyOf } from '@/components/api'
 import { Frame } from '@/components/session'
-import { Button, Empty, Field, Name, Pager, Table, Txt, type Column } from '@/components/ui'
+import { Empty, Field, Name, Pager, Table, Toggle, Txt, type Column } from '@/components/ui'
 import { formatDate, useWords } from '@/components/words'
 import { api } from '@/shared/api'
 import { PAGE_SIZE } from '@/shared/api/fields'
@@ -40,7 +40,7 @@ export function PeoplePage({ me }: Readonly<{ me: Me }>) {
       label: words.email,
       cell: (person) => (
         <Txt>
-          {person.email}
+          {person.email ? <Name isAddress>{person.email}</Name> : null}
           {person.isVerified ? null : <Txt kind="note" tone="orpiment">{` ${words.unconfirmed}`}</Txt>}
         </Txt>
       ),
@@ -64,11 +64,11 @@ export function PeoplePage({ me }: Readonly<{ me: Me }>) {
       onPhone: 'line',
       width: '150px',
       cell: (person) => (
-        <Button
+        <Toggle
           label={person.mayMakeCourses ? words.yes : words.no}
-          hint={words.mayMakeFor(person.name)}
-          isOn={person.mayMakeCourses}
-          onPress={() => void setMayMake(person, !person.mayMakeCourses)}
+          spoken={words.mayMakeFor(person.name)}
+          value={person.mayMakeCourses}
+          onChange={(mayMake) => void setMayMake(person, mayMake)}
         />
       ),
     },

@@ -54,7 +54,7 @@ export function Field(props: FieldProps) {
   const [isShown, setShown] = useState(false)
   const [isFocused, setFocused] = useState(false)
   const { heightPx } = useTarget()
-  const fieldPx = heightPx + (props.isLarge ? 12 : 2)
+  const fieldPx = heightPx + (props.isLarge ? 12 : 0)
   const about = problem || hint ? `${id}-about` : undefined
 
   const style: CSSProperties = {

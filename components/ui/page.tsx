@@ -23,6 +23,9 @@ export type PageProps = Readonly<{
   children: ReactNode
 }>
 
+/** Beyond this a row of a table can no longer be followed across. */
+const WIDEST_PX = 2200
+
 /** The sheet that a page is written on: margins, heading, and the tab's name. */
 export function Page({
   title,
@@ -42,7 +45,7 @@ export function Page({
       id="page"
       style={{
         width: '100%',
-        maxWidth: width === 'text' ? MEASURE_PX + 2 * marginPx : 1560 + 2 * marginPx,
+        maxWidth: (width === 'text' ? MEASURE_PX : WIDEST_PX) + 2 * marginPx,
         paddingHorizontal: marginPx,
         paddingTop: isWide ? space.wide : space.one,
         paddingBottom: space.triple,
@@ -66,31 +69,31 @@ export function Page({
           style={{
             flexDirection: 'row',
             flexWrap: 'wrap',
-            alignItems: 'center',
+            alignItems: 'flex-start',
             justifyContent: 'space-between',
             columnGap: space.wide,
             rowGap: space.half,
           }}
         >
-          <View style={{ minWidth: 0, flexShrink: 1 }}>
+          <View style={{ minWidth: 0, flexShrink: 1, flexGrow: 1, flexBasis: 280, gap: space.tiny }}>
             <Heading
               level={1}
               kind={size === 'display' ? (isWide ? 'wall' : 'head') : isWide ? 'head' : 'large'}
             >
               {heading ?? title}
             </Heading>
+            {typeof lede === 'string' ? (
+              <Txt tone="lead" style={{ maxWidth: MEASURE_PX }}>
+                {lede}
+              </Txt>
+            ) : (
+              lede
+            )}
           </View>
           {actions ? (
             <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small }}>{actions}</View>
           ) : null}
         </View>
-        {typeof lede === 'string' ? (
-          <Txt tone="lead" style={{ maxWidth: MEASURE_PX }}>
-            {lede}
-          </Txt>
-        ) : (
-          lede
-        )}
       </View>
       {children}
     </View>

@@ -175,7 +175,8 @@ function Blocks<Row>({ label, columns, rows, keyOf }: Parameters<typeof Table<Ro
             </View>
           ))}
           {part('foot').map((column) => (
-            <View key={column.key} style={{ marginTop: space.tiny }}>
+            // A frameless button's words begin where the other words do.
+            <View key={column.key} style={{ marginLeft: -space.small }}>
               {column.cell(row)}
             </View>
           ))}

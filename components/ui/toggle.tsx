@@ -11,8 +11,11 @@ export function Toggle({
   onChange,
   hint,
   isDisabled = false,
+  spoken,
 }: Readonly<{
   label: string
+  /** Its name for a screen reader, where the words beside it do not say what is switched. */
+  spoken?: string
   value: boolean
   onChange: (value: boolean) => void
   hint?: string
@@ -38,6 +41,7 @@ export function Toggle({
         className="covers"
         checked={value}
         disabled={isDisabled}
+        aria-label={spoken}
         aria-describedby={hint ? id : undefined}
         onChange={(event) => onChange(event.target.checked)}
         style={{ cursor: 'inherit' }}
