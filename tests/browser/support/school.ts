@@ -8,7 +8,7 @@ import { findFreePort } from '@/db/cluster/find-free-port'
 import { demo } from '@/shared/api/demo'
 import { createTestDatabase } from '@/tests/support/test-database'
 
-const ENTRY = 'server/start-up/serve.ts'
+const ENTRY = 'server/main.ts'
 const PATIENCE_MS = 45_000
 const POLL_MS = 50
 

@@ -1,0 +1,54 @@
+import type { BrowserContext } from 'playwright-core'
+import { cantus } from '@/shared/api/cantus'
+import { courses } from '@/shared/api/courses'
+import { lessons } from '@/shared/api/lessons'
+import { ask } from './ask'
+
+/** Every screen of the product, with whose eyes it is looked at. `null`: nobody is signed in. */
+export type Screen = Readonly<{
+  name: string
+  who: 'teacher' | 'student' | 'administrator' | 'wall' | null
+  path: string
+}>
+
+/** Addresses of all screens, in a school where `lessonId` is an open lesson of the teacher's course. */
+export async function listScreens(
+  teacher: BrowserContext,
+  origin: string,
+  lessonId: string,
+): Promise<readonly Screen[]> {
+  const { courses: own } = await ask(teacher.request, origin, courses.list)
+  const courseId = own.find(({ myRole }) => myRole === 'teacher')?.id ?? ''
+  const { cantus: library } = await ask(teacher.request, origin, cantus.list)
+  const link = await ask(teacher.request, origin, courses.createLink, {
+    params: { courseId },
+    body: { role: 'student' },
+  })
+  const wall = await ask(teacher.request, origin, lessons.createWallLink, { params: { lessonId } })
+  const pathOf = (url: string | null): string => new URL(url ?? '/', origin).pathname
+  return [
+    { name: 'landing', who: null, path: '/' },
+    { name: 'join', who: null, path: '/join' },
+    { name: 'sign-in', who: null, path: '/sign-in' },
+    { name: 'sign-up', who: null, path: '/sign-up' },
+    { name: 'forgot', who: null, path: '/forgot' },
+    { name: 'reset', who: null, path: '/reset?token=spent' },
+    { name: 'verify', who: null, path: '/verify?token=spent' },
+    { name: 'invitation', who: null, path: pathOf(link.invitation.url) },
+    { name: 'not-found', who: null, path: '/no/such/page' },
+    { name: 'home', who: 'teacher', path: '/home' },
+    { name: 'account', who: 'teacher', path: '/account' },
+    { name: 'course', who: 'teacher', path: `/courses/${courseId}` },
+    { name: 'members', who: 'teacher', path: `/courses/${courseId}/members` },
+    { name: 'new-lesson', who: 'teacher', path: `/courses/${courseId}/new-lesson` },
+    { name: 'cantus-library', who: 'teacher', path: '/cantus' },
+    { name: 'cantus-new', who: 'teacher', path: '/cantus/new' },
+    { name: 'cantus', who: 'teacher', path: `/cantus/${library[0]?.id}` },
+    { name: 'lectern', who: 'teacher', path: `/lessons/${lessonId}/lectern` },
+    { name: 'desk', who: 'student', path: `/lessons/${lessonId}/desk` },
+    { name: 'refused', who: 'student', path: `/lessons/${lessonId}/lectern` },
+    { name: 'wall', who: 'wall', path: pathOf(wall.url) },
+    { name: 'people', who: 'administrator', path: '/people' },
+    { name: 'demo-mail', who: null, path: '/demo/mail' },
+  ]
+}
