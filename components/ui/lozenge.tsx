@@ -1,4 +1,3 @@
-import Svg, { Polygon } from 'react-native-svg'
 import { useTheme } from '@/components/theme'
 import type { Tone } from './txt'
 
@@ -11,13 +10,18 @@ export function Lozenge({
   const { colors } = useTheme()
   const color = colors[tone]
   return (
-    <Svg width={sizePx} height={sizePx} viewBox="0 0 12 12" aria-hidden style={{ flexShrink: 0 }}>
-      <Polygon
-        points={kind === 'filled' ? '6,0 12,6 6,12 0,6' : '6,1.2 10.8,6 6,10.8 1.2,6'}
-        fill={kind === 'filled' ? color : 'none'}
-        stroke={kind === 'filled' ? 'none' : color}
-        strokeWidth={1.6}
-      />
-    </Svg>
+    <svg
+      width={sizePx}
+      height={sizePx}
+      viewBox="0 0 12 12"
+      aria-hidden
+      style={{ display: 'block', flexShrink: 0 }}
+    >
+      {kind === 'filled' ? (
+        <path d="M6 0 12 6 6 12 0 6Z" fill={color} />
+      ) : (
+        <path d="M6 1.2 10.8 6 6 10.8 1.2 6Z" fill="none" stroke={color} strokeWidth={1.6} />
+      )}
+    </svg>
   )
 }

@@ -1,10 +1,10 @@
-import Head from 'expo-router/head'
 import type { ReactNode } from 'react'
 import { View } from 'react-native'
 import { MEASURE_PX, space, useWidth } from '@/components/theme'
 import { Heading } from './heading'
 import { LinkText } from './link-text'
 import { Txt } from './txt'
+import { useTitle } from './use-title'
 
 export type PageProps = Readonly<{
   /** Names the browser's tab, and the page's first heading unless `heading` is given. */
@@ -37,6 +37,7 @@ export function Page({
   size = 'plain',
   children,
 }: PageProps) {
+  useTitle(title)
   const { isWide, widthPx } = useWidth()
   const marginPx = widthPx >= 1600 ? 56 : isWide ? space.double : widthPx < 360 ? space.half : space.one
   return (
@@ -54,9 +55,6 @@ export function Page({
         minWidth: 0,
       }}
     >
-      <Head>
-        <title>{`${title} · Bicinium`}</title>
-      </Head>
       <View style={{ gap: space.tiny }}>
         {up ? (
           <Txt kind="note" tone="lead">
