@@ -29,6 +29,10 @@ export type DeskProps = Readonly<{
   kept: KeptState
   here: number | null
   isOffline: boolean
+  /** What hinders the server from keeping anything just now. */
+  hindrance: 'database' | 'disk-full' | null
+  /** The lesson has not been opened yet. */
+  isPrepared: boolean
   isHandUp: boolean
   onHand: () => void
 }>
@@ -101,6 +105,8 @@ export function Desk(props: DeskProps) {
   )
   const notices = (
     <>
+      {props.isPrepared ? <Notice kind="note" title={words.desk.prepared} /> : null}
+      {props.hindrance ? <Notice kind="note" title={words.lesson.hindrance[props.hindrance]} /> : null}
       {props.isOffline ? <Notice kind="note" title={words.lesson.connection.offline} /> : null}
       {player.problem ? <Notice kind="note" title={player.problem} /> : null}
     </>

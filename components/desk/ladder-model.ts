@@ -4,6 +4,7 @@ import type { Judge } from '@/components/lesson/judge'
 import type { LessonView } from '@/components/lesson/lesson-view'
 import { lineWith } from '@/components/lesson/line-with'
 import { barReadBefore, motionInto } from '@/components/lesson/rail'
+import { completedAt } from '@/components/lesson/room'
 import { firstPitch, intervalWord, speakSounding } from '@/components/lesson/spoken'
 import type { Words } from '@/components/words'
 import type { Finding } from '@/shared/rules'
@@ -62,7 +63,9 @@ export function readLadder(
   const rungs = pitches.map((pitch, index): LadderRung => {
     const motion = motionInto(view.exercise, read, view.setAside, bar, pitch)
     const findings = isTold
-      ? judge.ofNotes(tries[index] as Line).filter(({ bars }) => bars.includes(bar))
+      ? judge
+          .ofNotes(tries[index] as Line)
+          .filter((finding) => completedAt(finding, tries[index] as Line) === bar)
       : null
     const sentence = speakSounding({ bar, pitch, cantus, motion, findings }, words)
     return {

@@ -46,6 +46,7 @@ export type LecternProps = Readonly<{
   /** Names of everyone who ever came in, by member id. */
   names: ReadonlyMap<string, string>
   isOffline: boolean
+  hindrance: 'database' | 'disk-full' | null
   pen: LecternPen
   onLesson: (lesson: Lesson) => void
   onLower: (memberId: string) => void
@@ -265,6 +266,7 @@ export function Lectern(props: LecternProps) {
         }
       />
       {props.isOffline ? <Notice kind="note" title={words.lesson.connection.offlineTeacher} /> : null}
+      {props.hindrance ? <Notice kind="bad" title={words.lesson.hindrance[props.hindrance]} /> : null}
       {lesson.status === 'prepared' ? <Notice kind="note" title={words.lectern.openLead} /> : null}
       {lesson.status === 'ended' ? <Notice kind="note" title={words.lectern.endedLead} /> : null}
       <View style={{ flex: 1, flexDirection: isWide ? 'row' : 'column' }}>

@@ -1,6 +1,6 @@
 import type { ProposalGroup } from '@/shared/board'
 import type { Finding } from '@/shared/rules'
-import type { BarNotes } from '@/shared/theory/note'
+import type { BarNotes, Line } from '@/shared/theory/note'
 import type { Judge } from './judge'
 import { barsOf, identityOfNotes } from './line-with'
 
@@ -10,13 +10,8 @@ export type RoomGroup = ProposalGroup & Readonly<{ findings: readonly Finding[] 
 /** A finding on the members' own proposals, and how many members it is true of. */
 export type RoomFinding = Readonly<{ id: string; finding: Finding; count: number }>
 
-/** A note that stands in one bar, for the lozenges. */
-export type RoomMark = Readonly<{
-  bar: number
-  notes: BarNotes
-  count: number
-  tone: 'line' | 'breach' | 'remark'
-}>
+/** A note that stands in one bar, for the lozenges. Remarks are matters of taste and colour nobody's note in public. */
+export type RoomMark = Readonly<{ bar: number; notes: BarNotes; count: number; tone: 'line' | 'breach' }>
 
 const countLevel = (findings: readonly Finding[], level: Finding['level']): number =>
   findings.filter((finding) => finding.level === level).length
@@ -38,19 +33,14 @@ export function rankRoom(groups: readonly ProposalGroup[], judge: Judge): readon
   return groups.map((group) => ({ ...group, findings: judge.ofNotes(group.notes) })).sort(compareGroups)
 }
 
-const toneOf = (findings: readonly Finding[] | undefined): RoomMark['tone'] => {
-  if (!findings || findings.length === 0) return 'line'
-  return findings.some(({ level }) => level === 'law') ? 'breach' : 'remark'
-}
-
 /** Findings of one rule at the same bars are one to the room, whatever notes brought them about. */
 const roomFindingId = ({ ruleId, code, bars }: Finding): string => `${ruleId}/${code}/${bars.join(',')}`
 
-/** The bar where a finding was completed: the last it points at that the proposal wrote. */
-function barOf(finding: Finding, group: RoomGroup): number | null {
+/** The bar where a finding was completed: the last it points at that these notes wrote. */
+export function completedAt(finding: Finding, notes: Line): number | null {
   for (let index = finding.bars.length - 1; index >= 0; index -= 1) {
     const bar = finding.bars[index]
-    if (bar !== undefined && group.notes[bar]) return bar
+    if (bar !== undefined && notes[bar]) return bar
   }
   return null
 }
@@ -76,34 +66,33 @@ export function countFindings(groups: readonly RoomGroup[]): readonly RoomFindin
 }
 
 /**
- * The lozenges for each bar. A lozenge takes the tone that holds for at least half of those who proposed it, so that one
- * hand's way into a note does not colour everybody's.
+ * The lozenges for each bar. One is filled as a breach when at least half of those who proposed it broke a law there, so that
+ * one hand's way into a note does not colour everybody's.
  */
 export function markRoom(groups: readonly RoomGroup[]): readonly RoomMark[] {
-  type Tally = { bar: number; notes: BarNotes; count: number; breach: number; remark: number }
-  const tallies = new Map<string, Tally>()
+  const tallies = new Map<string, { bar: number; notes: BarNotes; count: number; breaches: number }>()
   for (const group of groups) {
-    const byBar = new Map<number, Finding[]>()
-    for (const finding of group.findings) {
-      const bar = barOf(finding, group)
-      if (bar !== null) byBar.set(bar, [...(byBar.get(bar) ?? []), finding])
-    }
+    const broken = new Set(
+      group.findings
+        .filter(({ level }) => level === 'law')
+        .map((finding) => completedAt(finding, group.notes)),
+    )
     for (const bar of barsOf(group.notes)) {
       const notes = group.notes[bar] as BarNotes
       const key = `${bar}=${identityOfNotes(notes)}`
-      const tally = tallies.get(key) ?? { bar, notes, count: 0, breach: 0, remark: 0 }
-      const tone = toneOf(byBar.get(bar))
+      const tally = tallies.get(key) ?? { bar, notes, count: 0, breaches: 0 }
       tally.count += group.count
-      if (tone === 'breach') tally.breach += group.count
-      else if (tone === 'remark') tally.remark += group.count
+      if (broken.has(bar)) tally.breaches += group.count
       tallies.set(key, tally)
     }
   }
   return [...tallies.values()]
-    .map(({ bar, notes, count, breach, remark }): RoomMark => {
-      const tone = 2 * breach >= count ? 'breach' : 2 * (breach + remark) >= count ? 'remark' : 'line'
-      return { bar, notes, count, tone }
-    })
+    .map(({ bar, notes, count, breaches }): RoomMark => ({
+      bar,
+      notes,
+      count,
+      tone: 2 * breaches >= count ? 'breach' : 'line',
+    }))
     .sort(
       (a, b) =>
         a.bar - b.bar || b.count - a.count || (identityOfNotes(a.notes) < identityOfNotes(b.notes) ? -1 : 1),

@@ -2,7 +2,10 @@ import { lesson } from './lesson'
 
 /** The student's desk. */
 export const desk = {
-  titleReleased: (bars: readonly number[]) => lesson.barsHeading(bars),
+  titleReleased: (bars: readonly number[]) => {
+    const words = lesson.barsInSentence(bars)
+    return words.charAt(0).toUpperCase() + words.slice(1)
+  },
   titleNone: 'Nothing to write yet',
   kept: 'kept',
   sending: 'sending',

@@ -123,6 +123,12 @@ export const lesson = {
     offlineTeacher: 'Out of touch with the lesson. What you change is sent when the connection is back.',
     closed: 'The connection is closed.',
   },
+  hindrance: {
+    database:
+      'The school’s server cannot keep anything just now. What is written stays on this device and is sent when it can.',
+    'disk-full':
+      'The school’s server has no room left to keep anything. What is written stays on this device; reading goes on.',
+  },
   loading: 'The lesson is coming up.',
   here: (count: number) => `${count} here`,
   hands: (count: number) => (count === 1 ? '1 hand' : `${count} hands`),

@@ -122,7 +122,7 @@ describe('the room, read as lozenges and counts', () => {
     expect(markRoom(groups).map(({ bar, notes: [note], tone }) => [bar, note?.pitch, tone])).toEqual([
       [6, 'C5', 'line'],
       [6, 'A4', 'line'],
-      [6, 'D5', 'remark'],
+      [6, 'D5', 'line'],
       [7, 'E5', 'breach'],
       [7, 'C5', 'line'],
     ])

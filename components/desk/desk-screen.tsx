@@ -1,0 +1,86 @@
+import { Redirect, type Href } from 'expo-router'
+import Head from 'expo-router/head'
+import { useCallback, useEffect, useMemo, useState } from 'react'
+import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
+import { useEntry } from '@/components/lesson/use-entry'
+import { useLessonRoom } from '@/components/lesson/use-lesson-room'
+import { useWords } from '@/components/words'
+import { can, eraseSheetBar, writeSheetBar } from '@/shared/board'
+import { Desk } from './desk'
+import type { SheetPen } from './use-desk'
+
+/** A student's desk in a lesson: enters, opens the room, and says in words why not. */
+export function DeskScreen({ lessonId }: Readonly<{ lessonId: string }>) {
+  const words = useWords()
+  const { state, reload } = useEntry(lessonId)
+  const { room, view, entry } = useLessonRoom(lessonId, state, reload)
+  const sheetDoc = room.docs?.sheet ?? null
+  const pen = useMemo<SheetPen>(
+    () => ({
+      write: (bar, notes, round) => {
+        if (sheetDoc) writeSheetBar(sheetDoc, bar, notes, round)
+      },
+      erase: (bar) => {
+        if (sheetDoc) eraseSheetBar(sheetDoc, bar)
+      },
+    }),
+    [sheetDoc],
+  )
+  const hand = useHand(room.send, view.presence.hands)
+
+  if (!entry) return <EntryDoor state={state} onRetry={reload} />
+  const { lesson, role } = entry
+  if (!can(role, 'propose')) return <Redirect href={`/lessons/${lessonId}/lectern` as Href} />
+  if (lesson.status === 'ended' || view.connection === 'closed')
+    return (
+      <ClosedDoor
+        title={lesson.title}
+        because={lesson.status === 'ended' ? 'lesson-ended' : view.closedBecause}
+        href={role === 'guest' ? '/' : '/home'}
+        linkLabel={words.desk.leave}
+      />
+    )
+  if (!view.board) return <BoardDoor title={lesson.title} isUnloadable={room.isUnloadable} />
+  return (
+    <>
+      <Head>
+        <title>{`${lesson.title} · ${words.common.product}`}</title>
+      </Head>
+      <Desk
+        title={lesson.title}
+        board={view.board}
+        sheet={view.sheet}
+        pen={pen}
+        kept={view.kept}
+        here={view.connection === 'live' ? view.presence.here : null}
+        isOffline={view.connection !== 'live'}
+        hindrance={view.hindrance}
+        isPrepared={lesson.status === 'prepared'}
+        isHandUp={hand.isUp}
+        onHand={hand.turn}
+      />
+    </>
+  )
+}
+
+/** One's own hand. When no hand is up in the room any more, the teacher has lowered it. */
+function useHand(send: ReturnType<typeof useLessonRoom>['room']['send'], hands: number) {
+  const [isUp, setUp] = useState(false)
+  const [wasSeen, setSeen] = useState(false)
+  useEffect(() => {
+    if (isUp && hands > 0) setSeen(true)
+    if (isUp && wasSeen && hands === 0) {
+      setUp(false)
+      setSeen(false)
+    }
+  }, [isUp, wasSeen, hands])
+  const turn = useCallback(() => {
+    const next = !isUp
+    setUp(next)
+    setSeen(false)
+    void send('hand', { up: next }).then((reply) => {
+      if (!reply.ok) setUp(!next)
+    })
+  }, [isUp, send])
+  return { isUp, turn }
+}
