@@ -1,9 +1,8 @@
-import Head from 'expo-router/head'
 import { useEffect, useRef } from 'react'
 import { View } from 'react-native'
 import { space, useWidth } from '@/components/theme'
 import { useStopOnLeave } from '@/components/sound'
-import { Heading, Loading, Txt } from '@/components/ui'
+import { Heading, Loading, Txt, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { CodeStep } from './code-step'
 import { formatCode, isComplete, parseTypedCode } from './code-entry'
@@ -27,6 +26,7 @@ export function JoinScreen({ code }: Readonly<{ code: string | null }>) {
 
   const isNaming = joining.step === 'name'
   const title = isNaming ? words.join.nameTitle : words.join.title
+  useTitle(title)
   return (
     <View
       role="main"
@@ -43,9 +43,6 @@ export function JoinScreen({ code }: Readonly<{ code: string | null }>) {
         gap: space.small,
       }}
     >
-      <Head>
-        <title>{`${title} · ${words.common.product}`}</title>
-      </Head>
       <Heading level={1}>{title}</Heading>
       {joining.step === 'name' ? (
         <NameStep

@@ -1,4 +1,3 @@
-import Head from 'expo-router/head'
 import { useMemo } from 'react'
 import { useWindowDimensions, View } from 'react-native'
 import { PlayingScore } from '@/components/lesson/playing-score'
@@ -6,6 +5,7 @@ import { ScoreText } from '@/components/lesson/score-text'
 import { speakScore } from '@/components/lesson/spoken'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { useTheme } from '@/components/theme'
+import { useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Lesson } from '@/shared/api/lessons'
 import type { BoardState, ChorusState } from '@/shared/board'
@@ -31,6 +31,7 @@ export type WallProps = Readonly<{
 /** What is projected: the score, the room, what is said of both, the task, and the way in. */
 export function Wall(props: WallProps) {
   const { lesson, board, chorus } = props
+  useTitle(lesson.title)
   const words = useWords()
   const { colors } = useTheme()
   const { width, height } = useWindowDimensions()
@@ -49,9 +50,6 @@ export function Wall(props: WallProps) {
         ...(isStacked ? { minHeight: '100dvh' as never } : { height: '100dvh' as never, overflow: 'hidden' }),
       }}
     >
-      <Head>
-        <title>{`${lesson.title} · ${words.common.product}`}</title>
-      </Head>
       <WallHeader lesson={lesson} view={view} measure={measure} />
       <ScoreText title={words.desk.textTitle} sentences={sentences} />
       <View
