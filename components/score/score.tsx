@@ -92,7 +92,6 @@ export function Score(props: ScoreProps) {
   const followed = playhead?.bar ?? handBar
   const strip = isStrip ? layout.systems[0] : undefined
   const offsetPx = strip ? stripOffsetPx(strip, followed, widthPx) : 0
-  const isPressable = onPressBar !== undefined || onPressStaff !== undefined
 
   return (
     <View
@@ -109,7 +108,7 @@ export function Score(props: ScoreProps) {
           layout={layout}
           bars={input.bars}
           handBar={handBar}
-          onPressBar={isPressable ? pressBar : null}
+          onPressBar={onPressBar ? pressBar : null}
         />
         {playhead && <PlayheadLine layout={layout} playhead={playhead} />}
         {pointer.ghost && (

@@ -7,7 +7,7 @@ import type { ScoreLayout } from '@/shared/notation/score-layout'
 import { staffLineMarks } from '@/shared/notation/system-marks'
 import { PaintedMarks } from './painted-marks'
 
-/** Bars go out of sight softly beside the clefs. */
+/** What is on the staff goes out of sight softly beside the clefs; the staff itself runs on. */
 const fadeFrom = (ground: string, leftPx: number, widthPx: number): object => ({
   style: {
     position: 'absolute',
@@ -30,7 +30,10 @@ export const StripClefs = memo(function StripClefs({
   const painted = useMemo(
     () =>
       system
-        ? paintMarks([...staffLineMarks(system.staves, system.prefixPx, layout.spacePx), ...system.prefix])
+        ? paintMarks([
+            ...staffLineMarks(system.staves, system.prefixPx + layout.spacePx, layout.spacePx),
+            ...system.prefix,
+          ])
         : [],
     [system, layout.spacePx],
   )
@@ -49,7 +52,7 @@ export const StripClefs = memo(function StripClefs({
       />
       <View {...fadeFrom(ground, system.prefixPx, layout.spacePx)} />
       <View>
-        <Svg width={system.prefixPx} height={layout.heightPx} style={{ display: 'flex' }}>
+        <Svg width={system.prefixPx + layout.spacePx} height={layout.heightPx} style={{ display: 'flex' }}>
           <PaintedMarks painted={painted} colors={colors} ground={ground} />
         </Svg>
       </View>

@@ -7,7 +7,7 @@ import {
   wholeRestMarks,
   type StaffSetting,
 } from '@/shared/notation/note-marks'
-import { boxOf, clearingPx } from '@/shared/notation/placing'
+import { boxOf, clearingPx, type Clearance } from '@/shared/notation/placing'
 import type { ScoreBar } from '@/shared/notation/score-input'
 import type { BarNotes } from '@/shared/theory/note'
 import { formatPitch, pitchOf, type Alteration, type Pitch } from '@/shared/theory/pitch'
@@ -44,6 +44,10 @@ export function cantusContent(bar: ScoreBar, signature: number, setting: StaffSe
   const standing = signatureAlteration(signature, pitch.letter)
   return contentOf(wholeNoteMarks(pitch, standing, setting, { ink: 'cantus', group: `${bar.number} cantus` }))
 }
+
+/** Between two lozenges, and beside anything else, in staff spaces. */
+const NESTED_GAP = 0.08
+const BESIDE_GAP = 0.28
 
 /** What stands at one moment, with its number on its right, and on its left. */
 type Entry = Readonly<{
@@ -95,12 +99,12 @@ const moved = (marks: readonly Mark[], dx: number): readonly Mark[] =>
  * Files of lozenges that stand one under the other, first to last. From high to low, each joins the first file in which
  * it touches nobody: notes a step apart fall to either side, as seconds do in a chord.
  */
-function filesOf(entries: readonly Entry[], clearancePx: number): readonly (readonly Entry[])[] {
+function filesOf(entries: readonly Entry[], clearance: Clearance): readonly (readonly Entry[])[] {
   const files: Entry[][] = []
   const lozengesOf = (entry: Entry): readonly Mark[] => entry.right.filter(({ role }) => role === 'lozenge')
   for (const entry of entries) {
     const file = files.find((others) =>
-      others.every((other) => clearingPx(lozengesOf(entry), lozengesOf(other), clearancePx) === 0),
+      others.every((other) => clearingPx(lozengesOf(entry), lozengesOf(other), clearance) === 0),
     )
     if (file) file.push(entry)
     else files.push([entry])
@@ -109,12 +113,12 @@ function filesOf(entries: readonly Entry[], clearancePx: number): readonly (read
 }
 
 /** The notes of one moment: the agreed one on the axis, the proposals file by file to its right or around it. */
-function columnOf(entries: readonly Entry[], clearancePx: number): readonly Mark[] {
+function columnOf(entries: readonly Entry[], clearance: Clearance): readonly Mark[] {
   const sorted = [...entries].sort((a, b) => b.height - a.height)
   const line = sorted.filter((entry) => entry.isLine).flatMap((entry) => entry.right)
   const files = filesOf(
     sorted.filter((entry) => !entry.isLine),
-    clearancePx,
+    clearance,
   )
   const standing: Mark[] = [...line]
   files.forEach((file, i) => {
@@ -122,10 +126,10 @@ function columnOf(entries: readonly Entry[], clearancePx: number): readonly Mark
     const isOutward = i === 0 && files.length > 1 && line.length === 0
     const sides = file.map((entry) => (isOutward ? entry.left : entry.right))
     // In a file everyone stands at one distance, the greatest that any needs.
-    const dx = Math.max(...sides.map((marks) => clearingPx(marks, standing, clearancePx)))
+    const dx = Math.max(...sides.map((marks) => clearingPx(marks, standing, clearance)))
     for (const marks of sides) {
       const own = moved(marks, dx)
-      standing.push(...moved(own, clearingPx(own, standing, clearancePx)))
+      standing.push(...moved(own, clearingPx(own, standing, clearance)))
     }
   })
   const box = boxOf(standing.filter((mark) => mark.role === 'lozenge' || mark.role === 'count'))
@@ -136,12 +140,12 @@ function columnOf(entries: readonly Entry[], clearancePx: number): readonly Mark
 /** The line's staff in a bar: the agreed line and the proposals, moment by moment from left to right. */
 export function lineContent(bar: ScoreBar, signature: number, setting: StaffSetting): StaffContent {
   const entries = entriesOf(bar, signature, setting)
-  const clearancePx = 0.08 * setting.spacePx
+  const clearance = { nestedPx: NESTED_GAP * setting.spacePx, besidePx: BESIDE_GAP * setting.spacePx }
   const marks: Mark[] = []
   for (const tick of [...new Set(entries.map((entry) => entry.tick))].sort((a, b) => a - b)) {
     const column = columnOf(
       entries.filter((entry) => entry.tick === tick),
-      clearancePx,
+      clearance,
     )
     const before = boxOf(marks)
     const box = boxOf(column)

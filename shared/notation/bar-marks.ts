@@ -14,7 +14,7 @@ import {
 import { ellipsise, measureTextPx, textHeightPx } from '@/shared/notation/measure-text'
 import type { BarMotion } from '@/shared/notation/score-input'
 import { letteringOf } from '@/shared/notation/sizes'
-import { HOOK_STAFF_SPACES, type SystemRows } from '@/shared/notation/system-heights'
+import { frozenLinesPx, HOOK_STAFF_SPACES, type SystemRows } from '@/shared/notation/system-heights'
 
 /** A bar in its system: where it is, and how its neighbours stand. */
 export type PlacedBar = Readonly<{
@@ -141,8 +141,7 @@ function headLineMarks(placed: PlacedBar, rows: SystemRows, spacePx: number): re
   if (bar.state === 'frozen') {
     const thickness = crispPx(0.09, spacePx)
     const name = { role: 'head-line', ink: 'quiet', group } as const
-    const apart = Math.max(3, Math.round(0.34 * spacePx))
-    return [0, apart].map((dy) =>
+    return [0, frozenLinesPx(spacePx)].map((dy) =>
       ruleMark(name, [inset, y + dy], [placed.widthPx - inset, y + dy], thickness),
     )
   }

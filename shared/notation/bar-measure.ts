@@ -9,6 +9,7 @@ import { letteringOf, SIZE_FACTS } from '@/shared/notation/sizes'
 export const MOTION_HALF_STAFF_SPACES = 0.72
 const MOTION_GAP = 0.35
 const BAR_PADDING = 0.7
+const MINI_BAR_PADDING = 0.5
 const FOLD_WIDTH = 1.9
 const MOST_ASKED_FOR_LABEL = 5
 
@@ -42,6 +43,7 @@ export function measureBars(
   const { weights } = SIZE_FACTS[options.size]
   const lettering = letteringOf(spacePx)
   const isMini = options.size === 'mini'
+  const paddingPx = (isMini ? MINI_BAR_PADDING : BAR_PADDING) * spacePx
   const hasRail = clefs.line !== null && !isMini
 
   return bars.map((bar, i) => {
@@ -76,8 +78,8 @@ export function measureBars(
     const railRight = hasRail ? figureHalf + motionPx : 0
     const boxes = [content.cantus.box, content.line.box].filter((box) => box !== null)
     const endPx = i === bars.length - 1 && !isMini ? CLOSING_WIDTH_STAFF_SPACES * spacePx : 0
-    const leftPx = Math.max(railLeft, ...boxes.map((box) => BAR_PADDING * spacePx - box.left))
-    const rightPx = Math.max(railRight, ...boxes.map((box) => BAR_PADDING * spacePx + box.right)) + endPx
+    const leftPx = Math.max(railLeft, ...boxes.map((box) => paddingPx - box.left))
+    const rightPx = Math.max(railRight, ...boxes.map((box) => paddingPx + box.right)) + endPx
     const labelPx =
       bar.label === null || isMini
         ? 0
@@ -93,7 +95,7 @@ export function measureBars(
       leftPx,
       rightPx,
       leastPx: Math.ceil(
-        Math.max(leftPx + rightPx, numberPx + 1.2 * spacePx, labelPx + 0.8 * spacePx + endPx),
+        Math.max(leftPx + rightPx, isMini ? 0 : numberPx + 1.2 * spacePx, labelPx + 0.8 * spacePx + endPx),
       ),
       weight: weights[bar.state] * (options.size === 'strip' && bar.number === options.handBar ? 1.15 : 1),
       endPx,

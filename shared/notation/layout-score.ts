@@ -44,11 +44,15 @@ type Setting = Readonly<{
   measured: readonly MeasuredBar[]
 }>
 
+/** A few bars of a proposal are read beside their score; a cantus by itself needs its clef. */
+const hasClefs = ({ clefs }: ScoreInput, { size }: ScoreLayoutOptions): boolean =>
+  size !== 'mini' || clefs.line === null
+
 function settingAt(input: ScoreInput, options: ScoreLayoutOptions, spacePx: number): Setting {
   const isMini = options.size === 'mini'
   const staves = stavesOf(input, isMini)
   const clefs = staves.map(({ clef }) => clef)
-  const prefixPx = isMini ? 0 : prefixWidthPx(clefs, input.signature, spacePx)
+  const prefixPx = hasClefs(input, options) ? prefixWidthPx(clefs, input.signature, spacePx) : 0
   return { input, options, spacePx, staves, prefixPx, measured: measureBars(input, options, spacePx) }
 }
 
@@ -170,6 +174,7 @@ function layoutSystem(
       clef,
       box: unite(bars.map((bar) => bar.content[voice].box)),
     })),
+    signature: hasClefs(input, options) ? input.signature : null,
     hasLabels: !isMini && input.bars.some((bar) => bar.label !== null),
     arcLevels: highest(spanning.arcs, arcsHere),
     bracketLevels: isMini ? 0 : Math.max(...spanning.brackets.map((level) => level + 1), 0),
@@ -223,7 +228,7 @@ function layoutSystem(
     stavesBox: { left: 0, right: widthPx, top, bottom },
     railPx: rows.railPx,
     staffLines: staffLineMarks(rows.staves, widthPx, spacePx),
-    prefix: isMini ? [] : prefixMarks(rows.staves, input.signature, spacePx),
+    prefix: hasClefs(input, options) ? prefixMarks(rows.staves, input.signature, spacePx) : [],
     spans,
     bars: placedBars,
   }
@@ -255,8 +260,12 @@ function layoutAt(setting: Setting): ScoreLayout {
 
 const fitsWidth = ({ measured, options, prefixPx }: Setting): boolean =>
   options.size === 'mini'
-    ? measured.reduce((sum, bar) => sum + bar.leastPx, 0) <= options.widthPx
+    ? measured.reduce((sum, bar) => sum + bar.leastPx, prefixPx) <= options.widthPx
     : measured.every((bar) => prefixPx + bar.leastPx <= options.widthPx)
+
+/** Bars keep at least a tenth of spare width. */
+const isRoomy = ({ measured, options, prefixPx, spacePx }: Setting): boolean =>
+  prefixPx + measured.reduce((sum, bar) => sum + naturalPx(bar, spacePx), 0) <= 0.9 * options.widthPx
 
 /** The largest whole number from `least` to `most` that passes, or null; whatever is smaller than one that passes does too. */
 function largestPassing(least: number, most: number, isPassing: (value: number) => boolean): number | null {
@@ -281,7 +290,7 @@ const SHARE_FOR_SEVERAL_SYSTEMS = 0.72
  * music fits: on the wall on one system where that keeps it legible from the back row, elsewhere on as many as it needs.
  */
 export function layoutScore(input: ScoreInput, options: ScoreLayoutOptions): ScoreLayout {
-  const { spaceFor, leastSpacePx } = SIZE_FACTS[options.size]
+  const { spaceFor, leastSpacePx, mostGrowth } = SIZE_FACTS[options.size]
   const preferred = spaceFor(options.widthPx)
   const { maxHeightPx } = options
   const settings = new Map<number, Setting>()
@@ -296,11 +305,10 @@ export function layoutScore(input: ScoreInput, options: ScoreLayoutOptions): Sco
 
   if (options.size === 'wall') {
     const least = Math.max(leastSpacePx, Math.ceil(LEAST_SHARE_FOR_ONE_SYSTEM * preferred))
-    const space = largestPassing(
-      least,
-      preferred,
-      (spacePx) => systemStarts(settingOf(spacePx)).length === 1 && fits(spacePx),
-    )
+    const most = maxHeightPx === undefined ? preferred : Math.round(mostGrowth * preferred)
+    const isComfortable = (spacePx: number): boolean =>
+      systemStarts(settingOf(spacePx)).length === 1 && (spacePx <= preferred || isRoomy(settingOf(spacePx)))
+    const space = largestPassing(least, most, (spacePx) => isComfortable(spacePx) && fits(spacePx))
     if (space !== null) return layoutAt(settingOf(space))
   }
   const most =

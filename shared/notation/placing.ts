@@ -38,19 +38,32 @@ export const isColliding = (a: Mark, b: Mark): boolean => pushRight(a, a.box, b)
 
 const HAIR_PX = 0.01
 
+/** Two lozenges may nest closely; numbers, accidentals and noteheads want air beside them. */
+export type Clearance = Readonly<{ nestedPx: number; besidePx: number }>
+
 /**
  * How far marks that belong together have to move to the right to be clear of those already standing, as the second of
  * two notes a step apart is moved in a chord.
  */
-export function clearingPx(marks: readonly Mark[], standing: readonly Mark[], clearancePx: number): number {
+export function clearingPx(marks: readonly Mark[], standing: readonly Mark[], clearance: Clearance): number {
   if (standing.length === 0) return 0
-  const grown = marks.map((mark) => growBox(mark.box, clearancePx))
+  const { nestedPx, besidePx } = clearance
+  const nested = marks.map((mark) => growBox(mark.box, nestedPx))
+  const beside = nested.map((box) => ({
+    ...box,
+    left: box.left + nestedPx - besidePx,
+    right: box.right - nestedPx + besidePx,
+  }))
   let dx = 0
   for (;;) {
     let push = 0
     marks.forEach((mark, i) => {
-      const box = moveBox(grown[i] as Box, dx, 0)
-      for (const other of standing) push = Math.max(push, pushRight(mark, box, other))
+      const nestedBox = moveBox(nested[i] as Box, dx, 0)
+      const besideBox = moveBox(beside[i] as Box, dx, 0)
+      for (const other of standing) {
+        const box = isLozenge(mark) && isLozenge(other) ? nestedBox : besideBox
+        push = Math.max(push, pushRight(mark, box, other))
+      }
     })
     if (push === 0) return dx
     dx += push + HAIR_PX

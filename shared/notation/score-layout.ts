@@ -4,7 +4,8 @@ import type { Clef } from '@/shared/theory/clef'
 
 /**
  * Where a score is read. `wall` fills the width, large; `page` breaks into systems; `strip` is one long system of which
- * a window shows; `mini` is a few bars of one bare staff.
+ * a window shows; `mini` is a few bars of one bare staff (with its clef when
+ * it is a cantus by itself).
  */
 export type ScoreSize = 'wall' | 'page' | 'strip' | 'mini'
 

@@ -28,6 +28,8 @@ type SizeFacts = Readonly<{
   staffGap: number
   /** Whole px, so that staff lines are crisp. */
   spaceFor: (widthPx: number) => number
+  /** Where the height is known: up to this many times larger while few bars leave room for it. */
+  mostGrowth: number
   /** Below this many px to a staff space the music is no longer shrunk. */
   leastSpacePx: number
 }>
@@ -40,6 +42,7 @@ export const SIZE_FACTS: Readonly<Record<ScoreSize, SizeFacts>> = {
     maxStretch: null,
     staffGap: 6.5,
     spaceFor: (widthPx) => Math.round(within(widthPx / 60, 8, 64)),
+    mostGrowth: 1.6,
     leastSpacePx: 8,
   },
   page: {
@@ -47,6 +50,7 @@ export const SIZE_FACTS: Readonly<Record<ScoreSize, SizeFacts>> = {
     maxStretch: 2.6,
     staffGap: 5.7,
     spaceFor: (widthPx) => Math.round(within(6.8 + widthPx / 220, 8, 16)),
+    mostGrowth: 1,
     leastSpacePx: 6,
   },
   strip: {
@@ -54,6 +58,7 @@ export const SIZE_FACTS: Readonly<Record<ScoreSize, SizeFacts>> = {
     maxStretch: null,
     staffGap: 5.6,
     spaceFor: (widthPx) => Math.round(within(8.6 + widthPx / 280, 10, 14)),
+    mostGrowth: 1,
     leastSpacePx: 6,
   },
   mini: {
@@ -61,6 +66,7 @@ export const SIZE_FACTS: Readonly<Record<ScoreSize, SizeFacts>> = {
     maxStretch: 2.6,
     staffGap: 0,
     spaceFor: () => 7,
+    mostGrowth: 1,
     leastSpacePx: 4,
   },
 }

@@ -60,8 +60,11 @@ export function findingMarks(
     return [lozengeMark({ role: 'finding', ink: arc.tone, group }, axisOf(first), y, 0.42 * spacePx, look)]
   }
   const inset = 0.4 * spacePx
-  const from: Point = [isOpenLeft ? first.xPx + strokePx : axisOf(first) + inset, foot - strokePx]
-  const to: Point = [isOpenRight ? last.xPx + last.widthPx - strokePx : axisOf(last) - inset, foot - strokePx]
+  const from: Point = [isOpenLeft ? first.xPx + strokePx : axisOf(first) + inset, foot - strokePx / 2]
+  const to: Point = [
+    isOpenRight ? last.xPx + last.widthPx - strokePx : axisOf(last) - inset,
+    foot - strokePx / 2,
+  ]
   if (to[0] - from[0] < inset) return []
   const height = Math.min(0.95 * spacePx, 0.35 * (to[0] - from[0]))
   return [

@@ -1,5 +1,6 @@
 import type { Box } from '@/shared/notation/box'
 import { BRAVURA } from '@/shared/notation/bravura'
+import { signatureMarks } from '@/shared/notation/key-signature'
 import { textHeightPx } from '@/shared/notation/measure-text'
 import type { ScoreSize, StaffLayout, Voice } from '@/shared/notation/score-layout'
 import { letteringOf, SIZE_FACTS } from '@/shared/notation/sizes'
@@ -11,6 +12,8 @@ const STAFF_HEIGHT = 4
 const KEPT_OVER_STAFF = 1.1
 const KEPT_UNDER_STAFF = 1.1
 export const HOOK_STAFF_SPACES = 0.75
+/** Distance of the second line over a frozen bar from the first: never so little that they run together. */
+export const frozenLinesPx = (spacePx: number): number => Math.max(3, Math.round(0.34 * spacePx))
 export const ARC_LEVEL_STAFF_SPACES = 1.4
 const RAIL_PADDING = 0.45
 export const BRACKET_HOOK_STAFF_SPACES = 0.7
@@ -34,32 +37,44 @@ export type SystemContent = Readonly<{
   spacePx: number
   /** From the top downwards, with the extent of the notes on each around its own top line. */
   staves: readonly Readonly<{ voice: Voice; clef: Clef; box: Box | null }>[]
+  /** Null where the staves have neither clef nor signature. */
+  signature: number | null
   hasLabels: boolean
   arcLevels: number
   bracketLevels: number
 }>
 
-/** How far a clef reaches above and below its staff, in staff spaces. */
-function clefReach(clef: Clef): { over: number; under: number } {
-  const { glyph, place } = CLEF_PLACES[clef]
-  const depth = depthStaffSpaces(place)
-  return { over: BRAVURA[glyph].top - depth, under: depth - BRAVURA[glyph].bottom - STAFF_HEIGHT }
+/** How far a clef and its signature reach above and below their staff, in staff spaces. */
+function prefixReach(clef: Clef, signature: number): { over: number; under: number } {
+  const marks = [CLEF_PLACES[clef], ...signatureMarks(signature, clef)]
+  const reaches = marks.map(({ glyph, place }) => {
+    const depth = depthStaffSpaces(place)
+    return { over: BRAVURA[glyph].top - depth, under: depth - BRAVURA[glyph].bottom - STAFF_HEIGHT }
+  })
+  return {
+    over: Math.max(...reaches.map(({ over }) => over)),
+    under: Math.max(...reaches.map(({ under }) => under)),
+  }
 }
 
 export function arrangeRows(content: SystemContent): SystemRows {
-  const { size, spacePx, staves, hasLabels, arcLevels, bracketLevels } = content
+  const { size, spacePx, staves, signature, hasLabels, arcLevels, bracketLevels } = content
   const lettering = letteringOf(spacePx)
   const staffPx = STAFF_HEIGHT * spacePx
   const isMini = size === 'mini'
   const over = staves.map(({ box }) => Math.max(KEPT_OVER_STAFF * spacePx, -(box?.top ?? 0)))
   const under = staves.map(({ box }) => Math.max(KEPT_UNDER_STAFF * spacePx, (box?.bottom ?? 0) - staffPx))
-  const clefs = staves.map(({ clef }) => (isMini ? { over: 0, under: 0 } : clefReach(clef)))
+  const clefs = staves.map(({ clef }) =>
+    signature === null ? { over: 0, under: 0 } : prefixReach(clef, signature),
+  )
 
   const numberBaselinePx = isMini
     ? 0
     : Math.ceil(0.2 * spacePx + textHeightPx('8', 'Alegreya', lettering.numberPx).above)
   const headLinePx = isMini ? 0 : Math.round(numberBaselinePx + 0.6 * spacePx)
-  const headsPx = isMini ? 0 : headLinePx + (HOOK_STAFF_SPACES + 0.2) * spacePx
+  const headsPx = isMini
+    ? 0
+    : headLinePx + Math.max(HOOK_STAFF_SPACES * spacePx, frozenLinesPx(spacePx) + 1) + 0.2 * spacePx
   const arcsPx = isMini ? 0 : Math.max(1, arcLevels) * ARC_LEVEL_STAFF_SPACES * spacePx
   const arcFootPx = headsPx + arcsPx
   const firstTop = Math.round(
