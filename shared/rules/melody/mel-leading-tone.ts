@@ -39,12 +39,13 @@ export const melLeadingTone: Rule<State, Params> = {
   step: (state, moment, { excuseDescent }) => {
     const { frame, before } = state
     if (!isNoted(moment)) {
-      return goOn(moment.note === null ? { frame, before: null, isDescending: false } : state)
+      // What the unwritten note was is unknown: it may have been the final.
+      return goOn(moment.note === null ? { frame, before: null, isDescending: true } : state)
     }
     const { final } = frame.exercise
-    if (before === null || !leads(before, frame)) {
-      const isDescending =
-        before !== null && isFinal(before.note, final) && stepsFrom(before.note, moment.note) === -1
+    if (before === null) return goOn({ ...state, before: moment })
+    if (!leads(before, frame)) {
+      const isDescending = isFinal(before.note, final) && stepsFrom(before.note, moment.note) === -1
       return goOn({ frame, before: moment, isDescending })
     }
     if (isSamePitch(before.note, moment.note)) return goOn({ ...state, before: moment })
