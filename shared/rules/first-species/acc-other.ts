@@ -3,9 +3,9 @@ import { cite } from '@/shared/rules/cite'
 import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
 import { breachAt, foldNotes, type Frame } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
-import type { Mode } from '@/shared/theory/mode'
 import { formatPitch } from '@/shared/theory/pitch'
-import { alterationInMode, degreeOf, isRaisedSeventh, type Degree } from '@/shared/theory/scale'
+import { alterationInMode, degreeOf, isRaisedSeventh } from '@/shared/theory/scale'
+import { usualFlatDegree } from '@/shared/theory/usual-flat'
 
 const PARAMS = z.strictObject({
   bFlat: z.boolean().default(true).describe('B flat, or its like in a transposed mode, is free.'),
@@ -15,16 +15,6 @@ const PARAMS = z.strictObject({
     .describe('Where the raised degrees of the close are left to other rules: anywhere; or judged here.'),
 })
 type Params = z.infer<typeof PARAMS>
-
-/** The degree that makes a tritone over another of its mode: B over F, untransposed. Lowered, it is the usual B flat. */
-const TRITONE_TOP: Readonly<Record<Mode, Degree>> = {
-  ionian: 7,
-  dorian: 6,
-  phrygian: 5,
-  lydian: 4,
-  mixolydian: 3,
-  aeolian: 2,
-}
 
 export const accOther: Rule<Frame, Params> = {
   id: 'acc-other',
@@ -36,7 +26,7 @@ export const accOther: Rule<Frame, Params> = {
     const alteration = alterationInMode(now.note, mode, final)
     if (alteration === 0) return null
     const degree = degreeOf(now.note, final)
-    if (params.bFlat && alteration === -1 && degree === TRITONE_TOP[mode]) return null
+    if (params.bFlat && alteration === -1 && degree === usualFlatDegree(mode)) return null
     const isAtClose = params.raised === 'anywhere' || now.isPenultimate
     if (isAtClose && isRaisedSeventh(now.note, mode, final)) return null
     const isRaisedSixth = mode === 'aeolian' && degree === 6 && alteration === 1
