@@ -36,15 +36,19 @@ export function DeskLadder({
           {cantus ? words.desk.against(hand, words.lesson.pitchPrinted(cantus)) : ''}
         </Txt>
         {ladder ? (
-          <Button
-            kind="quiet"
-            label={words.desk.ladder.eraseShort}
-            hint={words.desk.ladder.erase}
-            isDisabled={ladder.chosen === null}
-            onPress={model.erase}
-          />
+          <View>
+            <Button
+              kind="quiet"
+              label={words.desk.ladder.eraseShort}
+              hint={words.desk.ladder.erase}
+              isDisabled={ladder.chosen === null}
+              onPress={model.erase}
+            />
+          </View>
         ) : null}
-        <Button kind="quiet" label={words.desk.settings.open} hasPopup="dialog" onPress={onSettings} />
+        <View>
+          <Button kind="quiet" label={words.desk.settings.open} hasPopup="dialog" onPress={onSettings} />
+        </View>
       </View>
       {earlier && earlierPitch ? (
         <View

@@ -73,7 +73,7 @@ function TappedCode({ problem, isLooking, onCode }: StepProps) {
       <CodeStatus problem={isSpent ? problem : null} isLooking={isLooking} />
       <View style={{ flex: 1, minHeight: space.one }} />
       <SyllableStaff lastTapped={entry.at(-1) ?? null} isDisabled={isLooking} onTap={tap} />
-      <View style={{ marginLeft: -space.small }}>
+      <View style={{ marginLeft: -space.small, marginTop: space.small }}>
         <Button
           kind="quiet"
           label={isSounding ? words.soundOff : words.soundOn}

@@ -1,5 +1,5 @@
 import { useState } from 'react'
-import { View } from 'react-native'
+import { useWindowDimensions, View } from 'react-native'
 import Svg, { Line, Polygon } from 'react-native-svg'
 import { fonts, leading, type, useTheme } from '@/components/theme'
 import { useWords } from '@/components/words'
@@ -7,10 +7,13 @@ import { CODE_SYLLABLES, type Syllable } from '@/shared/api/lessons'
 
 /** Half the width of a lozenge; the whole of it answers to a finger. */
 const HALF_PX = 27
+/** From one place of the staff to the next: half a staff space. Low screens have a flatter staff. */
 const RISE_PX = 30
-/** On the narrowest phones the lozenges climb more steeply, so that none touches its neighbour. */
-const NARROW_RISE_PX = 36
-const NARROW_PX = 320
+const LOW_RISE_PX = 23
+const LOW_SCREEN_PX = 760
+/** Do hangs under the staff on its own line, mi stands on the lowest line, the highest line is four thirds above it. */
+const LINES = [2, 4, 6, 8, 10] as const
+const TOP_PLACE = 10
 
 /** Seven lozenges climbing a staff, do to ti: the keys of a lesson's code. */
 export function SyllableStaff({
@@ -22,14 +25,15 @@ export function SyllableStaff({
   const { colors } = useTheme()
   const [widthPx, setWidthPx] = useState(0)
   const [held, setHeld] = useState<Syllable | null>(null)
-  const risePx = widthPx < NARROW_PX ? NARROW_RISE_PX : RISE_PX
-  const heightPx = 2 * HALF_PX + 6 * risePx
+  const { height } = useWindowDimensions()
+  const risePx = height < LOW_SCREEN_PX ? LOW_RISE_PX : RISE_PX
+  const heightPx = HALF_PX + TOP_PLACE * risePx + 2
+  const yOf = (place: number) => heightPx - HALF_PX - place * risePx
   const placeOf = (index: number) => ({
-    x: HALF_PX + (index * (widthPx - 2 * HALF_PX)) / (CODE_SYLLABLES.length - 1),
-    y: heightPx - HALF_PX - index * risePx,
+    x: HALF_PX + 9 + (index * (widthPx - 2 * HALF_PX - 9)) / (CODE_SYLLABLES.length - 1),
+    y: yOf(index),
   })
-  // The lowest line runs through re, so that do hangs under the staff and ti stands over it.
-  const lines = [1, 2.25, 3.5, 4.75, 6].map((step) => heightPx - HALF_PX - step * risePx * 0.98)
+  const ledgerPx = HALF_PX + 9
   return (
     <View
       role="group"
@@ -40,18 +44,27 @@ export function SyllableStaff({
       {widthPx > 0 ? (
         <>
           <Svg width={widthPx} height={heightPx} aria-hidden style={{ position: 'absolute' }}>
-            {lines.map((y) => (
+            {LINES.map((place) => (
               <Line
-                key={y}
+                key={place}
                 x1={0}
                 x2={widthPx}
-                y1={y}
-                y2={y}
+                y1={yOf(place)}
+                y2={yOf(place)}
                 stroke={colors.lead}
                 strokeWidth={1}
                 opacity={0.6}
               />
             ))}
+            <Line
+              x1={Math.max(0, placeOf(0).x - ledgerPx)}
+              x2={placeOf(0).x + ledgerPx}
+              y1={yOf(0)}
+              y2={yOf(0)}
+              stroke={colors.lead}
+              strokeWidth={1}
+              opacity={0.6}
+            />
             {CODE_SYLLABLES.map((syllable, index) => {
               const { x, y } = placeOf(index)
               const isLit = syllable === (held ?? lastTapped)

@@ -7,6 +7,9 @@ import { MotionGlyph } from './motion-glyph'
 
 export const RUNG_PX = 46
 
+/** Accidentals, which stand beside a letter and before a degree. */
+const SIGNS = /[♭♯♮𝄫𝄪]+/u
+
 export type RungProps = Readonly<{
   index: number
   /** Letter or degree, as the student chose. */
@@ -31,6 +34,7 @@ export const Rung = memo(function Rung(props: RungProps) {
   const { colors } = useTheme()
   const styles = useRungStyles()
   const ink = isOn ? styles.inkOn : isFaint ? styles.inkFaint : styles.ink
+  const sign = SIGNS.exec(name)?.[0]
   const strokes = isOn ? colors.vellum : isFaint ? colors.lead : colors.lampblack
   return (
     <Pressable
@@ -42,7 +46,10 @@ export const Rung = memo(function Rung(props: RungProps) {
       onPress={() => props.onPress(index)}
       style={[styles.rung, isOn && styles.on]}
     >
-      <Text style={[styles.name, ink]}>{name}</Text>
+      <Text style={[styles.name, ink]}>
+        {name.replace(SIGNS, '')}
+        {sign ? <Text style={[styles.sign, ink]}>{sign}</Text> : null}
+      </Text>
       <Text numberOfLines={1} style={[styles.interval, ink]}>
         {interval}
       </Text>
@@ -80,6 +87,7 @@ const useRungStyles = createStyles((colors) => ({
     fontVariant: ['lining-nums'],
     userSelect: 'none',
   },
+  sign: { fontSize: type.text, position: 'relative', top: -5, marginLeft: 2 },
   interval: {
     flex: 1,
     minWidth: 0,

@@ -75,16 +75,18 @@ export function LecternHeader({
           </LinkText>
         </View>
         {isOpen ? (
-          <Button
-            kind="quiet"
-            label={
-              hands > 0
-                ? `${words.lesson.here(here)} · ${words.lesson.hands(hands)}`
-                : words.lesson.here(here)
-            }
-            hint={lectern.people.jump(here, hands)}
-            onPress={onPeople}
-          />
+          <View>
+            <Button
+              kind="quiet"
+              label={
+                hands > 0
+                  ? `${words.lesson.here(here)} · ${words.lesson.hands(hands)}`
+                  : words.lesson.here(here)
+              }
+              hint={lectern.people.jump(here, hands)}
+              onPress={onPeople}
+            />
+          </View>
         ) : null}
         {isOpen ? (
           <View
@@ -98,31 +100,35 @@ export function LecternHeader({
                 {lesson.code.replaceAll('-', ' ')}
               </Txt>
             ) : null}
-            <Button
-              kind="quiet"
-              label={lesson.isDoorOpen ? lectern.closeDoorShort : lectern.openDoorShort}
-              hint={lesson.isDoorOpen ? lectern.closeDoor : lectern.openDoor}
-              isBusy={update.isBusy}
-              onPress={() => void setDoor(!lesson.isDoorOpen)}
-            />
+            <View>
+              <Button
+                kind="quiet"
+                label={lesson.isDoorOpen ? lectern.closeDoorShort : lectern.openDoorShort}
+                hint={lesson.isDoorOpen ? lectern.closeDoor : lectern.openDoor}
+                isBusy={update.isBusy}
+                onPress={() => void setDoor(!lesson.isDoorOpen)}
+              />
+            </View>
           </View>
         ) : null}
-        <Button
-          label={lectern.wall}
-          hint={lectern.wallHint}
-          hasPopup="dialog"
-          onPress={() => setDialog('wall')}
-        />
-        {isOpen ? (
-          <Button label={lectern.end} hasPopup="dialog" onPress={() => setDialog('end')} />
-        ) : (
+        <View style={{ flexDirection: 'row', gap: space.small }}>
           <Button
-            kind="go"
-            label={lesson.status === 'ended' ? lectern.reopen : lectern.open}
-            isBusy={open.isBusy}
-            onPress={() => void openLesson()}
+            label={lectern.wall}
+            hint={lectern.wallHint}
+            hasPopup="dialog"
+            onPress={() => setDialog('wall')}
           />
-        )}
+          {isOpen ? (
+            <Button label={lectern.end} hasPopup="dialog" onPress={() => setDialog('end')} />
+          ) : (
+            <Button
+              kind="go"
+              label={lesson.status === 'ended' ? lectern.reopen : lectern.open}
+              isBusy={open.isBusy}
+              onPress={() => void openLesson()}
+            />
+          )}
+        </View>
       </View>
       <RefusalNotice refusal={update.refusal ?? open.refusal ?? end.refusal} />
       <Dialog

@@ -3,6 +3,7 @@ import type { LessonView } from '@/components/lesson/lesson-view'
 import { countFindings, markRoom, rankRoom, type RoomGroup } from '@/components/lesson/room'
 import { roomScoreOf } from '@/components/lesson/score-of'
 import { groupProposals, type ChorusState } from '@/shared/board'
+import type { Finding } from '@/shared/rules'
 import type { ScoreInput } from '@/shared/notation/score-input'
 import type { PresentMember } from '@/shared/wire/rooms'
 
@@ -20,6 +21,8 @@ export type LecternReading = Readonly<{
   distinct: number
 }>
 
+const isLaw = ({ level }: Finding): boolean => level === 'law'
+
 /** What the lectern shows of the room. The teacher sees everything, whatever wall and phones are shown. */
 export function readLectern(
   view: LessonView,
@@ -35,9 +38,10 @@ export function readLectern(
   const whole = groups.filter(({ isComplete }) => isComplete)
   const sum = (some: readonly RoomGroup[]): number => some.reduce((total, { count }) => total + count, 0)
   return {
-    score: roomScoreOf(view, markRoom(room), [
-      ...countFindings(room).map(({ finding }) => finding),
-      ...judge.ofLine(),
+    score: roomScoreOf(view, markRoom(room), judge.ofLine(), [
+      // Matters of taste would bury the score under arcs: they are in the rows and the margin.
+      ...countFindings(room).flatMap(({ findings }) => findings.filter(isLaw)),
+      ...judge.ofLine().filter(isLaw),
     ]),
     bars,
     groups,

@@ -5,6 +5,7 @@ import { useQuery } from '@/components/api'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
 import { useEntry } from '@/components/lesson/use-entry'
 import { useLessonRoom } from '@/components/lesson/use-lesson-room'
+import { tellWallsHere } from '@/components/lesson/wall-cues'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
 import { can } from '@/shared/board'
@@ -38,7 +39,13 @@ export function LecternScreen({ lessonId }: Readonly<{ lessonId: string }>) {
   const { send } = room
   const lower = useCallback((memberId: string) => void send('lowerHand', { memberId }), [send])
   const remove = useCallback((memberId: string) => void send('remove', { memberId }), [send])
-  const cue = useCallback((wallCue: WallCue) => void send('cue', wallCue), [send])
+  const cue = useCallback(
+    (wallCue: WallCue) => {
+      void send('cue', wallCue)
+      tellWallsHere(lessonId, wallCue)
+    },
+    [send, lessonId],
+  )
   const people = useMemo(
     () => members?.filter(({ role }) => role === 'student' || role === 'guest') ?? NOBODY,
     [members],

@@ -64,22 +64,24 @@ export function PeoplePanel({
                 </Txt>
               ) : null}
             </View>
-            {person.hand ? (
-              <Button
-                kind="quiet"
-                label={sayings.lower}
-                hint={sayings.lowerSpoken(person.name)}
-                onPress={() => onLower(person.memberId)}
-              />
-            ) : person.role === 'student' || person.role === 'guest' ? (
-              <Button
-                kind="quiet"
-                label={sayings.remove}
-                hint={sayings.removeSpoken(person.name)}
-                hasPopup="dialog"
-                onPress={() => setRemoving(person)}
-              />
-            ) : null}
+            <View style={{ alignSelf: 'center' }}>
+              {person.hand ? (
+                <Button
+                  kind="quiet"
+                  label={sayings.lower}
+                  hint={sayings.lowerSpoken(person.name)}
+                  onPress={() => onLower(person.memberId)}
+                />
+              ) : person.role === 'student' || person.role === 'guest' ? (
+                <Button
+                  kind="quiet"
+                  label={sayings.remove}
+                  hint={sayings.removeSpoken(person.name)}
+                  hasPopup="dialog"
+                  onPress={() => setRemoving(person)}
+                />
+              ) : null}
+            </View>
           </View>
         ))}
       </View>

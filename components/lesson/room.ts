@@ -7,8 +7,8 @@ import { barsOf, identityOfNotes } from './line-with'
 /** One distinct proposal for a bar or a span, who made it, and what the rules say of it. */
 export type RoomGroup = ProposalGroup & Readonly<{ findings: readonly Finding[] }>
 
-/** A finding on the members' own proposals, and how many members it is true of. */
-export type RoomFinding = Readonly<{ id: string; finding: Finding; count: number }>
+/** What one rule says of the members' own proposals, wherever it says it, and how many members it is true of. */
+export type RoomFinding = Readonly<{ id: string; findings: readonly Finding[]; count: number }>
 
 /** A note that stands in one bar, for the lozenges. Remarks are matters of taste and colour nobody's note in public. */
 export type RoomMark = Readonly<{ bar: number; notes: BarNotes; count: number; tone: 'line' | 'breach' }>
@@ -33,8 +33,10 @@ export function rankRoom(groups: readonly ProposalGroup[], judge: Judge): readon
   return groups.map((group) => ({ ...group, findings: judge.ofNotes(group.notes) })).sort(compareGroups)
 }
 
-/** Findings of one rule at the same bars are one to the room, whatever notes brought them about. */
-const roomFindingId = ({ ruleId, code, bars }: Finding): string => `${ruleId}/${code}/${bars.join(',')}`
+/** The same words about other bars are one thing to say to the room. */
+const roomFindingId = ({ ruleId, code, args }: Finding): string => `${ruleId}/${code}/${JSON.stringify(args)}`
+
+const isSameBars = (a: Finding, b: Finding): boolean => a.bars.join(',') === b.bars.join(',')
 
 /** The bar where a finding was completed: the last it points at that these notes wrote. */
 export function completedAt(finding: Finding, notes: Line): number | null {
@@ -45,24 +47,25 @@ export function completedAt(finding: Finding, notes: Line): number | null {
   return null
 }
 
-/** Findings on the room's proposals, the most common first, with the number of members each is true of. */
+/** What the rules say of the room's proposals: breaches first, then what is true of most members. */
 export function countFindings(groups: readonly RoomGroup[]): readonly RoomFinding[] {
-  const found = new Map<string, { finding: Finding; count: number }>()
+  const found = new Map<string, { findings: Finding[]; count: number }>()
   for (const group of groups) {
-    const ids = new Set<string>()
+    const told = new Set<string>()
     for (const finding of group.findings) {
       const id = roomFindingId(finding)
-      // One member may break a rule in one place only once, however many notes it points at.
-      if (ids.has(id)) continue
-      ids.add(id)
-      const known = found.get(id)
-      if (known) known.count += group.count
-      else found.set(id, { finding, count: group.count })
+      const known = found.get(id) ?? { findings: [], count: 0 }
+      found.set(id, known)
+      if (!known.findings.some((other) => isSameBars(other, finding))) known.findings.push(finding)
+      // A member who breaks a rule twice is still one member.
+      if (!told.has(id)) known.count += group.count
+      told.add(id)
     }
   }
+  const isLaw = ({ findings }: RoomFinding): number => Number(findings[0]?.level === 'law')
   return [...found]
-    .map(([id, { finding, count }]) => ({ id, finding, count }))
-    .sort((a, b) => b.count - a.count || (a.id < b.id ? -1 : 1))
+    .map(([id, { findings, count }]) => ({ id, findings, count }))
+    .sort((a, b) => isLaw(b) - isLaw(a) || b.count - a.count || (a.id < b.id ? -1 : 1))
 }
 
 /**

@@ -21,10 +21,17 @@ const toneOf = (level: Finding['level']): Rubric['tone'] => (level === 'law' ? '
 const breachesFirst = (a: Rubric, b: Rubric): number =>
   Number(b.tone === 'breach') - Number(a.tone === 'breach') || (a.bars[0] ?? 0) - (b.bars[0] ?? 0)
 
+const idOf = ({ ruleId, code, voice, bars, args }: Finding): string =>
+  `${ruleId}/${code}/${voice}/${bars.join(',')}/${JSON.stringify(args)}`
+
+/** The bars of several findings, each once, ascending. */
+const barsOfAll = (findings: readonly Finding[]): readonly number[] =>
+  [...new Set(findings.flatMap(({ bars }) => bars))].sort((a, b) => a - b)
+
 export function rubricOf(finding: Finding, words: Words): Rubric {
   const { sentence, mend } = describeFinding(finding)
   return {
-    id: `${finding.ruleId}/${finding.code}/${finding.voice}/${finding.bars.join(',')}`,
+    id: idOf(finding),
     tone: toneOf(finding.level),
     bars: finding.bars,
     heading: words.lesson.barsHeading(finding.bars),
@@ -38,15 +45,19 @@ export const rubricsOf = (findings: readonly Finding[], words: Words): readonly 
   findings.map((finding) => rubricOf(finding, words)).sort(breachesFirst)
 
 /** What is true of the room's own proposals, with how many it is true of: "Nine of you: both voices rise into a fifth." */
-export const roomRubrics = (found: readonly RoomFinding[], words: Words): readonly Rubric[] =>
-  found.map(({ finding, count }) => {
-    const rubric = rubricOf(finding, words)
-    return {
-      ...rubric,
-      id: `room/${rubric.id}`,
-      sentence: words.lesson.ofYou(count, rubric.sentence),
-    }
-  })
+export function roomRubric({ id, findings, count }: RoomFinding, words: Words): Rubric | null {
+  const [first] = findings
+  if (!first) return null
+  const rubric = rubricOf(first, words)
+  const bars = barsOfAll(findings)
+  return {
+    ...rubric,
+    id: `room/${id}`,
+    bars,
+    heading: words.lesson.barsHeading(bars),
+    sentence: words.lesson.ofYou(count, rubric.sentence),
+  }
+}
 
 /** That bars are set aside, one rubric for each run of them. */
 export const setAsideRubrics = (view: LessonView, words: Words): readonly Rubric[] =>

@@ -49,10 +49,13 @@ type Layers = Readonly<{
   /** Notes read for figures and motion: the agreed line, with the student's own laid over it on the desk. */
   read: Line
   proposalsOf: (bar: number) => readonly ProposalMark[]
+  /** What the figures of the read notes are inked by. */
   findings: readonly Finding[]
+  /** What is bowed over. */
+  arcs: readonly Finding[]
 }>
 
-function compose(view: LessonView, { read, proposalsOf, findings }: Layers): ScoreInput {
+function compose(view: LessonView, { read, proposalsOf, findings, arcs }: Layers): ScoreInput {
   const rail = railOf(view.exercise, read, view.setAside)
   const tones = figureTones(findings)
   const bars = view.exercise.cantus.map((cantus, index): ScoreBar => {
@@ -77,16 +80,17 @@ function compose(view: LessonView, { read, proposalsOf, findings }: Layers): Sco
     clefs: view.written.clefs,
     signature: view.written.signature,
     bars,
-    arcs: arcsOf(findings),
+    arcs: arcsOf(arcs),
     brackets: bracketsOf(view),
   }
 }
 
-/** The score for wall and lectern: the agreed line, the room's lozenges, the arcs of what is said of both. */
+/** The score for wall and lectern: the agreed line with its findings, the room's lozenges, and arcs over what is told. */
 export function roomScoreOf(
   view: LessonView,
   marks: readonly RoomMark[],
   findings: readonly Finding[],
+  arcs: readonly Finding[],
 ): ScoreInput {
   const byBar = new Map<number, ProposalMark[]>()
   for (const { bar, notes, count, tone } of marks) {
@@ -94,7 +98,7 @@ export function roomScoreOf(
     inBar.push({ notes, count, tone })
     byBar.set(bar, inBar)
   }
-  return compose(view, { read: view.line, proposalsOf: (bar) => byBar.get(bar) ?? NO_MARKS, findings })
+  return compose(view, { read: view.line, proposalsOf: (bar) => byBar.get(bar) ?? NO_MARKS, findings, arcs })
 }
 
 /** The score for a desk: the agreed line and the student's own lozenges, with the findings on them when they are shown. */
@@ -109,6 +113,7 @@ export function deskScoreOf(view: LessonView, own: Line, findings: readonly Find
       return [{ notes, count: null, tone: tone === 'breach' || tone === 'remark' ? tone : 'line' }]
     },
     findings,
+    arcs: findings,
   })
 }
 

@@ -7,10 +7,8 @@ import { Lozenge, Name, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Lesson } from '@/shared/api/lessons'
 import { QrCode } from './qr-code'
-import type { WallMeasure } from './wall-measure'
+import { MARGIN_TYPE, type WallMeasure } from './wall-measure'
 
-/** As many rubrics as stand beside a score without shrinking; the rest are counted. */
-const MOST_RUBRICS = 3
 const MOST_GROUPS = 4
 const MOST_NAMES = 3
 const TONE = { breach: 'minium', remark: 'orpiment', quiet: 'lead' } as const
@@ -19,12 +17,18 @@ const TONE = { breach: 'minium', remark: 'orpiment', quiet: 'lead' } as const
 export function WallMargin({
   lesson,
   rubrics,
+  untold,
+  hasSquare,
   groups,
   names,
   measure,
 }: Readonly<{
   lesson: Lesson
   rubrics: readonly Rubric[]
+  /** How many more there would be to say. */
+  untold: number
+  /** Whether the square that opens the lesson is shown. */
+  hasSquare: boolean
   groups: readonly RoomGroup[] | null
   names: ReadonlyMap<string, string> | null
   measure: WallMeasure
@@ -32,22 +36,28 @@ export function WallMargin({
   const words = useWords()
   const { colors } = useTheme()
   const { px, isStacked } = measure
-  const size = { fontSize: Math.max(17, px(27)), lineHeight: Math.max(23, px(35)) }
-  const shown = rubrics.slice(0, MOST_RUBRICS)
-  const hasDoor = lesson.code !== null && lesson.isDoorOpen && lesson.status === 'open'
+  const size = {
+    fontSize: Math.max(17, px(MARGIN_TYPE.sizePx)),
+    lineHeight: Math.max(23, px(MARGIN_TYPE.linePx)),
+  }
   return (
     <View
       style={
         isStacked
           ? { gap: measure.gapPx }
-          : { width: measure.asidePx, minHeight: 0, paddingVertical: px(28), gap: px(26) }
+          : {
+              width: measure.asidePx,
+              minHeight: 0,
+              paddingVertical: px(MARGIN_TYPE.paddingPx),
+              gap: px(MARGIN_TYPE.gapPx),
+            }
       }
     >
       <View
         role="status"
         style={{ gap: isStacked ? 14 : px(26), flexShrink: 1, minHeight: 0, overflow: 'hidden' }}
       >
-        {shown.map((rubric) => (
+        {rubrics.map((rubric) => (
           <View key={rubric.id}>
             <View style={{ flexDirection: 'row', alignItems: 'center', gap: px(14) }}>
               <Lozenge
@@ -59,15 +69,15 @@ export function WallMargin({
                 {rubric.heading}
               </Txt>
             </View>
-            <Txt tone={rubric.tone === 'quiet' ? 'lead' : 'lampblack'} lines={6} style={size}>
+            <Txt tone={rubric.tone === 'quiet' ? 'lead' : 'lampblack'} style={size}>
               {rubric.sentence}
               {rubric.mend ? ` ${rubric.mend}` : ''}
             </Txt>
           </View>
         ))}
-        {rubrics.length > shown.length ? (
+        {untold > 0 ? (
           <Txt tone="lead" style={size}>
-            {words.wall.moreFindings(rubrics.length - shown.length)}
+            {words.wall.moreFindings(untold)}
           </Txt>
         ) : null}
         {groups && names && groups.length > 0 ? (
@@ -81,7 +91,7 @@ export function WallMargin({
           </View>
         ) : null}
       </View>
-      {hasDoor && lesson.code ? (
+      {hasSquare && lesson.code ? (
         <View
           style={{
             marginTop: 'auto',
@@ -93,7 +103,7 @@ export function WallMargin({
         >
           <QrCode
             text={`${window.location.origin}/join/${lesson.code}`}
-            sizePx={isStacked ? 150 : px(196)}
+            sizePx={isStacked ? 150 : px(MARGIN_TYPE.squarePx)}
             label={words.wall.qrLabel(lesson.code.replaceAll('-', ' '))}
           />
           <Txt

@@ -27,6 +27,24 @@ export type WallMeasure = Readonly<{
   px: (drawn: number) => number
 }>
 
+/** Type of the margin as drawn at 1920. */
+export const MARGIN_TYPE = { sizePx: 27, linePx: 35, squarePx: 196, paddingPx: 28, gapPx: 26, namesPx: 250 }
+
+/** How many lines of rubrics the margin holds beside the square and the names. Letters of the sans are near half as wide as high. */
+export function marginRoom(
+  { isStacked, scoreHeightPx, asidePx, px }: WallMeasure,
+  hasSquare: boolean,
+  hasNames: boolean,
+): Readonly<{ lines: number; letters: number }> {
+  if (isStacked) return { lines: 40, letters: 38 }
+  const { sizePx, linePx, squarePx, paddingPx, gapPx, namesPx } = MARGIN_TYPE
+  const taken = 2 * paddingPx + (hasSquare ? squarePx + gapPx : 0) + (hasNames ? namesPx : 0) + linePx
+  return {
+    lines: Math.floor((scoreHeightPx - px(taken)) / px(linePx)),
+    letters: Math.floor(asidePx / (px(sizePx) * 0.45)),
+  }
+}
+
 /** Lays the wall out for a screen. The score gets all that header, footer and margin leave. */
 export function measureWall(widthPx: number, heightPx: number): WallMeasure {
   const isStacked = widthPx < STACKED_BELOW_PX

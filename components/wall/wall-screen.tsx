@@ -1,10 +1,11 @@
 import { useCallback, useEffect, useMemo, useState } from 'react'
-import { useRoomEvent } from '@/components/room'
+import { useRoomEvent, type RoomHandle } from '@/components/room'
 import { lineWith } from '@/components/lesson/line-with'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
 import { useEntry } from '@/components/lesson/use-entry'
 import { useGroundFromAddress } from '@/components/lesson/use-ground-from-address'
 import { useLessonRoom } from '@/components/lesson/use-lesson-room'
+import { useCuesHere } from '@/components/lesson/wall-cues'
 import { usePlayer, useStopOnLeave } from '@/components/sound'
 import { useWords } from '@/components/words'
 import type { BoardState } from '@/shared/board'
@@ -18,7 +19,7 @@ export function WallScreen({ lessonId }: Readonly<{ lessonId: string }>) {
   const { state, reload } = useEntry(lessonId)
   const { room, view, entry } = useLessonRoom(lessonId, state, reload)
   useGroundFromAddress()
-  const sound = useCues(room, view.board)
+  const sound = useCues(lessonId, room, view.board)
 
   const showsNames = view.board?.stage.showsNames ?? false
   const { members } = view.presence
@@ -46,7 +47,7 @@ export function WallScreen({ lessonId }: Readonly<{ lessonId: string }>) {
 }
 
 /** Plays what the lectern cues. A browser lets a page sound only after a touch, so one is asked for. */
-function useCues(room: Parameters<typeof useRoomEvent>[0], board: BoardState | null) {
+function useCues(lessonId: string, room: RoomHandle, board: BoardState | null) {
   const { play, stop, strike, problem } = usePlayer()
   const [isAllowed, setAllowed] = useState(() => hasBeenTouched())
   useStopOnLeave()
@@ -82,6 +83,7 @@ function useCues(room: Parameters<typeof useRoomEvent>[0], board: BoardState | n
     [board, play, stop],
   )
   useRoomEvent(room, 'cue', onCue)
+  useCuesHere(lessonId, onCue)
   const allow = useCallback(() => {
     setAllowed(true)
     // One quiet note, so that the volume can be set before the class hears any.

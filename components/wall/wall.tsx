@@ -13,7 +13,7 @@ import { readWall } from './wall-model'
 import { WallFooter } from './wall-footer'
 import { WallHeader } from './wall-header'
 import { WallMargin } from './wall-margin'
-import { measureWall } from './wall-measure'
+import { marginRoom, measureWall } from './wall-measure'
 
 export type WallProps = Readonly<{
   lesson: Lesson
@@ -37,7 +37,12 @@ export function Wall(props: WallProps) {
   const { width, height } = useWindowDimensions()
   const measure = useMemo(() => measureWall(width, height), [width, height])
   const { view, judge } = useLessonView(board)
-  const wall = useMemo(() => readWall(view, chorus, judge, words), [view, chorus, judge, words])
+  const hasSquare = lesson.code !== null && lesson.isDoorOpen && lesson.status === 'open'
+  const hasNames = props.names !== null
+  const wall = useMemo(
+    () => readWall(view, chorus, judge, words, marginRoom(measure, hasSquare, hasNames)),
+    [view, chorus, judge, words, measure, hasSquare, hasNames],
+  )
   const sentences = useMemo(() => speakScore(view, view.line, null, words), [view, words])
   const { isStacked, marginPx } = measure
   return (
@@ -71,6 +76,8 @@ export function Wall(props: WallProps) {
         <WallMargin
           lesson={lesson}
           rubrics={wall.rubrics}
+          untold={wall.untold}
+          hasSquare={hasSquare}
           groups={props.names ? wall.groups : null}
           names={props.names}
           measure={measure}

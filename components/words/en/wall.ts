@@ -13,7 +13,8 @@ export const wall = {
   nobodyHere: 'Nobody has come in yet.',
   nothingReleased: 'No bar is released yet.',
   andMore: (count: number) => (count === 1 ? 'and one more' : `and ${lesson.inWords(count)} more`),
-  moreFindings: (count: number) => `${count} more in the room`,
+  moreFindings: (count: number) =>
+    count === 1 ? 'One more finding is on the lectern.' : `${count} more findings are on the lectern.`,
   letSound: 'Let this wall sound',
   letSoundHint: 'Sound starts quietly. Set the volume of the room before the first note.',
   soundsNow: 'This wall sounds.',

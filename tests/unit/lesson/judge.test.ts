@@ -45,8 +45,8 @@ test('with the real checker, parallel fifths are told at both bars, of as many a
     },
   }
   const groups = rankRoom(groupProposals(chorus, view.released, view.bars), judge)
-  const parallel = countFindings(groups).find(({ finding }) => finding.ruleId === 'par-perfect')
-  expect(parallel).toMatchObject({ count: 2, finding: { bars: [6, 7], level: 'law' } })
+  const parallel = countFindings(groups).find(({ findings }) => findings[0]?.ruleId === 'par-perfect')
+  expect(parallel).toMatchObject({ count: 2, findings: [{ bars: [6, 7], level: 'law' }] })
   expect(markRoom(groups).find(({ bar, notes }) => bar === 7 && notes[0]?.pitch === 'E5')?.tone).toBe(
     'breach',
   )

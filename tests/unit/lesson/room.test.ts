@@ -102,7 +102,9 @@ describe('the room, read as lozenges and counts', () => {
   const groups = rankRoom(room(many), judge)
 
   test('a finding says of how many members it is true', () => {
-    expect(countFindings(groups).map(({ finding: { bars }, count }) => [bars, count])).toEqual([
+    expect(
+      countFindings(groups).map(({ findings, count }) => [findings.map(({ bars }) => bars).flat(), count]),
+    ).toEqual([
       [[6, 7], 9],
       [[6], 1],
     ])
