@@ -28,6 +28,7 @@ export class Beat {
   #timer: NodeJS.Timeout | null = null
   readonly #later = new Map<Room, NodeJS.Timeout>()
   #isRunning = false
+  #lastMs = -Infinity
   #isStopped = false
 
   constructor(options: BeatOptions) {
@@ -64,14 +65,17 @@ export class Beat {
 
   #arm(): void {
     if (this.#timer || this.#isRunning || this.#due.size === 0) return
+    // A lone change goes at once; a crowd is gathered.
+    const waitMs = Math.max(0, this.#lastMs + WIRE_LIMITS.beatMs - performance.now())
     this.#timer = setTimeout(() => {
       this.#timer = null
       void this.#run()
-    }, WIRE_LIMITS.beatMs)
+    }, waitMs)
   }
 
   async #run(): Promise<void> {
     this.#isRunning = true
+    this.#lastMs = performance.now()
     const rooms = this.#due
     this.#due = new Set()
     const begun = [...rooms].flatMap((room) => this.#begin(room))

@@ -19,19 +19,25 @@ if (unknown.length > 0) {
   process.exit(2)
 }
 
-const rows: BenchRow[] = []
-const failures: string[] = []
-for (const name of asked.length > 0 ? asked : Object.keys(GROUPS)) {
-  const tell = (progress: string) => process.stderr.write(`${name}: ${progress}\n`)
-  try {
-    const load = GROUPS[name] as () => Promise<{ runBench: BenchGroup }>
-    const { runBench } = await load()
-    rows.push(...(await runBench(tell)))
-  } catch (error) {
-    // One group that cannot run (no Chromium, no clingo) must not cost the figures of the others.
-    failures.push(`${name} could not be measured: ${error instanceof Error ? error.message : String(error)}`)
+async function main(): Promise<void> {
+  const rows: BenchRow[] = []
+  const failures: string[] = []
+  for (const name of asked.length > 0 ? asked : Object.keys(GROUPS)) {
+    const tell = (progress: string) => process.stderr.write(`${name}: ${progress}\n`)
+    try {
+      const load = GROUPS[name] as () => Promise<{ runBench: BenchGroup }>
+      const { runBench } = await load()
+      rows.push(...(await runBench(tell)))
+    } catch (error) {
+      // One group that cannot run (no Chromium, no clingo) must not cost the figures of the others.
+      failures.push(
+        `${name} could not be measured: ${error instanceof Error ? error.message : String(error)}`,
+      )
+    }
   }
+  if (rows.length > 0) console.log(formatTable(rows))
+  for (const failure of failures) console.error(failure)
+  process.exit(failures.length > 0 ? 1 : 0)
 }
-if (rows.length > 0) console.log(formatTable(rows))
-for (const failure of failures) console.error(failure)
-process.exit(failures.length > 0 ? 1 : 0)
+
+void main()
