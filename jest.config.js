@@ -29,6 +29,7 @@ const project = (displayName, more = {}) => ({
 /** These make databases of their own on a cluster that one set-up brings up. */
 const withDatabase = {
   globalSetup: '<rootDir>/tests/support/global-setup.ts',
+  setupFilesAfterEnv: ['<rootDir>/tests/support/patience.ts'],
   globalTeardown: '<rootDir>/tests/support/global-teardown.ts',
 }
 

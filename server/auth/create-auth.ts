@@ -85,6 +85,8 @@ export function createAuth(options: AuthOptions) {
       log: (level, message) =>
         log[level === 'error' ? 'error' : 'debug']({ from: 'sign-in' }, message.slice(0, 120)),
     },
+    // Its refusals become answers all the same; what it did not expect comes to our own error table.
+    onAPIError: { throw: true },
     // It would count by address and lock a class out; ours counts by account (server/limits).
     rateLimit: { enabled: false },
     user: {

@@ -1,9 +1,11 @@
 import { statfsSync } from 'node:fs'
 import { arePackagesCurrent, installNodePackages } from './node-packages.mjs'
+import { stopPrograms } from './run-program.mjs'
 import { SetUpError, step } from './steps.mjs'
 import { installPackages, missingPackages } from './system-packages.mjs'
-import { buildWeb, isWebCurrent } from './web-build.mjs'
+import { buildWeb, isWebCurrent, removeHalfBuilt } from './web-build.mjs'
 
+const SIGNALS = ['SIGINT', 'SIGTERM', 'SIGHUP']
 const MEGABYTE = 1024 * 1024
 /** Room the packages, the build and an empty cluster take. */
 const INSTALL_MEGABYTES = 1_500
@@ -19,14 +21,27 @@ function checkRoom(megabytes) {
   }
 }
 
+/** Until the server runs there is nothing to wind up but the program that is at work. */
+function stopOnSignals() {
+  const stop = () => {
+    stopPrograms()
+    removeHalfBuilt()
+    process.exit(130)
+  }
+  for (const signal of SIGNALS) process.once(signal, stop)
+  return () => SIGNALS.forEach((signal) => process.off(signal, stop))
+}
+
 /** Installs what is missing and builds what is stale, telling each step. */
 export async function setUp({ needsBrowser }) {
+  const letGo = stopOnSignals()
   const isCurrent = arePackagesCurrent()
   checkRoom(isCurrent ? RUN_MEGABYTES : INSTALL_MEGABYTES)
   const missing = missingPackages({ needsBrowser })
   if (missing.length > 0) await step('System packages', (say) => installPackages(missing, say))
   if (!isCurrent) await step('Node packages', installNodePackages)
   if (!isWebCurrent()) await step('Web client (built once, about a minute)', buildWeb)
+  letGo()
 }
 
 /** Ends with words for an expected failure, and with all there is for another. */

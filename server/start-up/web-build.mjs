@@ -15,6 +15,9 @@ import { brotliCompress, constants, gzip } from 'node:zlib'
 import { runProgram } from './run-program.mjs'
 
 const OUTPUT = 'dist/web'
+/** Beside the output while a build is under way. */
+const made = `${OUTPUT}-${process.pid}`
+const old = `${OUTPUT}-old-${process.pid}`
 const STAMP = path.join(OUTPUT, '.stamp')
 /** What the web client is made of. */
 const SOURCES = ['app', 'components', 'shared', 'fonts', 'public']
@@ -47,6 +50,10 @@ export function isWebCurrent() {
   }
 }
 
+export function removeHalfBuilt() {
+  for (const directory of [made, old]) rmSync(directory, { recursive: true, force: true })
+}
+
 const brotli = promisify(brotliCompress)
 const zip = promisify(gzip)
 
@@ -67,8 +74,6 @@ async function compressAll(directory) {
 /** Builds the web client beside the old one and puts it in its place when it is whole. */
 export async function buildWeb() {
   const stamp = hashSources()
-  const made = `${OUTPUT}-${process.pid}`
-  const old = `${OUTPUT}-old-${process.pid}`
   mkdirSync(path.dirname(OUTPUT), { recursive: true })
   try {
     await runProgram(path.resolve('node_modules/.bin/expo'), ['export', '-p', 'web', '--output-dir', made], {
@@ -79,7 +84,6 @@ export async function buildWeb() {
     if (existsSync(OUTPUT)) renameSync(OUTPUT, old)
     renameSync(made, OUTPUT)
   } finally {
-    rmSync(made, { recursive: true, force: true })
-    rmSync(old, { recursive: true, force: true })
+    removeHalfBuilt()
   }
 }

@@ -5,7 +5,9 @@ import { MIGRATIONS } from '@/db/migrations'
 
 const tablesOf = async (db: Parameters<typeof migrateUp>[0]) => {
   const { rows } = await sql<{ name: string }>`
-    select table_name as name from information_schema.tables where table_schema = 'public' order by 1`.execute(db)
+    select table_name as name from information_schema.tables where table_schema = 'public' order by 1`.execute(
+    db,
+  )
   return rows.map(({ name }) => name).filter((name) => !name.startsWith('kysely_'))
 }
 
