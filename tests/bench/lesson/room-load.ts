@@ -98,7 +98,8 @@ export async function writeEvenly(
   )
   turns.sort((a, b) => a.order - b.order)
   const start = performance.now()
-  for (let done = 0; performance.now() - start < durationMs;) {
+  let done = 0
+  while (performance.now() - start < durationMs) {
     const due = Math.floor(((performance.now() - start) / 1000) * changesASecond)
     for (; done < due; done += 1) {
       const { room, phone } = turns[done % turns.length] as (typeof turns)[number]
