@@ -1,5 +1,5 @@
 import { View } from 'react-native'
-import { space, useTheme } from '@/components/theme'
+import { space, useTheme, useWidth } from '@/components/theme'
 import { Button } from '@/components/ui'
 import { useWords } from '@/components/words'
 
@@ -31,6 +31,7 @@ export function DeskFooter({
 }>) {
   const words = useWords().desk
   const { colors } = useTheme()
+  const isNarrow = useWidth().widthPx < 360
   return (
     <View
       role="toolbar"
@@ -40,7 +41,7 @@ export function DeskFooter({
         backgroundColor: colors.vellum,
         flexDirection: 'row',
         gap: space.small,
-        paddingHorizontal: space.one,
+        paddingHorizontal: isNarrow ? space.small : space.one,
         paddingTop: space.half,
         paddingBottom: `max(${space.half}px, env(safe-area-inset-bottom))` as never,
         alignItems: 'center',

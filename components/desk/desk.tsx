@@ -1,5 +1,5 @@
 import { useCallback, useMemo, useState } from 'react'
-import { View } from 'react-native'
+import { useWindowDimensions, View } from 'react-native'
 import { lineWith } from '@/components/lesson/line-with'
 import { PlayingScore } from '@/components/lesson/playing-score'
 import { ScoreText } from '@/components/lesson/score-text'
@@ -19,6 +19,9 @@ import { DeskSettings } from './desk-settings'
 import { useDesk, type SheetPen } from './use-desk'
 
 const RUBRIC_PX = 92
+/** Screens so low that the rungs need the room more. */
+const LOW_SCREEN_PX = 640
+const LOW_RUBRIC_PX = 62
 const SIDE_PX = 400
 
 export type DeskProps = Readonly<{
@@ -43,6 +46,7 @@ export function Desk(props: DeskProps) {
   const words = useWords()
   const { colors } = useTheme()
   const { widthPx, isWide } = useWidth()
+  const { height } = useWindowDimensions()
   const player = usePlayer()
   useStopOnLeave()
   const model = useDesk(board, sheet, pen)
@@ -100,7 +104,7 @@ export function Desk(props: DeskProps) {
       released={view.released}
       hasWritten={Object.keys(desk.own).length > 0}
       prompt={view.stage.prompt}
-      heightPx={isWide ? null : RUBRIC_PX}
+      heightPx={isWide ? null : height < LOW_SCREEN_PX ? LOW_RUBRIC_PX : RUBRIC_PX}
     />
   )
   const notices = (

@@ -26,22 +26,43 @@ export function CodeStep({
   onCode,
 }: Readonly<{ problem: string | null; isLooking: boolean; onCode: (code: string) => void }>) {
   const words = useWords().join
+  const player = usePlayer()
   const [isTyping, setTyping] = useState(false)
+  const [isSounding, setSounding] = useState(true)
+  const sound = (syllable: Syllable) => {
+    if (isSounding) player.strike(SCALE[CODE_SYLLABLES.indexOf(syllable)] ?? 'C4')
+  }
   return (
-    <View style={{ flex: 1, gap: space.half }}>
+    <View style={{ flex: 1, gap: space.small }}>
       {isTyping ? (
         <TypedCode problem={problem} isLooking={isLooking} onCode={onCode} />
       ) : (
-        <TappedCode problem={problem} isLooking={isLooking} onCode={onCode} />
+        <TappedCode problem={problem} isLooking={isLooking} onCode={onCode} onTap={sound} />
       )}
       <View
-        style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', marginLeft: -space.small }}
+        style={{
+          flexDirection: 'row',
+          flexWrap: 'wrap',
+          justifyContent: 'space-between',
+          marginHorizontal: -space.small,
+          marginTop: space.small,
+        }}
       >
         <Button
           kind="quiet"
           label={isTyping ? words.tapInstead : words.typeInstead}
           onPress={() => setTyping(!isTyping)}
         />
+        {isTyping ? null : (
+          <Button
+            kind="quiet"
+            label={isSounding ? words.soundOff : words.soundOn}
+            onPress={() => {
+              if (isSounding) player.stop()
+              setSounding(!isSounding)
+            }}
+          />
+        )}
       </View>
       <Txt kind="note" tone="lead">
         {words.scan}
@@ -52,37 +73,30 @@ export function CodeStep({
 
 type StepProps = Readonly<{ problem: string | null; isLooking: boolean; onCode: (code: string) => void }>
 
-function TappedCode({ problem, isLooking, onCode }: StepProps) {
-  const words = useWords().join
-  const player = usePlayer()
+function TappedCode({
+  problem,
+  isLooking,
+  onCode,
+  onTap,
+}: StepProps & Readonly<{ onTap: (syllable: Syllable) => void }>) {
   const [entry, setEntry] = useState<CodeEntry>([])
-  const [isSounding, setSounding] = useState(true)
   // A code that was refused is replaced by the next tap, not added to.
   const isSpent = isComplete(entry) && problem !== null
 
   const tap = (syllable: Syllable) => {
-    if (isSounding) player.strike(SCALE[CODE_SYLLABLES.indexOf(syllable)] ?? 'C4')
-    const next = withSyllable(isSpent ? [] : entry, syllable)
+    onTap(syllable)
+    const before = isSpent ? [] : entry
+    const next = withSyllable(before, syllable)
     setEntry(next)
-    if (isComplete(next) && !isComplete(isSpent ? [] : entry)) onCode(formatCode(next))
+    if (isComplete(next) && !isComplete(before)) onCode(formatCode(next))
   }
 
   return (
     <View style={{ flex: 1, gap: space.small }}>
       <EnteredCode entry={entry} hasProblem={isSpent} onTakeBack={() => setEntry(withoutLast(entry))} />
-      <CodeStatus problem={isSpent ? problem : null} isLooking={isLooking} />
-      <View style={{ flex: 1, minHeight: space.one }} />
+      <CodeStatus problem={problem} isLooking={isLooking} />
+      <View style={{ flex: 1, minHeight: space.small }} />
       <SyllableStaff lastTapped={entry.at(-1) ?? null} isDisabled={isLooking} onTap={tap} />
-      <View style={{ marginLeft: -space.small, marginTop: space.small }}>
-        <Button
-          kind="quiet"
-          label={isSounding ? words.soundOff : words.soundOn}
-          onPress={() => {
-            if (isSounding) player.stop()
-            setSounding(!isSounding)
-          }}
-        />
-      </View>
     </View>
   )
 }
