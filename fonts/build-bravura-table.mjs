@@ -1,6 +1,6 @@
 /**
  * Writes shared/notation/bravura.ts: what the engraver needs of Bravura, from the font and its own SMuFL metadata.
- * Run: npx tsx fonts/build-bravura-table.mjs
+ * Run: npx tsx fonts/build-bravura-table.mjs (with `--check`: only compare)
  *
  * Glyphs are drawn from outlines, so that a score stands on the screen before any font has arrived.
  * Bravura is licensed under the SIL Open Font License 1.1; the outlines are a part of it under the same licence.
@@ -82,4 +82,9 @@ export const ENGRAVING_DEFAULTS = ${JSON.stringify(defaults)} as const
 export const BRAVURA: Readonly<Record<GlyphName, MusicGlyph>> = ${JSON.stringify(Object.fromEntries(glyphs))}
 `
 const style = await resolveConfig(target)
-writeFileSync(target, await format(source, { ...style, parser: 'typescript' }))
+const written = await format(source, { ...style, parser: 'typescript' })
+if (!process.argv.includes('--check')) writeFileSync(target, written)
+else if (readFileSync(target, 'utf8') !== written) {
+  console.error(`${target.pathname} is not what the font says; run this again without --check.`)
+  process.exitCode = 1
+}

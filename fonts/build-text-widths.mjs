@@ -1,6 +1,6 @@
 /**
  * Writes shared/notation/text-widths.ts: how wide the score's lettering is, so that the engraver can keep words,
- * numbers and notes apart without a screen to measure on. Run: npx tsx fonts/build-text-widths.mjs
+ * numbers and notes apart without a screen to measure on. Run: npx tsx fonts/build-text-widths.mjs (with `--check`: only compare)
  */
 import { readFileSync, writeFileSync } from 'node:fs'
 import { Blob, Buffer as Run, Face, Feature, Font, shape } from 'harfbuzzjs'
@@ -61,4 +61,9 @@ export const FACE_WIDTHS = ${JSON.stringify(tables)} as const satisfies Readonly
 export type FaceName = keyof typeof FACE_WIDTHS
 `
 const style = await resolveConfig(target)
-writeFileSync(target, await format(source, { ...style, parser: 'typescript' }))
+const written = await format(source, { ...style, parser: 'typescript' })
+if (!process.argv.includes('--check')) writeFileSync(target, written)
+else if (readFileSync(target, 'utf8') !== written) {
+  console.error(`${target.pathname} is not what the font says; run this again without --check.`)
+  process.exitCode = 1
+}

@@ -68,6 +68,11 @@ const Sheet = memo(function Sheet({ layout, ground, handBar, highlight }: SheetP
 
 /** A score, engraved and drawn. See `ScoreInput` for what it shows and `ScoreSize` for where it is read. */
 export function Score(props: ScoreProps) {
+  // A place that has not been measured yet has no width.
+  return props.width >= 1 ? <EngravedScore {...props} /> : null
+}
+
+function EngravedScore(props: ScoreProps) {
   const { input, size, width, maxHeight, onPressBar, onPressStaff, playhead = null, highlight = null } = props
   const { colors, isMotionReduced } = useTheme()
   const words = useWords()
@@ -95,7 +100,8 @@ export function Score(props: ScoreProps) {
 
   return (
     <View
-      role="group"
+      // A mini is one picture; elsewhere every bar is told.
+      role={size === 'mini' ? 'img' : 'group'}
       aria-label={props.accessibilityLabel ?? words.score.score}
       style={[styles.window, { width: widthPx, height: layout.heightPx }]}
     >
@@ -104,12 +110,14 @@ export function Score(props: ScoreProps) {
         {...pointer.handlers}
       >
         <Sheet layout={layout} ground={ground} handBar={handBar} highlight={highlight} />
-        <BarButtons
-          layout={layout}
-          bars={input.bars}
-          handBar={handBar}
-          onPressBar={onPressBar ? pressBar : null}
-        />
+        {size !== 'mini' && (
+          <BarButtons
+            layout={layout}
+            bars={input.bars}
+            handBar={handBar}
+            onPressBar={onPressBar ? pressBar : null}
+          />
+        )}
         {playhead && <PlayheadLine layout={layout} playhead={playhead} />}
         {pointer.ghost && (
           <Ghost layout={layout} hit={pointer.ghost} isHeld={pointer.isHeld} ground={ground} />
