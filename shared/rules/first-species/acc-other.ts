@@ -42,8 +42,8 @@ export const accOther: Rule<Frame, Params> = {
     sources: cite('DAVD', 'OMT1', 'JEPP°', 'EX'),
     disagreement:
       'Fux writes B flat in Dorian and Lydian; two courses allow no accidental but those of the close.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'F#4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [1] },
+    right: { cantus: 'D4 E4 D4 E4 D4', line: 'A4 G4 B4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D4 E4 D4 E4 D4', line: 'A4 G4 F#4 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
     messages: { foreign: 'The {note} is not a note of the mode.' },
   },
 }

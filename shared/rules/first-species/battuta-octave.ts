@@ -53,8 +53,8 @@ export const battutaOctave: Rule<NeighbourState, Params> = {
     sources: cite('FUXE r2', 'GROVE 2nd order', 'PERF (on Salzer and Schachter)', 'EX'),
     disagreement:
       'A law in the English Fux and in Grove’s Dictionary; today’s open textbooks do not mention it.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 E4 F4 E4 D4', line: 'D5 C5 F4 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
+    right: { cantus: 'D3 C3 D3 E3 D3', line: 'D4 E4 D4 C#4 D4', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D3 C3 D3 E3 D3', line: 'D4 G4 D4 C#4 D4', mode: 'dorian', final: 'D', breaches: [3] },
     messages: {
       'leaps-onto': 'The upper voice drops onto a {interval} as the lower voice comes up to meet it.',
     },

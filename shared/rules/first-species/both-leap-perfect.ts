@@ -26,8 +26,8 @@ export const bothLeapPerfect: Rule<NeighbourState, NoParams> = {
     why: 'A leap draws the ear to where it lands. Two leaps landing on a bare consonance make it stick out.',
     mends: 'Let the line come by step, or land on a third or sixth.',
     sources: cite('LEHM I', 'RUSH I'),
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 D4 E4 D4', line: 'F4 D5 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
+    right: { cantus: 'D4 F4 D4 E4 D4', line: 'A4 A4 B4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D4 F4 D4 E4 D4', line: 'A4 A4 D5 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
     messages: { 'both-leap': 'Both voices leap into a {interval}.' },
   },
 }

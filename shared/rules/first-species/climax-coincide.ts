@@ -43,8 +43,20 @@ export const climaxCoincide: Rule<State, NoParams> = {
     mends: 'Move the peak of the line before or after that of the cantus.',
     sources: cite('OMT1', 'ECR C2', 'EX'),
     disagreement: 'A law in one textbook. In eleven of Fux’s forty-six solutions the peaks fall together.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 E4 F4 E4 D4', line: 'D5 C5 F5 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
+    right: {
+      cantus: 'D4 F4 A4 G4 F4 E4 D4',
+      line: 'A4 D5 C5 E5 D5 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'D4 F4 A4 G4 F4 E4 D4',
+      line: 'A4 D5 F5 E5 D5 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [3],
+    },
     messages: { together: 'Both lines reach their highest note in the same bar.' },
   },
 }

@@ -71,8 +71,20 @@ export const dirPerfect: Rule<NeighbourState, Params> = {
     ),
     disagreement:
       'Many sources allow no exception. Others let it pass when the upper voice steps, when either voice steps, when the upper voice rises a semitone to the octave, or between tonic and dominant.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 E4 F4 E4 D4', line: 'D4 G4 C5 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
+    right: {
+      cantus: 'D4 E4 F4 G4 E4 D4',
+      line: 'A4 C5 C5 B4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'D4 E4 F4 G4 E4 D4',
+      line: 'A4 G4 C5 B4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [3],
+    },
     messages: {
       'rise-into': 'Both voices rise into a {interval}.',
       'rise-into.mend': 'Come to it from above, or let one voice stay.',

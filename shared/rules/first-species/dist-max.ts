@@ -59,8 +59,20 @@ export const distMax: Rule<State, Params> = {
     sources: cite('OMT1', 'ECR C4', 'JEPP°', 'EX'),
     disagreement:
       'A twelfth in some sources, a tenth in others; one would rather stay within an octave. Fux once goes to a thirteenth.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 C4 E4 D4', line: 'A4 A5 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    right: {
+      cantus: 'D4 C4 D4 F4 E4 D4',
+      line: 'D5 E5 F5 D5 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'D4 C4 D4 F4 E4 D4',
+      line: 'D5 A5 F5 D5 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [2],
+    },
     messages: {
       'too-far': 'The voices are a {interval} apart, further than a {max}.',
       far: 'The voices have been further apart than a {preferred} for some time.',

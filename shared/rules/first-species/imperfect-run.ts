@@ -62,10 +62,16 @@ export const imperfectRun: Rule<State, Params> = {
     mends: 'Break the row: move against the cantus to another interval.',
     sources: cite('OMT1', 'RUSH I', 'LEHM I', 'DAVD', 'JEPP°', 'S&S°', 'EX'),
     disagreement: 'Most sources allow three in a row, two allow four.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    right: {
+      cantus: 'D4 F4 G4 A4 F4 E4 D4',
+      line: 'A4 A4 B4 C5 D5 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
     wrong: {
       cantus: 'D4 F4 G4 A4 F4 E4 D4',
-      line: 'D4 A4 B4 C5 A4 C#5 D5',
+      line: 'A4 A4 B4 C5 A4 C#5 D5',
       mode: 'dorian',
       final: 'D',
       breaches: [5],

@@ -48,7 +48,7 @@ export const majorThirdsRun: Rule<NeighbourState, Params> = {
     sources: cite('LEHM I', 'NOTAV I-iv', 'EX Figs 44, 88a'),
     disagreement:
       'Today’s American textbooks do not mention it; one source forbids it only on the fourth and fifth degrees.',
-    right: { cantus: 'C4 D4 E4 D4 C4', line: 'E4 F4 C5 B4 C5', mode: 'ionian', final: 'C', breaches: [] },
+    right: { cantus: 'C4 F4 E4 D4 C4', line: 'G4 A4 C5 B4 C5', mode: 'ionian', final: 'C', breaches: [] },
     wrong: { cantus: 'C4 F4 G4 D4 C4', line: 'G4 A4 B4 B4 C5', mode: 'ionian', final: 'C', breaches: [3] },
     messages: { two: 'Two major thirds follow each other.' },
   },

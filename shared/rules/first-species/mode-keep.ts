@@ -31,7 +31,14 @@ export const modeKeep: Rule<Exercise, NoParams> = {
     mends: 'Begin on the final, or above the cantus on its fifth; end on the final.',
     sources: cite('FUXE r4', 'FUXN'),
     disagreement: 'Most textbooks fold this into the rules of the opening.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    right: {
+      cantus: 'D4 F4 E4 D4',
+      line: 'D4 D4 C#4 D4',
+      position: 'below',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
     wrong: {
       cantus: 'D4 F4 E4 D4',
       line: 'G3 D4 C#4 D4',

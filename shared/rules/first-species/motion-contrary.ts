@@ -67,10 +67,10 @@ export const motionContrary: Rule<State, Params> = {
     right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
     wrong: {
       cantus: 'C4 D4 F4 E4 D4 C4',
-      line: 'E4 F4 A4 G4 F4 E4',
+      line: 'G4 B4 D5 C5 B4 C5',
       mode: 'ionian',
       final: 'C',
-      breaches: [6],
+      breaches: [5],
     },
     messages: {
       'too-little': 'Contrary motion makes up {count} of {of} moves.',

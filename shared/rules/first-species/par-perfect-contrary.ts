@@ -28,8 +28,8 @@ export const parPerfectContrary: Rule<NeighbourState, NoParams> = {
     mends: 'Put a third or a sixth between the two.',
     sources: cite('OMT1', 'LEHM I', 'DAVD', 'HSR soft 4'),
     disagreement: 'One teacher, as reported in a handout, allows it.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'A3 D3 F3 E3 D3', line: 'E4 A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    right: { cantus: 'D4 A4 F4 E4 D4', line: 'D5 C5 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D4 A4 F4 E4 D4', line: 'A5 E5 D5 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: {
       fifths: 'A fifth follows a fifth, the voices moving against each other.',
       octaves: 'An octave follows an octave or unison, the voices moving against each other.',

@@ -28,8 +28,8 @@ export const parPerfect: Rule<NeighbourState, NoParams> = {
     why: 'In a row of equal perfect consonances the second voice only doubles the first, and there is one line where there should be two.',
     mends: 'Come to the second one from a third or a sixth, or let the line move the other way.',
     sources: cite('FUXE r1', 'RWU', 'OMT1', 'CHER r4', 'LEHM', 'NOTAV', 'RUSH'),
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'A4 C5 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    right: { cantus: 'D4 F4 G4 E4 D4', line: 'A4 A4 B4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D4 F4 G4 E4 D4', line: 'A4 C5 B4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: {
       fifths: 'Two fifths follow each other, both voices moving the same way.',
       octaves: 'Two octaves follow each other, both voices moving the same way.',

@@ -37,7 +37,7 @@ export const relChromatic: Rule<NeighbourState, NoParams> = {
     why: 'Natural and sharp in two voices side by side sound like a mistake of one of them.',
     mends: 'Put another sonority between the two, or let the same voice sing both.',
     sources: cite('NOTAV I-iv', 'S&S°'),
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    right: { cantus: 'D4 C4 F4 E4 D4', line: 'D5 E5 D5 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
     wrong: { cantus: 'D4 C4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
     messages: { cross: 'The {first} of one voice is followed by {second} in the other.' },
   },

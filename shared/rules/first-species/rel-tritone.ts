@@ -46,7 +46,7 @@ export const relTritone: Rule<NeighbourState, Params> = {
     sources: cite('FUXE r5', 'FUXN', 'NOTAV I-iv', 'LEHM I', 'EX'),
     disagreement:
       'Two sources ban it always, one finds it milder when both voices step, one only minds it between chords in root position.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    right: { cantus: 'C4 F4 E4 D4 C4', line: 'G4 A4 C5 B4 C5', mode: 'ionian', final: 'C', breaches: [] },
     wrong: { cantus: 'C4 F4 G4 D4 C4', line: 'G4 A4 B4 B4 C5', mode: 'ionian', final: 'C', breaches: [3] },
     messages: { against: 'The {first} of one voice stands directly against the {second} of the other.' },
   },

@@ -29,7 +29,7 @@ export const s1CadenceBelow: Rule<Exercise, NoParams> = {
     },
     wrong: {
       cantus: 'D4 F4 E4 D4',
-      line: 'D4 D4 A3 D4',
+      line: 'D4 D4 G3 D4',
       position: 'below',
       mode: 'dorian',
       final: 'D',

@@ -48,14 +48,19 @@ export const s1Repeat: Rule<State, Params> = {
     sources: cite('OMT1', 'HSR soft 1', 'FLASH', 'LEHM I', 'CCC r4', 'EX'),
     disagreement:
       'Three sources allow one repetition in an exercise; one lets the upper voice sound a note three times in a row and the lower voice not at all. Fux repeats up to twice.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: {
-      cantus: 'D4 F4 G4 F4 E4 D4',
-      line: 'A4 A4 Bb4 D5 C#5 D5',
+    right: {
+      cantus: 'D4 F4 E4 F4 G4 E4 D4',
+      line: 'A4 A4 C5 D5 B4 C#5 D5',
       mode: 'dorian',
       final: 'D',
-      breaches: [2],
-      params: { maxRepeats: 0 },
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'D4 F4 E4 F4 G4 E4 D4',
+      line: 'A4 A4 C5 C5 B4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [4],
     },
     messages: {
       'too-many': 'The line repeats its {note}, and has repeated often enough.',

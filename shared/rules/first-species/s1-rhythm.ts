@@ -30,7 +30,7 @@ export const s1Rhythm: Rule<State, NoParams> = {
     mends: 'Write one whole note in the bar.',
     sources: cite('FUXE', 'OMT1', 'CHER', 'BRIDGE', 'LEHM', 'NOTAV', 'RUSH'),
     right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'A4 A4:2,G4:2 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    wrong: { cantus: 'D4 F4 E4 D4', line: 'A4 A4:2,D5:2 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: {
       'not-one-note': 'This bar does not hold one whole note.',
       rest: 'The line rests in this bar.',

@@ -18,8 +18,8 @@ export const s1Unison: Rule<Exercise, NoParams> = {
     why: 'In a unison one of the two voices is gone.',
     mends: 'Take the third instead.',
     sources: cite('OMT1', 'RUSH I', 'LEHM I', 'NOTAV', 'CHER r2', 'FLASH', 'HSR'),
-    right: { cantus: 'D4 F4 E4 D4', line: 'D4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'D4 F4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    right: { cantus: 'D4 G4 F4 E4 D4', line: 'A4 B4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    wrong: { cantus: 'D4 G4 F4 E4 D4', line: 'A4 G4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: { inside: 'The voices meet in a unison inside the exercise.' },
   },
 }

@@ -33,7 +33,7 @@ export const similarLeap: Rule<NeighbourState, Params> = {
     mends: 'Step here, or leap where the cantus goes the other way or stays near.',
     sources: cite('OMT1', 'E2'),
     right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'F4 D5 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    wrong: { cantus: 'D4 F4 E4 D4', line: 'A4 D5 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: { leaps: 'The line leaps a {interval} in the same direction as the cantus.' },
   },
 }

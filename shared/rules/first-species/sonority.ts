@@ -1,61 +1,24 @@
 import type { Breach, Exercise, Moment, Position } from '@/shared/rules/rule'
-import {
-  directionFrom,
-  isPerfectConsonance,
-  semitonesFrom,
-  stepsFrom,
-  type Direction,
-} from '@/shared/theory/interval'
+import { directionFrom, stepsFrom, type Direction } from '@/shared/theory/interval'
 import { nameInterval, nameSize } from '@/shared/theory/interval-name'
-import { comparePitches, type Pitch } from '@/shared/theory/pitch'
+import type { Pitch } from '@/shared/theory/pitch'
 import { alterationInMode, degreeOf, type Degree } from '@/shared/theory/scale'
 
-/** Both voices at one moment, both sounding, and the interval between them whichever is the higher. */
-export type Sonority = Readonly<{
-  bar: number
-  place: number
-  note: Pitch
-  other: Pitch
-  steps: number
-  semitones: number
-  /** The interval without its octaves. */
-  simpleSteps: number
-  simpleSemitones: number
-}>
+/** A moment at which both voices sound; the interval between them is that of the moment. */
+export type Sonority = Moment & Readonly<{ note: Pitch; other: Pitch }>
 
 /** Two kinds of perfect consonance: octaves count with unisons, twelfths with fifths. */
 export type PerfectKind = 'octave' | 'fifth'
 
-/** A moment is read by some thirty rules; the sonority in it is worked out once. */
-const known = new WeakMap<Moment, Sonority>()
+const isSonority = (moment: Moment): moment is Sonority =>
+  moment.note !== null && moment.note !== 'rest' && moment.other !== null
 
 /** Both voices of a moment, or `null` when the line rests there or is not written yet. */
-export function sonorityOf(moment: Moment): Sonority | null {
-  const { note, other } = moment
-  if (note === null || note === 'rest' || other === null) return null
-  const found = known.get(moment)
-  if (found) return found
-  const isNoteHigher = comparePitches(note, other) >= 0
-  const steps = isNoteHigher ? stepsFrom(other, note) : stepsFrom(note, other)
-  const semitones = isNoteHigher ? semitonesFrom(other, note) : semitonesFrom(note, other)
-  const octaves = Math.floor(steps / 7)
-  const sonority: Sonority = {
-    bar: moment.bar,
-    place: moment.place,
-    note,
-    other,
-    steps,
-    semitones,
-    simpleSteps: steps - 7 * octaves,
-    simpleSemitones: semitones - 12 * octaves,
-  }
-  known.set(moment, sonority)
-  return sonority
-}
+export const sonorityOf = (moment: Moment): Sonority | null => (isSonority(moment) ? moment : null)
 
-export function perfectKindOf(sonority: Sonority): PerfectKind | null {
-  if (!isPerfectConsonance(sonority)) return null
-  return sonority.simpleSteps === 0 ? 'octave' : 'fifth'
+export function perfectKindOf({ simpleSteps, simpleSemitones }: Sonority): PerfectKind | null {
+  if (simpleSteps === 0) return simpleSemitones === 0 ? 'octave' : null
+  return simpleSteps === 4 && simpleSemitones === 7 ? 'fifth' : null
 }
 
 /** The same spelled pitch in both voices. */

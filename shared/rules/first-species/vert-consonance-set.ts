@@ -29,7 +29,7 @@ export const vertConsonanceSet: Rule<Exercise, NoParams> = {
     mends: 'Move the note by a step: the nearest third, fifth, sixth or octave will do.',
     sources: cite('FUXE', 'OMT1', 'LEHM I', 'NOTAV I-i', 'LOEFF r1', 'RWU', 'HSR'),
     right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'A4 G4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    wrong: { cantus: 'D4 F4 E4 D4', line: 'D5 E5 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: { dissonant: 'The voices sound a {interval}, a dissonance.' },
   },
 }

@@ -21,8 +21,20 @@ export const vertDimFifth: Rule<Exercise, NoParams> = {
     why: 'Not every fifth is perfect: over B stands F, a semitone short. The ear hears the tritone and waits for it to resolve.',
     mends: 'Take the third or the sixth over that cantus note instead.',
     sources: cite('GENN', 'LEHM I', 'NOTAV', 'TALK (citing Mann)'),
-    right: { cantus: 'C4 D4 C4 B3 C4', line: 'G4 F4 E4 D4 C4', mode: 'ionian', final: 'C', breaches: [] },
-    wrong: { cantus: 'C4 D4 C4 B3 C4', line: 'G4 F4 G4 F4 E4', mode: 'ionian', final: 'C', breaches: [4] },
+    right: {
+      cantus: 'C4 D4 B3 E4 D4 C4',
+      line: 'G4 F4 G4 C5 B4 C5',
+      mode: 'ionian',
+      final: 'C',
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'C4 D4 B3 E4 D4 C4',
+      line: 'G4 F4 F4 G4 B4 C5',
+      mode: 'ionian',
+      final: 'C',
+      breaches: [3],
+    },
     messages: { tritone: 'The voices sound a {interval}, the tritone.' },
   },
 }

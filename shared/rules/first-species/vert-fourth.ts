@@ -21,7 +21,7 @@ export const vertFourth: Rule<Exercise, NoParams> = {
     why: 'Over the lowest voice a fourth asks to fall to a third. It rests only where a third voice stands under it.',
     mends: 'Move the line by a step, to the third or the fifth beside it.',
     sources: cite('OMT1', 'GENN', 'LOEFF', 'NOTAV', 'RUSH I'),
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
+    right: { cantus: 'D4 E4 F4 E4 D4', line: 'A4 G4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
     wrong: { cantus: 'D4 E4 F4 E4 D4', line: 'A4 A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
     messages: { fourth: 'The voices sound a {interval}; between two voices a fourth is a dissonance.' },
   },

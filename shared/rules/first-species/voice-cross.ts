@@ -42,8 +42,20 @@ export const voiceCross: Rule<State, Params> = {
     sources: cite('OMT1', 'RUSH I', 'DAVD', 'LEHM I–II', 'CHER r3, r15', 'NOTAV II', 'EX'),
     disagreement:
       'An error in today’s textbooks. Cherubini and other older schools allow it in need, if it is consonant and brief, and Fux does it himself.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 F4 E4 D4', line: 'D4 D4 C#5 D5', mode: 'dorian', final: 'D', breaches: [2] },
+    right: {
+      cantus: 'D4 F4 G4 F4 E4 D4',
+      line: 'A4 A4 B4 A4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'D4 F4 G4 F4 E4 D4',
+      line: 'D4 D4 E4 A4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [2, 3],
+    },
     messages: {
       under: 'The line goes below the cantus.',
       over: 'The line goes above the cantus.',

@@ -31,8 +31,20 @@ export const voiceOverlap: Rule<NeighbourState, NoParams> = {
     mends: 'Stay on this side of the note the other voice has left.',
     sources: cite('OMT1', 'RUSH I', 'DAVD', 'EX'),
     disagreement: 'A law in two textbooks of today; the sources of the eighteenth century do not know it.',
-    right: { cantus: 'D4 F4 E4 D4', line: 'A4 A4 C#5 D5', mode: 'dorian', final: 'D', breaches: [] },
-    wrong: { cantus: 'D4 A4 D4 E4 D4', line: 'A4 C5 F4 C#5 D5', mode: 'dorian', final: 'D', breaches: [3] },
+    right: {
+      cantus: 'D4 A4 D4 F4 E4 D4',
+      line: 'A4 C5 B4 A4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [],
+    },
+    wrong: {
+      cantus: 'D4 A4 D4 F4 E4 D4',
+      line: 'A4 C5 F4 A4 C#5 D5',
+      mode: 'dorian',
+      final: 'D',
+      breaches: [3],
+    },
     messages: {
       'upper-below': 'The upper voice moves below the note the lower voice has just left.',
       'lower-above': 'The lower voice moves above the note the upper voice has just left.',

@@ -40,7 +40,7 @@ export const createCore1 = ({ lowest, highest }: Pool): RuleSet => ({
     'mel-leaps-same-direction': { level: 'law', params: { allow: 'never' } },
     'mel-single-climax': { level: 'law', params: { extreme: 'high' } },
     'mel-tritone-outline': { level: 'law', params: { diminishedFifth: 'ban' } },
-    'both-leap-same': { level: 'law', params: { max: 3, wider: 'both' } },
+    'both-leap-same': { level: 'law', params: { from: 4, max: 3 } },
   },
 })
 

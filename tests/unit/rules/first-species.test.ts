@@ -1,4 +1,12 @@
-import { checkLine, judgeExample, readExample, type Breach, type Example } from '@/shared/rules'
+import {
+  checkLine,
+  findPreset,
+  judgeExample,
+  readExample,
+  type Breach,
+  type Example,
+  type RuleSet,
+} from '@/shared/rules'
 import { describeFinding } from '@/shared/rules/describe'
 import { FIRST_SPECIES_RULES } from '@/shared/rules/first-species'
 import { readMoments, readVoice } from '@/shared/rules/reading'
@@ -35,6 +43,14 @@ describe.each(rows)('%s', (id, rule) => {
       expect(judge(rule, row).map(({ bars }) => bars.at(-1))).toEqual(row[2])
     },
   )
+
+  test('shows a right example that a teacher could stand by', () => {
+    const { exercise, line } = readExample(rule.explain.right)
+    const broken = checkLine(exercise, line, findPreset('fux-mann') as RuleSet).filter(
+      ({ level }) => level === 'law',
+    )
+    expect(broken).toEqual([])
+  })
 
   test('points at bars and notes that exist and are written, and puts every finding in words', () => {
     for (const row of cases) {
