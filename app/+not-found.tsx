@@ -1,11 +1,13 @@
-import { LinkButton, Page } from '@/components/ui'
+import { Frame, useSession } from '@/components/session'
+import { LinkButton } from '@/components/ui'
 import { useWords } from '@/components/words'
 
 export default function NotFound() {
   const words = useWords().common
+  const { me } = useSession()
   return (
-    <Page title={words.notFound} lede={words.notFoundMore} width="text">
+    <Frame me={me && !me.isGuest ? me : null} title={words.notFound} lede={words.notFoundMore} width="text">
       <LinkButton href="/" label={words.goHome} />
-    </Page>
+    </Frame>
   )
 }

@@ -10,7 +10,7 @@ export default function SignIn() {
   const target = parseReturnPath(to)
   if (me && !me.isGuest) return <Redirect href={target as never} />
   return (
-    <Frame me={null} title={words.title} width="text">
+    <Frame me={null} title={words.title}>
       <SignInForm to={target} isDemo={isDemo} />
     </Frame>
   )

@@ -4,8 +4,8 @@ import { View } from 'react-native'
 import { RefusalNotice, useAct, callApi } from '@/components/api'
 import type { Highlight } from '@/components/score'
 import { Frame } from '@/components/session'
-import { space, useTheme, useWidth } from '@/components/theme'
-import { Button, Field, Form, Heading, Notice, Txt } from '@/components/ui'
+import { space, useWidth } from '@/components/theme'
+import { Beside, Button, Field, Form, Heading, Notice, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
 import { cantusBodySchema, MAX_SOURCE_CHARACTERS, type CantusBody } from '@/shared/api/cantus'
@@ -39,7 +39,6 @@ export function CantusEditor({
   const say = words.cantus
   const router = useRouter()
   const { isWide } = useWidth()
-  const { colors } = useTheme()
   const { draft, judged, isFound, isChanged, change, discard, forget } = useDraft(draftId, start)
   const [highlight, setHighlight] = useState<Highlight | null>(null)
   const [hasTried, setTried] = useState(false)
@@ -85,14 +84,24 @@ export function CantusEditor({
     change(some)
   }
 
-  const findings = (
-    <MelodyFindings
-      findings={judged.findings}
-      presetId={draft.presetId}
-      onPreset={(presetId) => edit({ presetId })}
-      isWaiting={isEmpty || judged.notes === null}
-      onPoint={setHighlight}
-    />
+  const margin = (
+    <View style={{ gap: space.double }}>
+      <MelodyFindings
+        findings={judged.findings}
+        presetId={draft.presetId}
+        onPreset={(presetId) => edit({ presetId })}
+        isWaiting={isEmpty || judged.notes === null}
+        onPoint={setHighlight}
+      />
+      <View style={{ gap: space.small }}>
+        <Heading level={2}>{say.facts.title}</Heading>
+        {judged.analysis ? (
+          <MelodyFacts analysis={judged.analysis} mode={judged.mode} final={judged.final} />
+        ) : (
+          <Txt tone="lead">{say.facts.waiting}</Txt>
+        )}
+      </View>
+    </View>
   )
   return (
     <Frame
@@ -104,8 +113,8 @@ export function CantusEditor({
       {isFound ? (
         <Notice title={say.edit.draftFound} action={<Button label={say.edit.discard} onPress={discard} />} />
       ) : null}
-      <View style={{ flexDirection: isWide ? 'row' : 'column', columnGap: space.triple, rowGap: space.wide }}>
-        <View style={{ flex: isWide ? 1 : undefined, minWidth: 0, gap: space.wide }}>
+      <Beside margin={margin}>
+        <View style={{ gap: space.wide }}>
           <View style={{ gap: space.half }}>
             <CantusStaff
               draft={draft}
@@ -166,30 +175,7 @@ export function CantusEditor({
             </View>
           </Form>
         </View>
-        <View
-          style={
-            isWide
-              ? {
-                  width: 380,
-                  gap: space.double,
-                  borderLeftWidth: 1,
-                  borderColor: colors.hairline,
-                  paddingLeft: space.wide,
-                }
-              : { gap: space.double }
-          }
-        >
-          {findings}
-          <View style={{ gap: space.small }}>
-            <Heading level={2}>{say.facts.title}</Heading>
-            {judged.analysis ? (
-              <MelodyFacts analysis={judged.analysis} mode={judged.mode} final={judged.final} />
-            ) : (
-              <Txt tone="lead">{say.facts.waiting}</Txt>
-            )}
-          </View>
-        </View>
-      </View>
+      </Beside>
     </Frame>
   )
 }

@@ -16,6 +16,7 @@ import {
   Rows,
   Select,
   Txt,
+  usePageMeasure,
 } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
@@ -118,7 +119,8 @@ export function CantusLibrary({ me }: Readonly<{ me: Me }>) {
 function CantusRow({ cantus }: Readonly<{ cantus: Cantus }>) {
   const words = useWords()
   const say = words.cantus
-  const { isWide, widthPx } = useWidth()
+  const { isWide } = useWidth()
+  const { contentPx } = usePageMeasure()
   const final = pitchOf(`${cantus.final}4`)
   const input = useMemo(
     () =>
@@ -135,7 +137,7 @@ function CantusRow({ cantus }: Readonly<{ cantus: Cantus }>) {
         <Score
           input={input}
           size="mini"
-          width={isWide ? Math.min(620, widthPx * 0.45) : widthPx - 2 * space.one}
+          width={isWide ? Math.min(620, contentPx * 0.48) : contentPx}
           accessibilityLabel={cantus.title}
         />
       }

@@ -3,6 +3,7 @@ import { View } from 'react-native'
 import { PlayingScore } from '@/components/lesson/playing-score'
 import type { Highlight } from '@/components/score'
 import { usePlayer } from '@/components/sound'
+import { usePageMeasure } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { signatureAlteration } from '@/shared/theory/key'
 import type { Letter, PitchName } from '@/shared/theory/pitch'
@@ -29,7 +30,7 @@ export function CantusStaff({
 }>) {
   const words = useWords()
   const { strike } = usePlayer()
-  const [widthPx, setWidthPx] = useState<number | null>(null)
+  const { contentPx, besidePx } = usePageMeasure()
   const [hand, setHand] = useState(1)
   const { tokens } = judged
   const signature = judged.signature ?? 0
@@ -97,19 +98,17 @@ export function CantusStaff({
 
   return (
     <div onKeyDown={onKeyDown} style={{ minWidth: 0 }}>
-      <View onLayout={(event) => setWidthPx(event.nativeEvent.layout.width)} style={{ minHeight: 150 }}>
-        {widthPx === null ? null : (
-          <PlayingScore
-            input={input}
-            size="page"
-            width={widthPx}
-            handBar={handBar}
-            onPressBar={setHand}
-            onPressStaff={write}
-            highlight={highlight}
-            accessibilityLabel={words.cantus.edit.staffLabel}
-          />
-        )}
+      <View style={{ minHeight: 120 }}>
+        <PlayingScore
+          input={input}
+          size="page"
+          width={contentPx - besidePx}
+          handBar={handBar}
+          onPressBar={setHand}
+          onPressStaff={write}
+          highlight={highlight}
+          accessibilityLabel={words.cantus.edit.staffLabel}
+        />
       </View>
     </div>
   )

@@ -5,8 +5,8 @@ import { RefusalNotice, useMutation } from '@/components/api'
 import { PlayingScore } from '@/components/lesson/playing-score'
 import type { Highlight } from '@/components/score'
 import { Frame } from '@/components/session'
-import { space, useTheme, useWidth } from '@/components/theme'
-import { Button, Dialog, Heading, LinkButton, Name, Txt } from '@/components/ui'
+import { space } from '@/components/theme'
+import { Beside, Button, Dialog, Heading, LinkButton, Name, Txt, usePageMeasure } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
 import type { Cantus } from '@/shared/api/cantus'
@@ -23,11 +23,9 @@ export function CantusView({ me, cantus }: Readonly<{ me: Me; cantus: Cantus }>)
   const words = useWords()
   const say = words.cantus
   const router = useRouter()
-  const { isWide } = useWidth()
-  const { colors } = useTheme()
   const [presetId, setPresetId] = useState('open-undergrad')
   const [highlight, setHighlight] = useState<Highlight | null>(null)
-  const [widthPx, setWidthPx] = useState<number | null>(null)
+  const { contentPx, besidePx } = usePageMeasure()
   const [isRemoving, setRemoving] = useState(false)
   const remove = useMutation(api.cantus.remove)
   const judged = useMemo(() => judgeDraft({ ...draftOf(cantus), presetId }), [cantus, presetId])
@@ -83,13 +81,19 @@ export function CantusView({ me, cantus }: Readonly<{ me: Me; cantus: Cantus }>)
         </>
       }
     >
-      <View style={{ flexDirection: isWide ? 'row' : 'column', columnGap: space.triple, rowGap: space.wide }}>
-        <View style={{ flex: isWide ? 1 : undefined, minWidth: 0, gap: space.wide }}>
-          <View style={{ minHeight: 180 }} onLayout={(event) => setWidthPx(event.nativeEvent.layout.width)}>
-            {widthPx === null ? null : (
-              <PlayingScore input={input} size="page" width={widthPx} highlight={highlight} />
-            )}
-          </View>
+      <Beside
+        margin={
+          <MelodyFindings
+            findings={judged.findings}
+            presetId={presetId}
+            onPreset={setPresetId}
+            isWaiting={false}
+            onPoint={setHighlight}
+          />
+        }
+      >
+        <View style={{ gap: space.wide }}>
+          <PlayingScore input={input} size="page" width={contentPx - besidePx} highlight={highlight} />
           <HearButton notes={cantus.notes} />
           {judged.analysis ? (
             <View style={{ gap: space.small, maxWidth: 620 }}>
@@ -98,22 +102,7 @@ export function CantusView({ me, cantus }: Readonly<{ me: Me; cantus: Cantus }>)
             </View>
           ) : null}
         </View>
-        <View
-          style={
-            isWide
-              ? { width: 380, borderLeftWidth: 1, borderColor: colors.hairline, paddingLeft: space.wide }
-              : null
-          }
-        >
-          <MelodyFindings
-            findings={judged.findings}
-            presetId={presetId}
-            onPreset={setPresetId}
-            isWaiting={false}
-            onPoint={setHighlight}
-          />
-        </View>
-      </View>
+      </Beside>
       <Dialog
         title={say.view.removeTitle}
         isOpen={isRemoving}

@@ -26,16 +26,16 @@ export function CourseFrame({
 }>) {
   const words = useWords()
   const { colors } = useTheme()
-  const name = course?.name ?? words.common.loading
+  const name = course?.name ?? words.courses.course.title
   return (
     <Frame
       me={me}
       title={here === 'members' && course ? `${words.courses.members.title}, ${name}` : name}
-      heading={course ? <Name>{course.name}</Name> : ' '}
+      heading={course ? <Name>{course.name}</Name> : words.courses.course.title}
       up={{ href: '/home', label: words.courses.course.up }}
       actions={actions}
     >
-      {course ? (
+      {course && canInCourse(course.myRole, 'see members') ? (
         <View
           style={{
             flexDirection: 'row',
@@ -44,27 +44,25 @@ export function CourseFrame({
             borderColor: colors.hairline,
           }}
         >
-          {PLACES.filter((place) => place === 'lessons' || canInCourse(course.myRole, 'see members')).map(
-            (place) => (
-              <View
-                key={place}
-                style={{
-                  marginBottom: -1,
-                  borderBottomWidth: 3,
-                  borderColor: place === here ? colors.azurite : 'transparent',
-                }}
-              >
-                <LinkText
-                  href={place === 'lessons' ? `/courses/${course.id}` : `/courses/${course.id}/members`}
-                  isCurrent={place === here}
-                  isStrong={place === here}
-                  tone={place === here ? 'lampblack' : 'lead'}
-                  label={words.courses.course[place]}
-                  style={{ textDecorationLine: 'none', paddingVertical: 10 }}
-                />
-              </View>
-            ),
-          )}
+          {PLACES.map((place) => (
+            <View
+              key={place}
+              style={{
+                marginBottom: -1,
+                borderBottomWidth: 3,
+                borderColor: place === here ? colors.azurite : 'transparent',
+              }}
+            >
+              <LinkText
+                href={place === 'lessons' ? `/courses/${course.id}` : `/courses/${course.id}/members`}
+                isCurrent={place === here}
+                isStrong={place === here}
+                tone={place === here ? 'lampblack' : 'lead'}
+                label={words.courses.course[place]}
+                style={{ textDecorationLine: 'none', paddingVertical: 10 }}
+              />
+            </View>
+          ))}
         </View>
       ) : null}
       {course ? <View style={{ gap: space.one, marginTop: -space.one }}>{children}</View> : children}

@@ -43,7 +43,12 @@ export function HomePage({ me }: Readonly<{ me: Me }>) {
             {courses.length === 0 ? (
               <Empty title={words.none}>{mayMake ? words.noneTeacher : words.noneStudent}</Empty>
             ) : (
-              <CourseRows label={words.title} courses={courses.filter((course) => !course.isArchived)} />
+              <View style={{ gap: space.small }}>
+                {courses.some(({ openLesson }) => openLesson) ? (
+                  <Heading level={2}>{words.all}</Heading>
+                ) : null}
+                <CourseRows label={words.title} courses={courses.filter((course) => !course.isArchived)} />
+              </View>
             )}
             <Archived courses={courses.filter((course) => course.isArchived)} />
           </>

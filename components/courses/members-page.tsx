@@ -77,21 +77,23 @@ export function MembersPage({ me, courseId }: Readonly<{ me: Me; courseId: strin
         ) : null
       }
     >
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.one, alignItems: 'flex-end' }}>
-        <View style={{ flexGrow: 1, flexBasis: 240, maxWidth: 420 }}>
-          <Field
-            kind="search"
-            label={words.courses.members.search}
-            value={search}
-            maxLength={100}
-            onChangeText={(text) => {
-              setSearch(text)
-              setOffset(0)
-            }}
-          />
+      {members.refusal?.code === 'forbidden' ? null : (
+        <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.one, alignItems: 'flex-end' }}>
+          <View style={{ flexGrow: 1, flexBasis: 240, maxWidth: 420 }}>
+            <Field
+              kind="search"
+              label={words.courses.members.search}
+              value={search}
+              maxLength={100}
+              onChangeText={(text) => {
+                setSearch(text)
+                setOffset(0)
+              }}
+            />
+          </View>
+          {isWide ? null : <SortSelect sort={sort} onSort={setSort} />}
         </View>
-        {isWide ? null : <SortSelect sort={sort} onSort={setSort} />}
-      </View>
+      )}
       <RefusalNotice refusal={updateMember.refusal} />
       <Asked query={members} lines={8}>
         {({ items, total }) => (

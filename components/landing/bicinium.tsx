@@ -1,8 +1,8 @@
-import { useMemo, useState } from 'react'
+import { useMemo } from 'react'
 import { View } from 'react-native'
 import { Score } from '@/components/score'
 import { space, useWidth } from '@/components/theme'
-import { Txt } from '@/components/ui'
+import { Txt, usePageMeasure } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { firstExercise } from './first-exercise'
 
@@ -10,19 +10,17 @@ import { firstExercise } from './first-exercise'
 export function Bicinium() {
   const words = useWords().entry.landing
   const { isWide } = useWidth()
-  const [widthPx, setWidthPx] = useState<number | null>(null)
+  const { contentPx } = usePageMeasure()
   const input = useMemo(() => firstExercise(words.gestures), [words])
   return (
-    <View style={{ gap: space.small }} onLayout={(event) => setWidthPx(event.nativeEvent.layout.width)}>
-      {widthPx === null ? null : (
-        <Score
-          input={input}
-          size="page"
-          width={widthPx}
-          maxHeight={420}
-          accessibilityLabel={words.pictureLabel}
-        />
-      )}
+    <View style={{ gap: space.small }}>
+      <Score
+        input={input}
+        size="page"
+        width={contentPx}
+        maxHeight={420}
+        accessibilityLabel={words.pictureLabel}
+      />
       <Txt kind={isWide ? 'note' : 'small'} tone="lead" face="italic">
         {words.pictureCaption}
       </Txt>

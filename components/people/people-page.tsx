@@ -75,18 +75,20 @@ export function PeoplePage({ me }: Readonly<{ me: Me }>) {
   ]
   return (
     <Frame me={me} title={words.title} lede={words.lede}>
-      <View style={{ maxWidth: 420 }}>
-        <Field
-          kind="search"
-          label={words.search}
-          value={search}
-          maxLength={100}
-          onChangeText={(text) => {
-            setSearch(text)
-            setOffset(0)
-          }}
-        />
-      </View>
+      {query.refusal?.code === 'forbidden' ? null : (
+        <View style={{ maxWidth: 420 }}>
+          <Field
+            kind="search"
+            label={words.search}
+            value={search}
+            maxLength={100}
+            onChangeText={(text) => {
+              setSearch(text)
+              setOffset(0)
+            }}
+          />
+        </View>
+      )}
       <RefusalNotice refusal={update.refusal} />
       <Asked query={query} lines={8}>
         {({ items, total }) => (

@@ -2,7 +2,7 @@ import { usePathname } from 'expo-router'
 import type { ReactNode } from 'react'
 import { View } from 'react-native'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { LinkText, Lozenge, Name, Page, Txt, type PageProps } from '@/components/ui'
+import { LinkText, Lozenge, Name, Page, Txt, type PageProps, usePageMeasure } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Me } from '@/shared/api/people'
 
@@ -18,9 +18,9 @@ export function Frame({ me, ...page }: PageProps & Readonly<{ me: Me | null }>) 
 
 export function SiteHeader({ me, side }: Readonly<{ me: Me | null; side?: ReactNode }>) {
   const { colors } = useTheme()
-  const { isWide, widthPx } = useWidth()
+  const { isWide } = useWidth()
+  const { marginPx } = usePageMeasure()
   const words = useWords().common
-  const marginPx = widthPx >= 1600 ? 56 : isWide ? space.double : widthPx < 360 ? space.half : space.one
   return (
     <View
       role="banner"

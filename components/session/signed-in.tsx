@@ -13,7 +13,7 @@ export function SignedIn({ children }: Readonly<{ children: (me: Me, isDemo: boo
   const words = useWords().common
   if (status === 'loading') {
     return (
-      <Page title={words.loading} heading=" ">
+      <Page title={words.product}>
         <Loading />
       </Page>
     )

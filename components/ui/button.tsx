@@ -40,8 +40,9 @@ export function Button({
   const styles = useButtonStyles()
   const target = useTarget()
   const isOff = isDisabled || isBusy
-  const ink =
-    kind === 'go' || isOn
+  const ink = isDisabled
+    ? styles.offInk
+    : kind === 'go' || isOn
       ? styles.onGround
       : kind === 'danger'
         ? styles.dangerInk
@@ -73,7 +74,7 @@ export function Button({
           isOn && styles.on,
           hovered && !isOff && (kind === 'go' || isOn ? styles.hoveredFill : styles.hovered),
           state.pressed && !isOff && styles.pressed,
-          isOff && styles.off,
+          isDisabled && styles.off,
           isWide && styles.wide,
         ]
       }}
@@ -106,7 +107,13 @@ const useButtonStyles = createStyles((colors) => ({
   hovered: { backgroundColor: colors.leaf, borderColor: colors.lampblack },
   hoveredFill: { opacity: 0.9 },
   pressed: { transform: [{ translateY: 1 }] },
-  off: { opacity: 0.55, cursor: 'auto' },
+  // Not by fading: its words must still be read.
+  off: {
+    backgroundColor: 'transparent',
+    borderColor: colors.hairline,
+    borderStyle: 'dashed',
+    cursor: 'auto',
+  },
   label: {
     fontFamily: fonts.AlegreyaSansMedium,
     textAlign: 'center',
@@ -114,6 +121,7 @@ const useButtonStyles = createStyles((colors) => ({
   },
   ink: { color: colors.lampblack },
   onGround: { color: colors.vellum },
+  offInk: { color: colors.lead },
   dangerInk: { color: colors.minium },
   quietInk: { color: colors.azurite },
   busy: {

@@ -4,6 +4,7 @@ import { MEASURE_PX, space, useWidth } from '@/components/theme'
 import { Heading } from './heading'
 import { LinkText } from './link-text'
 import { Txt } from './txt'
+import { usePageMeasure, WIDEST_PX } from './use-page-measure'
 import { useTitle } from './use-title'
 
 export type PageProps = Readonly<{
@@ -23,9 +24,6 @@ export type PageProps = Readonly<{
   children: ReactNode
 }>
 
-/** Beyond this a row of a table can no longer be followed across. */
-const WIDEST_PX = 2200
-
 /** The sheet that a page is written on: margins, heading, and the tab's name. */
 export function Page({
   title,
@@ -38,8 +36,8 @@ export function Page({
   children,
 }: PageProps) {
   useTitle(title)
-  const { isWide, widthPx } = useWidth()
-  const marginPx = widthPx >= 1600 ? 56 : isWide ? space.double : widthPx < 360 ? space.half : space.one
+  const { isWide } = useWidth()
+  const { marginPx } = usePageMeasure()
   return (
     <View
       role="main"

@@ -43,7 +43,7 @@ export function Row({ children, side }: Readonly<{ children: ReactNode; side?: R
         minHeight: 68,
       }}
     >
-      <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 240, minWidth: 0 }}>{children}</View>
+      <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 190, minWidth: 0 }}>{children}</View>
       {side ? <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small }}>{side}</View> : null}
     </View>
   )

@@ -13,6 +13,7 @@ export const courses = {
   home: {
     title: 'Your courses',
     openNow: 'Open now',
+    all: 'Courses',
     enter: 'Enter the lesson',
     inCourse: (course: string) => `in ${course}`,
     none: 'You are in no course yet',
@@ -29,6 +30,7 @@ export const courses = {
       `${members} ${members === 1 ? 'person' : 'people'}, ${lessons} ${lessons === 1 ? 'lesson' : 'lessons'}`,
   },
   course: {
+    title: 'Course',
     up: 'Your courses',
     lessons: 'Lessons',
     members: 'People',

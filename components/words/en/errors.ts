@@ -13,7 +13,10 @@ const byCode: Readonly<Record<ApiErrorCode | 'offline' | 'bad-reply', Refusal>> 
     title: 'Your address is not confirmed yet.',
     more: 'Open the link in the message we sent you, then try again.',
   },
-  forbidden: { title: 'This is not yours to open.', more: 'Ask the teacher of the course to let you in.' },
+  forbidden: {
+    title: 'This is not yours to open.',
+    more: 'Ask the teacher of the course, or the administrator of the school.',
+  },
   'not-found': {
     title: 'There is nothing here.',
     more: 'It was removed, or it belongs to a course you are not in.',
