@@ -112,11 +112,18 @@ function startRules(
     }))
 }
 
-const findingOf = (runner: Runner, breach: Breach): Finding => ({
-  ...breach,
-  ruleId: runner.ruleId,
-  level: breach.isRemark ? 'preference' : runner.level,
-  voice: runner.voice,
+const findingOf = (
+  { ruleId, level, voice }: Runner,
+  { code, bars, notes, args, isRemark }: Breach,
+): Finding => ({
+  ruleId,
+  level: isRemark ? 'preference' : level,
+  voice,
+  code,
+  bars,
+  notes,
+  args,
+  ...(isRemark && { isRemark }),
 })
 
 function runAll(runners: readonly Runner[], { pair, solo, isComplete }: Readings): readonly Finding[] {
@@ -249,4 +256,6 @@ function nameProposal(proposal: Proposal): string {
 
 /** By the last bar a finding points at; within a bar the order of the rule set stays. */
 const sortFindings = (findings: Finding[]): readonly Finding[] =>
-  findings.sort((a, b) => (a.bars.at(-1) ?? 0) - (b.bars.at(-1) ?? 0))
+  findings.length < 2 ? findings : findings.sort((a, b) => lastBarOf(a) - lastBarOf(b))
+
+const lastBarOf = ({ bars }: Finding): number => bars[bars.length - 1] ?? 0

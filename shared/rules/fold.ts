@@ -38,8 +38,25 @@ export function breachAt(
   moments: readonly Moment[],
   args: Breach['args'] = {},
 ): Breach {
-  const bars = [...new Set(moments.map(({ bar }) => bar))].sort((a, b) => a - b)
-  return { code, bars, notes: moments.map(({ bar, place }) => ({ voice, bar, place })), args }
+  return {
+    code,
+    bars: barsOf(moments),
+    notes: moments.map(({ bar, place }) => ({ voice, bar, place })),
+    args,
+  }
+}
+
+/** Bars of moments, each once, ascending; moments come in the order of the score as a rule, or nearly so. */
+function barsOf(moments: readonly Moment[]): readonly number[] {
+  const bars: number[] = []
+  let isAscending = true
+  for (const { bar } of moments) {
+    const last = bars[bars.length - 1]
+    if (last === bar) continue
+    if (last !== undefined && last > bar) isAscending = false
+    bars.push(bar)
+  }
+  return isAscending ? bars : [...new Set(bars)].sort((a, b) => a - b)
 }
 
 /** The same breach, said as a preference whatever the rule's level. */

@@ -1,7 +1,8 @@
 import type { Exercise, Moment, Sounding } from '@/shared/rules/rule'
 import { WHOLE_TICKS } from '@/shared/theory/duration'
+import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
 import type { BarNotes, Line } from '@/shared/theory/note'
-import { parsePitch, type Pitch, type PitchName } from '@/shared/theory/pitch'
+import { comparePitches, parsePitch, type Pitch, type PitchName } from '@/shared/theory/pitch'
 
 /** Bars that are not read, by 1-based number: what remains is the reduction. */
 export type SetAside = ReadonlySet<number>
@@ -87,12 +88,22 @@ function momentsOf(onsets: readonly Onset[], otherAt: (bar: number) => Pitch | n
     const { bar, place, note, ticks, isHeld } = onsets[index] as Onset
     const soundingTicks = ticks + heldTicks
     heldTicks = isHeld ? soundingTicks : 0
+    const other = otherAt(bar)
+    const isSonority = other !== null && note !== null && note !== 'rest'
+    const order = isSonority && comparePitches(note, other) < 0 ? -1 : 1
+    const steps = isSonority ? order * stepsFrom(other, note) : 0
+    const semitones = isSonority ? order * semitonesFrom(other, note) : 0
+    const octaves = Math.floor(steps / 7)
     moments[index] = {
       bar,
       index,
       place,
       note,
-      other: otherAt(bar),
+      other,
+      steps,
+      semitones,
+      simpleSteps: steps - 7 * octaves,
+      simpleSemitones: semitones - 12 * octaves,
       isStruck: !isHeld,
       ticks: soundingTicks,
       isFirst: index === 0,

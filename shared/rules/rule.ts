@@ -44,6 +44,14 @@ export type Moment = Readonly<{
   note: Sounding
   /** The cantus under or over it, in a reading of both voices. */
   other: Pitch | null
+  /**
+   * The interval between the voices, whichever is the higher, in letters and semitones, and again without its octaves.
+   * Worked out once, as most rules of two voices ask for it; 0 where they do not both sound.
+   */
+  steps: number
+  semitones: number
+  simpleSteps: number
+  simpleSemitones: number
   /** False when the note is held over from the moment before. */
   isStruck: boolean
   /** Sounding length from this onset, in ticks; 0 when unwritten. */

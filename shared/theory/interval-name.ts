@@ -58,6 +58,18 @@ export function intervalOf(text: string): Interval {
 
 /** An interval in words: `minor third`, `perfect twelfth`, and plain `unison` and `octave` where perfect. */
 export function nameInterval(interval: Interval): string {
+  const key = 256 * interval.steps + interval.semitones
+  const known = knownNames.get(key)
+  if (known !== undefined) return known
+  const name = buildName(interval)
+  knownNames.set(key, name)
+  return name
+}
+
+/** Names by steps and semitones: a few hundred at most, asked for again and again. */
+const knownNames = new Map<number, string>()
+
+function buildName(interval: Interval): string {
   const quality = qualityOf(interval)
   const size = nameSize(interval.steps)
   if (quality === 'P' && (size === 'unison' || size === 'octave')) return size

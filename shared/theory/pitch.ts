@@ -34,17 +34,18 @@ const PITCH_GRAMMAR = /^([A-G])(##|#|bb|b|)([0-8])$/
 
 const PITCH_CLASS_GRAMMAR = /^([A-G])(##|#|bb|b|)$/
 
-const LETTER_INDEX: Readonly<Record<Letter, number>> = { C: 0, D: 1, E: 2, F: 3, G: 4, A: 5, B: 6 }
+/** Place of a letter above C: 0 for C to 6 for B. Worked out from the letter's code, as rules ask for it all the time. */
+export const letterIndex = (letter: Letter): number => (letter.charCodeAt(0) + 3) % 7
 
-/** Place of a letter above C: 0 for C to 6 for B. */
-export const letterIndex = (letter: Letter): number => LETTER_INDEX[letter]
+/** Semitones of a letter above C. */
+export const letterSemitones = (letter: Letter): number => LETTER_SEMITONES[letterIndex(letter)] as number
 
 /** Position on the ladder of letters, seven to the octave: C4 is 28, D4 29. A staff place, whatever the accidental. */
-export const diatonicNumber = (pitch: Pitch): number => 7 * pitch.octave + LETTER_INDEX[pitch.letter]
+export const diatonicNumber = (pitch: Pitch): number => 7 * pitch.octave + letterIndex(pitch.letter)
 
 /** Position in semitones, twelve to the octave: C4 is 48. MIDI's number is this plus 12. */
 export const chromaticNumber = (pitch: Pitch): number =>
-  12 * pitch.octave + (LETTER_SEMITONES[LETTER_INDEX[pitch.letter]] as number) + pitch.alteration
+  12 * pitch.octave + letterSemitones(pitch.letter) + pitch.alteration
 
 /** Reads `C#4`. Anything else is refused with the text that was given. */
 export function parsePitch(text: string): Result<Pitch, 'not-a-pitch'> {
@@ -90,6 +91,6 @@ export const formatPitch = (pitch: Pitch): PitchName => formatPitchClass(pitch) 
 
 /** Orders pitches by staff place, then by accidental: negative when `a` is below `b`, 0 only for the same spelling. */
 export const comparePitches = (a: Pitch, b: Pitch): number =>
-  diatonicNumber(a) - diatonicNumber(b) || chromaticNumber(a) - chromaticNumber(b)
+  diatonicNumber(a) - diatonicNumber(b) || a.alteration - b.alteration
 
 export const isSamePitch = (a: Pitch, b: Pitch): boolean => comparePitches(a, b) === 0

@@ -1,10 +1,10 @@
 import { fail, ok, type Result } from '@/shared/result'
 import type { Mode } from '@/shared/theory/mode'
 import {
-  chromaticNumber,
   diatonicNumber,
   LETTERS,
   letterIndex,
+  letterSemitones,
   type Alteration,
   type Letter,
   type Pitch,
@@ -43,11 +43,7 @@ export const degreeOf = (pitch: PitchClass, final: PitchClass): Degree =>
 /** Semitones by which a pitch stands above (or below) the mode's own note on its letter; 0 when it belongs to the mode. */
 export function alterationInMode(pitch: PitchClass, mode: Mode, final: PitchClass): number {
   const degree = degreeOf(pitch, final)
-  const above =
-    chromaticNumber({ ...pitch, octave: 4 }) -
-    chromaticNumber({ ...final, octave: 4 }) +
-    octaveUp(pitch, final)
-  return above - (SCALE_SEMITONES[mode][degree - 1] as number)
+  return semitonesAbove(pitch, final) - (SCALE_SEMITONES[mode][degree - 1] as number)
 }
 
 /** True when a pitch is one of the mode's own notes, exactly spelled. */
@@ -71,12 +67,7 @@ export function scaleOf(mode: Mode, final: PitchClass): Result<readonly PitchCla
   const notes: PitchClass[] = []
   for (const [index, semitones] of SCALE_SEMITONES[mode].entries()) {
     const letter = LETTERS[(letterIndex(final.letter) + index) % 7] as Letter
-    const natural: PitchClass = { letter, alteration: 0 }
-    const alteration =
-      semitones -
-      (chromaticNumber({ ...natural, octave: 4 }) -
-        chromaticNumber({ ...final, octave: 4 }) +
-        octaveUp(natural, final))
+    const alteration = semitones - semitonesAbove({ letter, alteration: 0 }, final)
     if (Math.abs(alteration) > 2) return fail('no-spelling')
     notes.push({ letter, alteration: alteration as Alteration })
   }
@@ -105,6 +96,9 @@ export function scaleBetween(mode: Mode, final: PitchClass, low: Pitch, high: Pi
   return pitches
 }
 
-/** Twelve when a letter comes before the final's in the octave from C, so that distances count upward from the final. */
-const octaveUp = (pitch: PitchClass, final: PitchClass): number =>
-  letterIndex(pitch.letter) < letterIndex(final.letter) ? 12 : 0
+/** Semitones from the final up to the next pitch of a class, counted by letters: from D up to C♯ eleven, to C♭ nine. */
+function semitonesAbove(pitch: PitchClass, final: PitchClass): number {
+  const octaveUp = letterIndex(pitch.letter) < letterIndex(final.letter) ? 12 : 0
+  const letters = letterSemitones(pitch.letter) - letterSemitones(final.letter)
+  return letters + octaveUp + pitch.alteration - final.alteration
+}
