@@ -28,8 +28,9 @@ export function SessionList({ list, currentId, refusal, reload }: Sessions) {
     const result = await leave.run(isEverywhere)
     if (!result.ok) return
     setAsking(false)
-    await loadSession()
+    // First away from the page that asks for a person, or it would send one to sign in.
     router.replace('/')
+    await loadSession()
   }
 
   return (
