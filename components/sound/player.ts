@@ -19,6 +19,7 @@ export type PlayRequest = PlaybackRequest &
   }>
 
 export type PlayerState = Readonly<{
+  /** A single note that is struck leaves it idle: there is nothing to stop. */
   status: 'idle' | 'loading' | 'playing'
   /** The `id` of what is loading or playing. */
   id: string | null
@@ -85,14 +86,14 @@ export function createPlayer(parts: PlayerParts): Player {
     if (state.status !== 'idle' || state.problem !== problem) setState({ ...IDLE, problem })
   }
 
-  async function perform(timeline: Timeline, id: string | null): Promise<void> {
+  async function perform(timeline: Timeline, id: string | null, isHearing: boolean): Promise<void> {
     finish(null)
     if (timeline.events.length === 0) return finish('nothing')
     const audio = parts.openAudio()
     if (!audio) return finish('no-audio')
     let isCurrent = true
     end = () => (isCurrent = false)
-    setState({ status: 'loading', id, bar: null, problem: null })
+    if (isHearing) setState({ status: 'loading', id, bar: null, problem: null })
 
     const loading = audio.piano.prepare(timeline.events.map(({ midi }) => midi)).catch(() => null)
     const isAwake = await parts.wake(audio.context)
@@ -111,7 +112,7 @@ export function createPlayer(parts: PlayerParts): Player {
       unfollow()
       hearing.stop()
     }
-    setState({ status: 'playing', id, bar: null, problem: null })
+    if (isHearing) setState({ status: 'playing', id, bar: null, problem: null })
   }
 
   /** Moves the playhead with the audio clock, and watches that the clock moves and stays awake. */
@@ -141,8 +142,8 @@ export function createPlayer(parts: PlayerParts): Player {
   }
 
   return {
-    play: ({ score, id, ...request }) => void perform(createTimeline(score, request), id ?? null),
-    strike: (pitch) => void perform(oneNote(pitch), null),
+    play: ({ score, id, ...request }) => void perform(createTimeline(score, request), id ?? null, true),
+    strike: (pitch) => void perform(oneNote(pitch), null, false),
     stop: () => finish(null),
     getState: () => state,
     subscribe: (listener) => {

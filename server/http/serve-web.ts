@@ -5,6 +5,10 @@ import { Refused } from '@/server/errors/refused'
 
 /** Files whose name holds a hash of their contents never change. */
 const HASHED = /[.-][0-9a-f]{8,}\.[a-z0-9]+(\.(br|gz))?$/i
+/** How the name of a file ends. A wall link holds a dot too, with a long signature after it. */
+const FILE_ENDING = /\.[a-z0-9]{1,8}$/i
+/** The ending of a file's name. A token in an address may hold a full stop too, with more behind it. */
+const FILE_ENDING = /\.[a-z0-9]{1,6}$/i
 const YEAR_SECONDS = 365 * 24 * 60 * 60
 const ENCODINGS = [
   { token: 'br', ending: '.br' },
@@ -55,7 +59,7 @@ export function serveWeb(directory: string): Router {
   )
   router.get('/{*screen}', (request, response, next) => {
     // What looks like a file and is none must not be answered with a page.
-    if (path.extname(request.path) || !existsSync(page)) return next(new Refused('not-found'))
+    if (FILE_ENDING.test(request.path) || !existsSync(page)) return next(new Refused('not-found'))
     request.url = '/index.html'
     return serveCompressed(directory)(request, response, () => {
       setFreshness(response, page)

@@ -106,16 +106,16 @@ test('three phones come in: by tapped syllables, by typing them, and by the squa
   const second = await newPage(typing, 'guest who types')
   await second.goto('/join')
   await second.getByRole('button', { name: joinWords.typeInstead }).click()
-  await second.getByLabel(joinWords.typedLabel).fill(code.toUpperCase())
+  await second.getByRole('textbox', { name: joinWords.typedLabel }).fill(code.toUpperCase())
   await second.getByRole('button', { name: joinWords.typedGo }).click()
-  await second.getByLabel(joinWords.nameLabel).fill('Zoë Ångström')
+  await second.getByRole('textbox', { name: joinWords.nameLabel, exact: true }).fill('Zoë Ångström')
   await second.getByRole('button', { name: joinWords.nameGo }).click()
   await second.getByRole('heading', { level: 1, name: deskWords.titleNone }).waitFor()
 
   const third = await newPage(scanning, 'guest who scans')
   await third.goto(`/join/${code.replaceAll(' ', '-')}`)
-  await third.getByLabel(joinWords.nameLabel).fill('Ifeoma')
-  await third.getByLabel(joinWords.nameLabel).press('Enter')
+  await third.getByRole('textbox', { name: joinWords.nameLabel, exact: true }).fill('Ifeoma')
+  await third.getByRole('textbox', { name: joinWords.nameLabel, exact: true }).press('Enter')
   await third.getByRole('heading', { level: 1, name: deskWords.titleNone }).waitFor()
 
   phones = [deskFace(first), deskFace(second), deskFace(third)]

@@ -8,17 +8,20 @@ export const SIZES = {
 } as const
 export type Size = keyof typeof SIZES
 
+/** Longer than any screen takes on a busy machine, shorter than anybody waits for a failing test. */
+const PATIENCE_MS = 12_000
+
 export const GROUNDS = ['light', 'dark'] as const
 export type ScreenGround = (typeof GROUNDS)[number]
 
 /** A device of its own: cookies, storage and network apart from the others'. Motion is reduced, so that nothing moves under a test. */
-export function openDevice(
+export async function openDevice(
   browser: Browser,
   origin: string,
   size: Size,
   more: BrowserContextOptions = {},
 ): Promise<BrowserContext> {
-  return browser.newContext({
+  const context = await browser.newContext({
     baseURL: origin,
     viewport: SIZES[size],
     hasTouch: size === 'phone',
@@ -30,4 +33,6 @@ export function openDevice(
     timezoneId: 'Europe/Berlin',
     ...more,
   })
+  context.setDefaultTimeout(PATIENCE_MS)
+  return context
 }

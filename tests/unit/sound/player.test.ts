@@ -178,7 +178,7 @@ describe('what goes wrong is said, and the next request starts afresh', () => {
   })
 })
 
-test('a single note is struck without a playhead', async () => {
+test('a single note is struck without a playhead, and nothing says that it plays', async () => {
   const stage = createStage()
   stage.player.strike('C#5')
   await settle()
@@ -188,4 +188,7 @@ test('a single note is struck without a playhead', async () => {
   expect(stage.loads[0]?.midis).toEqual([73])
   expect(stage.scheduled).toHaveLength(1)
   expect(stage.player.getPlayhead()).toBeNull()
+  expect(stage.player.getState().status).toBe('idle')
+  stage.player.play(request)
+  expect(stage.scheduled[0]?.stopSeconds).toBeLessThan(0.6)
 })
