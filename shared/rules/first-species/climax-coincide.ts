@@ -11,6 +11,7 @@ type State = Readonly<{
   cantusTop: Pitch | null
   shared: readonly Sonority[]
 }>
+const NONE: readonly Sonority[] = []
 
 const isHigher = (pitch: Pitch, top: Pitch | null): boolean => top === null || comparePitches(pitch, top) > 0
 const isEqual = (pitch: Pitch, top: Pitch | null): boolean => top !== null && comparePitches(pitch, top) === 0
@@ -21,7 +22,7 @@ export const climaxCoincide: Rule<State, NoParams> = {
   scope: 'pair',
   species: FIRST_SPECIES,
   params: NO_PARAMS,
-  start: () => ({ lineTop: null, cantusTop: null, shared: [] }),
+  start: () => ({ lineTop: null, cantusTop: null, shared: NONE }),
   // The cantus is read on where the line is not written, so that its top is known from the place in the reading.
   step: (state, moment) => {
     const now = sonorityOf(moment)
@@ -29,7 +30,7 @@ export const climaxCoincide: Rule<State, NoParams> = {
     const lineTop = now !== null && isHigher(now.note, state.lineTop) ? now.note : state.lineTop
     const cantusTop = other !== null && isHigher(other, state.cantusTop) ? other : state.cantusTop
     const isNewTop = lineTop !== state.lineTop || cantusTop !== state.cantusTop
-    const kept = isNewTop ? [] : state.shared
+    const kept = isNewTop ? NONE : state.shared
     const isBoth = now !== null && isEqual(now.note, lineTop) && isEqual(now.other, cantusTop)
     return goOn({ lineTop, cantusTop, shared: isBoth ? [...kept, now] : kept })
   },

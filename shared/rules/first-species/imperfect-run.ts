@@ -23,6 +23,7 @@ type Params = z.infer<typeof PARAMS>
 
 /** The thirds, or the sixths, that have just followed each other; one more than the limit is kept at most. */
 type State = Readonly<{ run: readonly Sonority[]; isPlaceNeeded: boolean }>
+const NONE: readonly Sonority[] = []
 
 export const imperfectRun: Rule<State, Params> = {
   id: 'imperfect-run',
@@ -30,10 +31,10 @@ export const imperfectRun: Rule<State, Params> = {
   scope: 'pair',
   species: FIRST_SPECIES,
   params: PARAMS,
-  start: (_exercise, { counting }) => ({ run: [], isPlaceNeeded: counting === 'parallel' }),
+  start: (_exercise, { counting }) => ({ run: NONE, isPlaceNeeded: counting === 'parallel' }),
   step: (state, moment, { max, counting }) => {
     const now = sonorityOf(moment)
-    if (now === null || !(isThird(now) || isSixth(now))) return goOn({ ...state, run: [] })
+    if (now === null || !(isThird(now) || isSixth(now))) return goOn({ ...state, run: NONE })
     const before = state.run.at(-1)
     const goesOn =
       before !== undefined &&

@@ -12,6 +12,7 @@ type Params = z.infer<typeof PARAMS>
 
 /** The sonorities that have just lain crossed; one more than the limit is kept at most. */
 type State = Readonly<{ exercise: Exercise; crossed: readonly Sonority[] }>
+const NONE: readonly Sonority[] = []
 
 export const voiceCross: Rule<State, Params> = {
   id: 'voice-cross',
@@ -19,12 +20,12 @@ export const voiceCross: Rule<State, Params> = {
   scope: 'pair',
   species: ALL_SPECIES,
   params: PARAMS,
-  start: (exercise) => ({ exercise, crossed: [] }),
+  start: (exercise) => ({ exercise, crossed: NONE }),
   step: ({ exercise, crossed }, moment, { brief }) => {
     const now = sonorityOf(moment)
     const isCrossed =
       now !== null && comparePitches(upperOf(now, exercise.position), lowerOf(now, exercise.position)) < 0
-    if (!isCrossed) return goOn({ exercise, crossed: [] })
+    if (!isCrossed) return goOn({ exercise, crossed: NONE })
     const run = brief === 0 ? [now] : [...crossed.slice(-brief), now]
     const code = exercise.position === 'above' ? 'under' : 'over'
     return {
