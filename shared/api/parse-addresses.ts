@@ -32,10 +32,15 @@ function entriesOf(line: string): readonly (readonly string[])[] {
   return entries.filter((entry) => entry.length > 0)
 }
 
-/** Whether an entry without an address is a name: the line has one address, or a bracketed one follows (`Last, First <…>`). */
-function isName(entries: readonly (readonly string[])[], index: number): boolean {
-  if (entries.flat().filter(isCandidate).length === 1) return true
-  return entries[index + 1]?.some((piece) => piece.startsWith('<') && isCandidate(piece)) ?? false
+/**
+ * Whether an entry without an address is a name: a bracketed address follows (`Last, First <…>`), or it stands before the
+ * only address of its line, or anywhere beside it in a spreadsheet's columns.
+ */
+function isName(line: string, entries: readonly (readonly string[])[], index: number): boolean {
+  if (entries[index + 1]?.some((piece) => piece.startsWith('<') && isCandidate(piece))) return true
+  const withAddress = entries.flatMap((entry, place) => (entry.some(isCandidate) ? [place] : []))
+  const [only] = withAddress
+  return withAddress.length === 1 && only !== undefined && (index < only || line.includes('\t'))
 }
 
 /**
@@ -50,7 +55,7 @@ export function parseAddresses(pasted: string): ParsedAddresses {
     const entries = entriesOf(line)
     entries.forEach((entry, index) => {
       const candidates = entry.filter(isCandidate)
-      if (candidates.length === 0 && !isName(entries, index)) refuse(entry.join(' '))
+      if (candidates.length === 0 && !isName(line, entries, index)) refuse(entry.join(' '))
       for (const candidate of candidates) {
         const parsed = emailSchema.safeParse(cleaned(candidate))
         if (parsed.success) addresses.add(parsed.data)

@@ -5,13 +5,11 @@
 import { createId } from '@/db/create-id'
 import { insertCantus } from '@/db/queries/cantus'
 import { insertLinkInvitation } from '@/db/queries/invitations'
-import { insertLesson } from '@/db/queries/lessons'
-import { createBoardDocument } from '@/realtime/journal/create-board-document'
 import { createToken, hashToken } from '@/server/auth/token'
-import { openWithFreshCode } from '@/server/lessons/open-lesson'
 import { api } from '@/shared/api'
 import type { TestBrowser } from '@/tests/support/test-browser'
 import { testExercise, testStage } from '@/tests/support/test-exercise'
+import { insertOpenLesson, insertPreparedLesson } from '@/tests/support/test-lessons'
 import { insertCourseWith, insertPerson, signedIn, type TestPerson } from '@/tests/support/test-people'
 import { startTestServer, type TestServer } from '@/tests/support/test-server'
 
@@ -45,24 +43,6 @@ const peopleOf = {} as Record<'administrator' | 'teacher' | 'assistant' | 'stude
 
 const db = () => server.database.db
 
-async function insertPreparedLesson(course: string, author: string): Promise<string> {
-  const id = createId()
-  await db()
-    .transaction()
-    .execute(async (trx) => {
-      await insertLesson(trx, { id, courseId: course, title: 'A lesson', createdBy: author })
-      await createBoardDocument(trx, id, testExercise(), testStage())
-    })
-  return id
-}
-
-async function insertOpenLesson(course: string, author: string): Promise<{ id: string; code: string }> {
-  const id = await insertPreparedLesson(course, author)
-  await openWithFreshCode(db(), id)
-  const row = await db().selectFrom('lesson').select('code').where('id', '=', id).executeTakeFirstOrThrow()
-  return { id, code: row.code ?? '' }
-}
-
 async function openWall(leader: TestBrowser, lesson: string): Promise<TestBrowser> {
   const { url } = await leader.get(api.lessons.createWallLink, { params: { lessonId: lesson } })
   const screen = server.browser()
@@ -83,8 +63,8 @@ beforeAll(async () => {
     [peopleOf.student.id]: 'student',
   })
   const otherCourse = await insertCourseWith(db(), 'Another', { [peopleOf.stranger.id]: 'teacher' })
-  ;({ id: lessonId, code } = await insertOpenLesson(courseId, peopleOf.teacher.id))
-  const other = await insertOpenLesson(otherCourse, peopleOf.stranger.id)
+  ;({ id: lessonId, code } = await insertOpenLesson(db(), courseId, peopleOf.teacher.id))
+  const other = await insertOpenLesson(db(), otherCourse, peopleOf.stranger.id)
   for (const who of ['administrator', 'teacher', 'assistant', 'student', 'stranger'] as const) {
     browsers[who] = await signedIn(server, peopleOf[who])
   }
@@ -150,10 +130,10 @@ const courseInvitation = async (): Promise<Input> => {
   return { params: { courseId, invitationId: id } }
 }
 const preparedLesson = async (): Promise<Input> => ({
-  params: { lessonId: await insertPreparedLesson(courseId, peopleOf.teacher.id) },
+  params: { lessonId: await insertPreparedLesson(db(), courseId, peopleOf.teacher.id) },
 })
 const openLesson = async (): Promise<Input> => ({
-  params: { lessonId: (await insertOpenLesson(courseId, peopleOf.teacher.id)).id },
+  params: { lessonId: (await insertOpenLesson(db(), courseId, peopleOf.teacher.id)).id },
 })
 
 const with_ = (input: () => Promise<Input>, body: unknown) => async () => ({ ...(await input()), body })
