@@ -46,7 +46,7 @@ export function cantusContent(bar: ScoreBar, signature: number, setting: StaffSe
 }
 
 /** Between two lozenges, and beside anything else, in staff spaces. */
-const NESTED_GAP = 0.08
+const NESTED_GAP = 0.05
 const BESIDE_GAP = 0.28
 
 /** What stands at one moment, with its number on its right, and on its left. */

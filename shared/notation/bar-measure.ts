@@ -1,4 +1,4 @@
-import { ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
+import { BRAVURA, ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
 import { cantusContent, EMPTY_CONTENT, lineContent, type StaffContent } from '@/shared/notation/bar-content'
 import { measureTextPx } from '@/shared/notation/measure-text'
 import type { ScoreBar, ScoreInput } from '@/shared/notation/score-input'
@@ -31,7 +31,10 @@ export type MeasuredBar = Readonly<{
   /** The least width in whole px, and the share of spare width it asks for. */
   leastPx: number
   weight: number
+  /** What hangs on the notes at their left, such as an accidental. */
+  hangingPx: number
   endPx: number
+  extraPx: number
 }>
 
 export function measureBars(
@@ -62,7 +65,9 @@ export function measureBars(
         rightPx: half,
         leastPx,
         weight: 0,
+        hangingPx: 0,
         endPx: 0,
+        extraPx: 0,
       }
     }
     const content = {
@@ -77,6 +82,13 @@ export function measureBars(
     const railLeft = hasRail ? figureHalf + (isMotionInside ? 2 : 1) * motionPx : 0
     const railRight = hasRail ? figureHalf + motionPx : 0
     const boxes = [content.cantus.box, content.line.box].filter((box) => box !== null)
+    const half = (BRAVURA.noteheadWhole.right / 2) * spacePx
+    const accidentals = [content.cantus, content.line].flatMap(({ marks }) =>
+      marks.filter(({ role }) => role === 'accidental'),
+    )
+    // Proposals are centred as a bunch, with what hangs on them.
+    const hangingPx =
+      bar.proposals.length > 0 ? 0 : Math.max(0, ...accidentals.map(({ box }) => -box.left - half))
     const endPx = i === bars.length - 1 && !isMini ? CLOSING_WIDTH_STAFF_SPACES * spacePx : 0
     const leftPx = Math.max(railLeft, ...boxes.map((box) => paddingPx - box.left))
     const rightPx = Math.max(railRight, ...boxes.map((box) => paddingPx + box.right)) + endPx
@@ -98,7 +110,9 @@ export function measureBars(
         Math.max(leftPx + rightPx, isMini ? 0 : numberPx + 1.2 * spacePx, labelPx + 0.8 * spacePx + endPx),
       ),
       weight: weights[bar.state] * (options.size === 'strip' && bar.number === options.handBar ? 1.15 : 1),
+      hangingPx,
       endPx,
+      extraPx: hangingPx + endPx,
     }
   })
 }

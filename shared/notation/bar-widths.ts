@@ -1,22 +1,32 @@
-/** A bar as the spacing sees it: the width it cannot do without, and its share of what is left. */
-export type ElasticBar = Readonly<{ leastPx: number; weight: number }>
+/**
+ * A bar as the spacing sees it: the width it cannot do without, what accidentals and the closing line add beside the
+ * notes, and its share of the rest. Notes then stand evenly, whatever hangs on them.
+ */
+export type ElasticBar = Readonly<{ leastPx: number; extraPx: number; weight: number }>
 
 /**
  * Widths that add up to `totalPx`, in proportion to the weights, none below its least. With too little room every bar
- * has its least and the sum is larger than asked.
+ * has its least and the sum is larger than asked. A bar without weight is never stretched.
  */
 export function stretchBars(bars: readonly ElasticBar[], totalPx: number): readonly number[] {
   const isFixed = bars.map((bar) => bar.weight === 0)
   for (;;) {
-    const fixedPx = bars.reduce((sum, bar, i) => sum + (isFixed[i] ? bar.leastPx : 0), 0)
-    const weight = bars.reduce((sum, bar, i) => sum + (isFixed[i] ? 0 : bar.weight), 0)
-    const unitPx = weight > 0 ? (totalPx - fixedPx) / weight : 0
-    const short = bars.findIndex((bar, i) => !isFixed[i] && bar.weight * unitPx < bar.leastPx)
-    if (short === -1) return bars.map((bar, i) => (isFixed[i] ? bar.leastPx : bar.weight * unitPx))
-    // Every bar that falls short keeps its least, and the rest share what remains.
+    let takenPx = 0
+    let weight = 0
     bars.forEach((bar, i) => {
-      if (!isFixed[i] && bar.weight * unitPx < bar.leastPx) isFixed[i] = true
+      takenPx += isFixed[i] ? bar.leastPx : bar.extraPx
+      weight += isFixed[i] ? 0 : bar.weight
     })
+    const unitPx = weight > 0 ? (totalPx - takenPx) / weight : 0
+    const widths = bars.map((bar, i) => (isFixed[i] ? bar.leastPx : bar.extraPx + bar.weight * unitPx))
+    // Every bar that falls short keeps its least, and the rest share what remains.
+    let isShort = false
+    bars.forEach((bar, i) => {
+      if ((widths[i] as number) >= bar.leastPx) return
+      isFixed[i] = true
+      isShort = true
+    })
+    if (!isShort) return widths
   }
 }
 

@@ -56,7 +56,8 @@ function settingAt(input: ScoreInput, options: ScoreLayoutOptions, spacePx: numb
   return { input, options, spacePx, staves, prefixPx, measured: measureBars(input, options, spacePx) }
 }
 
-const naturalPx = (bar: MeasuredBar, spacePx: number): number => Math.max(bar.leastPx, bar.weight * spacePx)
+const naturalPx = (bar: MeasuredBar, spacePx: number): number =>
+  Math.max(bar.leastPx, bar.extraPx + bar.weight * spacePx)
 
 /** Index of each system's first bar. A strip and a mini never break. */
 function systemStarts({ options, measured, prefixPx, spacePx }: Setting): readonly number[] {
@@ -75,14 +76,14 @@ function barWidths(setting: Setting, bars: readonly MeasuredBar[], isOnly: boole
   const most = maxStretch === null || !isOnly ? Infinity : natural * maxStretch
   const wanted = options.size === 'strip' ? Math.max(availablePx, natural) : availablePx
   const elastic = bars.map((bar) =>
-    options.size === 'strip' ? { ...bar, leastPx: Math.max(bar.leastPx, bar.weight * spacePx) } : bar,
+    options.size === 'strip' ? { ...bar, leastPx: naturalPx(bar, spacePx) } : bar,
   )
   return stretchBars(elastic, Math.min(most, wanted))
 }
 
-/** The axis stands in the middle of the bar, or as near to it as the notes on either side let it. */
-const axisIn = ({ leftPx, rightPx, endPx }: MeasuredBar, widthPx: number): number =>
-  Math.min(Math.max((widthPx - endPx) / 2, leftPx), widthPx - rightPx)
+/** The axis stands in the middle of what a bar has for its notes, or as near to it as those on either side let it. */
+const axisIn = ({ leftPx, rightPx, hangingPx, endPx }: MeasuredBar, widthPx: number): number =>
+  Math.min(Math.max((widthPx + hangingPx - endPx) / 2, leftPx), widthPx - rightPx)
 
 const unite = (boxes: readonly (Box | null)[]): Box | null => {
   const present = boxes.filter((box) => box !== null)

@@ -129,6 +129,18 @@ describe('bars', () => {
     expect(folded).toBeLessThan(0.6 * (frozen ?? 0))
   })
 
+  test('give an accidental room of its own, so that notes keep their distance', () => {
+    const bars = ['D5', 'C#5', 'D5', 'E5'].map((pitch, i) => barOf(i + 1, { line: whole(pitch) }))
+    const layout = layoutScore(withBars([...bars, barOf(5), barOf(6), barOf(7), barOf(8)]), WALL)
+    const [plain, sharp, next, last] = [1, 2, 3, 8].map((number) => barLayout(layout, number))
+    expect((sharp?.widthPx ?? 0) - (plain?.widthPx ?? 0)).toBeGreaterThan(layout.spacePx)
+    expect(Math.abs((next?.widthPx ?? 0) - (plain?.widthPx ?? 0))).toBeLessThanOrEqual(1)
+    // After its note a bar has as much room as any other, up to the closing line.
+    const after = (bar: BarLayout | undefined): number => (bar?.widthPx ?? 0) - (bar?.axisPx ?? 0)
+    expect(Math.abs(after(sharp) - after(plain))).toBeLessThanOrEqual(1)
+    expect(after(last) - after(plain)).toBeCloseTo(1.06 * layout.spacePx, -1)
+  })
+
   test('join under one bracket while released, and have two lines each when frozen', () => {
     const layout = layoutScore(LESSON_SCORE, WALL)
     const heads = (number: number) => marksOf(layout, number, 'head-line').length
