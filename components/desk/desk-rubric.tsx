@@ -84,9 +84,11 @@ export function DeskRubric({
         ) : (
           <>
             {task}
-            <Txt kind={task ? 'note' : 'text'} tone="lead">
-              {state}
-            </Txt>
+            {task && released.length === 0 ? null : (
+              <Txt kind={task ? 'note' : 'text'} tone="lead">
+                {state}
+              </Txt>
+            )}
           </>
         )}
       </div>

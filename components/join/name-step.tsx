@@ -1,4 +1,6 @@
 import { useState } from 'react'
+import { View } from 'react-native'
+import { space } from '@/components/theme'
 import { Button, Field, Form, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 
@@ -33,7 +35,9 @@ export function NameStep({
         hasFocus
       />
       <Button label={words.nameGo} kind="go" isSubmit isWide isBusy={isBusy} />
-      <Button label={words.otherCode} kind="quiet" onPress={onBack} />
+      <View style={{ marginLeft: -space.small }}>
+        <Button label={words.otherCode} kind="quiet" onPress={onBack} />
+      </View>
       <Txt kind="note" tone="lead">
         {words.kept}
       </Txt>

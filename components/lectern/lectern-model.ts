@@ -38,11 +38,11 @@ export function readLectern(
   const whole = groups.filter(({ isComplete }) => isComplete)
   const sum = (some: readonly RoomGroup[]): number => some.reduce((total, { count }) => total + count, 0)
   return {
-    score: roomScoreOf(view, markRoom(room), judge.ofLine(), [
-      // Matters of taste would bury the score under arcs: they are in the rows and the margin.
-      ...countFindings(room).flatMap(({ findings }) => findings.filter(isLaw)),
-      ...judge.ofLine().filter(isLaw),
-    ]),
+    // Matters of taste would bury the score under arcs: they are in the rows and the margin.
+    score: roomScoreOf(view, markRoom(room), judge.ofLine(), {
+      ofRoom: countFindings(room).flatMap(({ findings }) => findings.filter(isLaw)),
+      ofLine: judge.ofLine().filter(isLaw),
+    }),
     bars,
     groups,
     finished: sum(whole),
@@ -60,6 +60,16 @@ export type BarActs = Readonly<{
   canTakeBack: boolean
   canClear: boolean
 }>
+
+/** A lesson that has ended is only looked at. */
+export const NO_ACTS: BarActs = {
+  canRelease: false,
+  canFreeze: false,
+  canSetAside: false,
+  canTakeUp: false,
+  canTakeBack: false,
+  canClear: false,
+}
 
 export function actsFor(view: LessonView, chorus: ChorusState, bars: readonly number[]): BarActs {
   const states = bars.flatMap((bar) => view.bars[bar] ?? [])

@@ -1,6 +1,6 @@
 import { Redirect, type Href } from 'expo-router'
 import Head from 'expo-router/head'
-import { useCallback, useMemo } from 'react'
+import { useCallback, useMemo, useState } from 'react'
 import { useQuery } from '@/components/api'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
 import { useEntry } from '@/components/lesson/use-entry'
@@ -17,8 +17,15 @@ import type { WallCue } from './use-hearing'
 const NOBODY: readonly PresentMember[] = []
 const IDLE: LecternPen = { act: () => {}, adopt: () => {}, undoAdopt: () => {}, stage: () => {} }
 
-/** The lectern of a lesson: enters, opens the room, and says in words why not. */
+/** The lectern of a lesson. A lesson that is opened again has a new room, which is entered anew. */
 export function LecternScreen({ lessonId }: Readonly<{ lessonId: string }>) {
+  const [turn, setTurn] = useState(0)
+  const onReopened = useCallback(() => setTurn((before) => before + 1), [])
+  return <LecternInLesson key={turn} lessonId={lessonId} onReopened={onReopened} />
+}
+
+/** Enters, opens the room, and says in words why not. */
+function LecternInLesson({ lessonId, onReopened }: Readonly<{ lessonId: string; onReopened: () => void }>) {
   const words = useWords()
   const { state, reload, setLesson } = useEntry(lessonId)
   const { room, view, entry } = useLessonRoom(lessonId, state, reload)
@@ -81,7 +88,9 @@ export function LecternScreen({ lessonId }: Readonly<{ lessonId: string }>) {
         isOffline={view.connection !== 'live' && lesson.status !== 'ended'}
         hindrance={view.hindrance}
         pen={pen}
-        onLesson={setLesson}
+        onLesson={(changed) =>
+          lesson.status === 'ended' && changed.status === 'open' ? onReopened() : setLesson(changed)
+        }
         onLower={lower}
         onRemove={remove}
         onCue={cue}

@@ -17,7 +17,7 @@ import type { PresentMember } from '@/shared/wire/rooms'
 import { BarActButtons, type BarAct } from './bar-acts'
 import { HearingDialog } from './hearing-dialog'
 import { LecternHeader } from './lectern-header'
-import { actsFor, readLectern, sortPeople } from './lectern-model'
+import { actsFor, NO_ACTS, readLectern, sortPeople } from './lectern-model'
 import { PeoplePanel } from './people-panel'
 import { RoomList } from './room-list'
 import { SelectableScore } from './selectable-score'
@@ -77,7 +77,11 @@ export function Lectern(props: LecternProps) {
     [selection, view.barCount],
   )
   const reading = useMemo(() => readLectern(view, chorus, judge, selected), [view, chorus, judge, selected])
-  const acts = useMemo(() => actsFor(view, chorus, selected), [view, chorus, selected])
+  const isReadOnly = lesson.status === 'ended'
+  const acts = useMemo(
+    () => (isReadOnly ? NO_ACTS : actsFor(view, chorus, selected)),
+    [isReadOnly, view, chorus, selected],
+  )
   const lineRubrics = useMemo(
     () => [...rubricsOf(judge.ofLine(), words), ...setAsideRubrics(view, words)],
     [judge, view, words],
@@ -129,7 +133,7 @@ export function Lectern(props: LecternProps) {
 
   const side = (
     <>
-      <TaskPanel stage={view.stage} suggestion={suggestion} onStage={pen.stage} />
+      {isReadOnly ? null : <TaskPanel stage={view.stage} suggestion={suggestion} onStage={pen.stage} />}
       <View ref={peopleAnchor}>
         <PeoplePanel people={people} onLower={props.onLower} onRemove={props.onRemove} />
       </View>
@@ -161,13 +165,15 @@ export function Lectern(props: LecternProps) {
                   : words.lectern.nothingSelected}
             </Txt>
             {adopted ? (
-              <Button
-                label={words.lectern.undo}
-                onPress={() => {
-                  pen.undoAdopt(adopted.notes, adopted.before)
-                  setAdopted(null)
-                }}
-              />
+              <View>
+                <Button
+                  label={words.lectern.undo}
+                  onPress={() => {
+                    pen.undoAdopt(adopted.notes, adopted.before)
+                    setAdopted(null)
+                  }}
+                />
+              </View>
             ) : null}
           </View>
           <BarActButtons
@@ -212,7 +218,7 @@ export function Lectern(props: LecternProps) {
           isWide={isWide}
           heardKey={playingId}
           onHear={hearGroup}
-          onAdopt={adopt}
+          onAdopt={isReadOnly ? null : adopt}
         />
         <View role="region" aria-label={words.lectern.line.title} style={{ gap: space.small }}>
           <Heading level={2}>{words.lectern.line.title}</Heading>

@@ -28,7 +28,8 @@ export function RoomList({
   /** The proposal that sounds now. */
   heardKey: string | null
   onHear: (group: RoomGroup) => void
-  onAdopt: (group: RoomGroup) => void
+  /** Null when the lesson has ended. */
+  onAdopt: ((group: RoomGroup) => void) | null
 }>) {
   const words = useWords().lectern.room
   const { bars, groups, finished, unfinished, distinct } = reading

@@ -34,7 +34,8 @@ export const RoomRow = memo(function RoomRow({
   isHeard: boolean
   isSpan: boolean
   onHear: (group: RoomGroup) => void
-  onAdopt: (group: RoomGroup) => void
+  /** Null when the lesson has ended. */
+  onAdopt: ((group: RoomGroup) => void) | null
 }>) {
   const words = useWords()
   const { colors } = useTheme()
@@ -95,12 +96,14 @@ export const RoomRow = memo(function RoomRow({
           hint={words.lectern.room.hearSpoken(group.count)}
           onPress={() => onHear(group)}
         />
-        <Button
-          kind={rubrics.some(({ tone }) => tone === 'breach') ? 'plain' : 'go'}
-          label={words.lectern.room.adopt}
-          hint={words.lectern.room.adoptSpoken(group.count)}
-          onPress={() => onAdopt(group)}
-        />
+        {onAdopt ? (
+          <Button
+            kind={rubrics.some(({ tone }) => tone === 'breach') ? 'plain' : 'go'}
+            label={words.lectern.room.adopt}
+            hint={words.lectern.room.adoptSpoken(group.count)}
+            onPress={() => onAdopt(group)}
+          />
+        ) : null}
       </View>
     </View>
   )

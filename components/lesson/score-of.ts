@@ -18,7 +18,11 @@ const NO_MARKS: readonly ProposalMark[] = []
 
 const toneOf = (level: Finding['level']): 'breach' | 'remark' => (level === 'law' ? 'breach' : 'remark')
 
-/** Arcs over the score for findings of two bars or more, breaches first; at most one for each span. */
+/** Findings of two bars or more: on a proposal, a finding of its own bar is told by the lozenge itself. */
+const spanning = (findings: readonly Finding[]): readonly Finding[] =>
+  findings.filter(({ bars }) => bars.length > 1)
+
+/** Arcs over the score, breaches first; at most one for each span. */
 export function arcsOf(findings: readonly Finding[]): readonly ScoreArc[] {
   const arcs = new Map<string, ScoreArc>()
   for (const finding of findings) {
@@ -90,7 +94,7 @@ export function roomScoreOf(
   view: LessonView,
   marks: readonly RoomMark[],
   findings: readonly Finding[],
-  arcs: readonly Finding[],
+  arcs: Readonly<{ ofRoom: readonly Finding[]; ofLine: readonly Finding[] }>,
 ): ScoreInput {
   const byBar = new Map<number, ProposalMark[]>()
   for (const { bar, notes, count, tone } of marks) {
@@ -98,7 +102,12 @@ export function roomScoreOf(
     inBar.push({ notes, count, tone })
     byBar.set(bar, inBar)
   }
-  return compose(view, { read: view.line, proposalsOf: (bar) => byBar.get(bar) ?? NO_MARKS, findings, arcs })
+  return compose(view, {
+    read: view.line,
+    proposalsOf: (bar) => byBar.get(bar) ?? NO_MARKS,
+    findings,
+    arcs: [...spanning(arcs.ofRoom), ...arcs.ofLine],
+  })
 }
 
 /** The score for a desk: the agreed line and the student's own lozenges, with the findings on them when they are shown. */
@@ -113,7 +122,7 @@ export function deskScoreOf(view: LessonView, own: Line, findings: readonly Find
       return [{ notes, count: null, tone: tone === 'breach' || tone === 'remark' ? tone : 'line' }]
     },
     findings,
-    arcs: findings,
+    arcs: spanning(findings),
   })
 }
 

@@ -25,9 +25,13 @@ export function useEntry(lessonId: string): Readonly<{
         if (!isCurrent) return
         setState((before) => {
           if (result.ok) return { status: 'in', entry: result.value }
-          // A weak connection does not put anybody out of the room.
-          const isPassing = ['offline', 'unavailable', 'internal'].includes(result.reason.code)
-          return before.status === 'in' && isPassing ? before : { status: 'refused', refusal: result.reason }
+          if (before.status !== 'in') return { status: 'refused', refusal: result.reason }
+          // Who is in stays in: the room itself says when it closes, and why. A weak connection puts nobody out.
+          if (result.reason.code !== 'ended') return before
+          return {
+            status: 'in',
+            entry: { ...before.entry, lesson: { ...before.entry.lesson, status: 'ended' } },
+          }
         })
       },
       () => undefined,

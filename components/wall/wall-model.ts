@@ -27,20 +27,30 @@ const SHARE = 0.25
 const FEW = 2
 
 /** A rubric with the findings it speaks of, so that an arc is drawn for what is told and for nothing else. */
-type Telling = Readonly<{ rubric: Rubric; findings: readonly Finding[] }>
+type Telling = Readonly<{ rubric: Rubric; of: 'room' | 'line'; findings: readonly Finding[] }>
 
 const isLaw = ({ level }: Finding): boolean => level === 'law'
 
 function ofRoom(found: RoomFinding, words: Words): readonly Telling[] {
   const rubric = roomRubric(found, words)
   return rubric
-    ? [{ rubric: rubric.tone === 'breach' ? rubric : { ...rubric, mend: null }, findings: found.findings }]
+    ? [
+        {
+          rubric: rubric.tone === 'breach' ? rubric : { ...rubric, mend: null },
+          of: 'room' as const,
+          findings: found.findings,
+        },
+      ]
     : []
 }
 
 function ofLine(finding: Finding, words: Words): Telling {
   const rubric = rubricOf(finding, words)
-  return { rubric: rubric.tone === 'breach' ? rubric : { ...rubric, mend: null }, findings: [finding] }
+  return {
+    rubric: rubric.tone === 'breach' ? rubric : { ...rubric, mend: null },
+    of: 'line',
+    findings: [finding],
+  }
 }
 
 /** Lines a rubric takes: its heading, and its words broken at the margin's width. */
@@ -85,7 +95,7 @@ export function readWall(
       .filter(({ findings, count }) => !findings.some(isLaw) && count >= least)
       .flatMap((each) => ofRoom(each, words)),
     ...line.filter((finding) => !isLaw(finding)).map((finding) => ofLine(finding, words)),
-    ...setAsideRubrics(view, words).map((rubric) => ({ rubric, findings: [] })),
+    ...setAsideRubrics(view, words).map((rubric) => ({ rubric, of: 'line' as const, findings: [] })),
   ]
   const told = fitRubrics(tellings, room)
   const marks = showsSpread ? markRoom(groups) : []
@@ -94,7 +104,10 @@ export function readWall(
       view,
       isTold ? marks : marks.map((mark) => ({ ...mark, tone: 'line' as const })),
       line,
-      told.flatMap(({ findings }) => findings),
+      {
+        ofRoom: told.flatMap(({ of, findings }) => (of === 'room' ? findings : [])),
+        ofLine: told.flatMap(({ of, findings }) => (of === 'line' ? findings : [])),
+      },
     ),
     rubrics: told.map(({ rubric }) => rubric),
     untold: tellings.length - told.length,

@@ -160,7 +160,7 @@ function ParamControl({
     return <Toggle label={field.label} value={value === true} onChange={onChange} hint={hint} />
   if (control.kind === 'choice')
     return (
-      <View style={{ minWidth: 180 }}>
+      <View style={{ width: 280, maxWidth: '100%' }}>
         <Select
           label={field.label}
           value={String(value)}
@@ -171,7 +171,7 @@ function ParamControl({
       </View>
     )
   return (
-    <View style={{ width: control.kind === 'list' || control.kind === 'json' ? 280 : 150 }}>
+    <View style={{ width: control.kind === 'list' || control.kind === 'json' ? 280 : 150, maxWidth: '100%' }}>
       <Field
         label={field.label}
         value={text}

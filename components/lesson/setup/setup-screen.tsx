@@ -201,16 +201,20 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
                   }}
                 />
               </View>
-              <Button
-                label={isListOpen ? setup.rulesClose : setup.rulesOpen}
-                onPress={() => setListOpen(!isListOpen)}
-              />
-              {changed.length > 0 ? (
+              <View>
                 <Button
-                  kind="quiet"
-                  label={setup.rulesReset}
-                  onPress={() => setForm((before) => withPreset(before, before.preset))}
+                  label={isListOpen ? setup.rulesClose : setup.rulesOpen}
+                  onPress={() => setListOpen(!isListOpen)}
                 />
+              </View>
+              {changed.length > 0 ? (
+                <View>
+                  <Button
+                    kind="quiet"
+                    label={setup.rulesReset}
+                    onPress={() => setForm((before) => withPreset(before, before.preset))}
+                  />
+                </View>
               ) : null}
             </View>
             {changed.length > 0 ? (
