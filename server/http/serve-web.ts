@@ -7,8 +7,6 @@ import { Refused } from '@/server/errors/refused'
 const HASHED = /[.-][0-9a-f]{8,}\.[a-z0-9]+(\.(br|gz))?$/i
 /** How the name of a file ends. A wall link holds a dot too, with a long signature after it. */
 const FILE_ENDING = /\.[a-z0-9]{1,8}$/i
-/** The ending of a file's name. A token in an address may hold a full stop too, with more behind it. */
-const FILE_ENDING = /\.[a-z0-9]{1,6}$/i
 const YEAR_SECONDS = 365 * 24 * 60 * 60
 const ENCODINGS = [
   { token: 'br', ending: '.br' },
