@@ -105,6 +105,7 @@ export function CantusStaff({
           width={contentPx - besidePx}
           handBar={handBar}
           onPressBar={setHand}
+          onReachBar={setHand}
           onPressStaff={write}
           highlight={highlight}
           accessibilityLabel={words.cantus.edit.staffLabel}

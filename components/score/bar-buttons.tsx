@@ -1,4 +1,4 @@
-import { memo, useRef, useState } from 'react'
+import { memo, useEffect, useRef, useState } from 'react'
 import { Pressable, StyleSheet, View } from 'react-native'
 import { useWords } from '@/components/words'
 import type { ScoreBar } from '@/shared/notation/score-input'
@@ -10,6 +10,8 @@ type Props = Readonly<{
   bars: readonly ScoreBar[]
   handBar: number | null
   onPressBar: ((bar: number) => void) | null
+  /** Told when the keyboard's focus comes to a bar. */
+  onReachBar?: ((bar: number) => void) | undefined
 }>
 
 type Focusable = Readonly<{ focus: () => void }>
@@ -20,12 +22,20 @@ const NEXT: Readonly<Record<string, number>> = { ArrowRight: 1, ArrowLeft: -1 }
  * The bars as the keyboard and a screen reader find them, over the drawing: one stop of the tab key, arrows from bar to
  * bar, Enter to press. Where nothing can be pressed they are only read.
  */
-export const BarButtons = memo(function BarButtons({ layout, bars, handBar, onPressBar }: Props) {
+export const BarButtons = memo(function BarButtons(props: Props) {
+  const { layout, bars, handBar, onPressBar, onReachBar } = props
   const words = useWords()
   const [reached, setReached] = useState<number | null>(null)
   const nodes = useRef(new Map<number, Focusable>())
   const numbers = bars.map(({ number }) => number)
   const stop = [reached, handBar].find((bar) => bar !== null && numbers.includes(bar)) ?? numbers[0]
+
+  // While a bar has the focus and the hand goes on to another, as in writing by letters, the focus goes along.
+  useEffect(() => {
+    const hand = handBar === null ? undefined : nodes.current.get(handBar)
+    const holder: unknown = document.activeElement
+    if (hand && hand !== holder && [...nodes.current.values()].some((node) => node === holder)) hand.focus()
+  }, [handBar])
 
   const places = layout.systems.flatMap((system) =>
     system.bars.map((bar) => ({
@@ -66,7 +76,10 @@ export const BarButtons = memo(function BarButtons({ layout, bars, handBar, onPr
         aria-label={label}
         aria-pressed={bar.number === handBar}
         tabIndex={bar.number === stop ? 0 : -1}
-        onFocus={() => setReached(bar.number)}
+        onFocus={() => {
+          setReached(bar.number)
+          onReachBar?.(bar.number)
+        }}
         onPress={() => onPressBar(bar.number)}
         // The web's key event, which the native types leave out.
         {...({

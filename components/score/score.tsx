@@ -27,6 +27,8 @@ export type ScoreProps = Readonly<{
   /** The bar being worked on, by number: lit, and in the middle of a strip. */
   handBar?: number | null | undefined
   onPressBar?: ((bar: number) => void) | undefined
+  /** The keyboard's focus came to a bar: for whoever writes by letters. */
+  onReachBar?: ((bar: number) => void) | undefined
   /** A click or the end of a drag on the staff that is being written. The bar's own press is then not told. */
   onPressStaff?: ((bar: number, pitch: PitchName) => void) | undefined
   /** Bars whose staff takes a press; all of them when left out. */
@@ -116,6 +118,7 @@ function EngravedScore(props: ScoreProps) {
             bars={input.bars}
             handBar={handBar}
             onPressBar={onPressBar ? pressBar : null}
+            onReachBar={props.onReachBar}
           />
         )}
         {playhead && <PlayheadLine layout={layout} playhead={playhead} />}
