@@ -2,34 +2,6 @@ import { fonts, type Pigments } from '@/components/theme'
 import type { Ink } from '@/shared/notation/mark'
 import type { FaceName } from '@/shared/notation/text-widths'
 
-/** A pigment, and how thick it lies: staff lines stand back behind the notes. */
-export type Pigmented = Readonly<{ color: string; opacity: number }>
-
-export function inkOf(ink: Ink, colors: Pigments): Pigmented {
-  switch (ink) {
-    case 'cantus':
-      return { color: colors.lampblack, opacity: 1 }
-    case 'line':
-      return { color: colors.azurite, opacity: 1 }
-    case 'breach':
-      return { color: colors.minium, opacity: 1 }
-    case 'remark':
-      return { color: colors.orpiment, opacity: 1 }
-    case 'quiet':
-      return { color: colors.lead, opacity: 1 }
-    case 'released':
-      return { color: colors.verdigris, opacity: 1 }
-    case 'staff':
-      return { color: colors.lampblack, opacity: 0.6 }
-    case 'barline':
-      return { color: colors.lampblack, opacity: 0.75 }
-    case 'hatch':
-      return { color: colors.lead, opacity: 0.6 }
-  }
-}
-
-export const familyOf = (face: FaceName): string => fonts[face]
-
 /** Colour of a ground under a thin wash of another: `#F2F4F0` under a tenth of minium. Both are `#RRGGBB`. */
 export function washed(ground: string, wash: string, opacity: number): string {
   const channel = (from: number): string => {
@@ -39,3 +11,32 @@ export function washed(ground: string, wash: string, opacity: number): string {
   }
   return `#${channel(1)}${channel(3)}${channel(5)}`
 }
+
+/**
+ * The colour a mark is drawn in. What stands back behind the notes is mixed with the page beforehand, as thin ink would
+ * show twice where lines cross.
+ */
+export function colorOf(ink: Ink, colors: Pigments): string {
+  switch (ink) {
+    case 'cantus':
+      return colors.lampblack
+    case 'line':
+      return colors.azurite
+    case 'breach':
+      return colors.minium
+    case 'remark':
+      return colors.orpiment
+    case 'quiet':
+      return colors.lead
+    case 'released':
+      return colors.verdigris
+    case 'staff':
+      return washed(colors.vellum, colors.lampblack, 0.6)
+    case 'barline':
+      return washed(colors.vellum, colors.lampblack, 0.75)
+    case 'hatch':
+      return washed(colors.vellum, colors.lead, 0.6)
+  }
+}
+
+export const familyOf = (face: FaceName): string => fonts[face]

@@ -2,7 +2,7 @@ import { memo } from 'react'
 import { Path, Text } from 'react-native-svg'
 import type { Pigments } from '@/components/theme'
 import type { Painted, PaintedPath, PaintedText } from '@/shared/notation/paint-marks'
-import { familyOf, inkOf } from './inks'
+import { colorOf, familyOf } from './inks'
 
 type Props = Readonly<{ painted: readonly Painted[]; colors: Pigments; ground: string }>
 
@@ -11,20 +11,12 @@ function PaintedShape({
   colors,
   ground,
 }: Readonly<{ path: PaintedPath; colors: Pigments; ground: string }>) {
-  const fill =
-    path.fill === null
-      ? { color: 'none', opacity: 1 }
-      : path.fill === 'ground'
-        ? { color: ground, opacity: 1 }
-        : inkOf(path.fill, colors)
-  const stroke = path.stroke === null ? null : inkOf(path.stroke, colors)
+  const fill = path.fill === null ? 'none' : path.fill === 'ground' ? ground : colorOf(path.fill, colors)
   return (
     <Path
       d={path.d}
-      fill={fill.color}
-      fillOpacity={fill.opacity}
-      stroke={stroke?.color ?? 'none'}
-      strokeOpacity={stroke?.opacity ?? 1}
+      fill={fill}
+      stroke={path.stroke === null ? 'none' : colorOf(path.stroke, colors)}
       strokeWidth={path.strokePx}
       strokeLinecap="round"
       {...(path.isDashed ? { strokeDasharray: [3 * path.strokePx, 2.5 * path.strokePx] } : null)}
@@ -44,7 +36,7 @@ function PaintedWords({
     <Text
       x={words.x}
       y={words.y}
-      fill={inkOf(words.ink, colors).color}
+      fill={colorOf(words.ink, colors)}
       fontFamily={familyOf(words.face)}
       fontSize={words.sizePx}
       stroke={words.hasRim ? ground : 'none'}

@@ -3,7 +3,7 @@ import { G, Rect } from 'react-native-svg'
 import { MOTION_MS, useTheme, type Pigments } from '@/components/theme'
 import { paintMarks } from '@/shared/notation/paint-marks'
 import type { BarLayout, SystemLayout } from '@/shared/notation/score-layout'
-import { inkOf, washed } from './inks'
+import { colorOf, washed } from './inks'
 import { PaintedMarks } from './painted-marks'
 import { easedTransform } from './eased'
 
@@ -46,7 +46,7 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
     highlight !== null && number >= highlight.fromBar && number <= highlight.toBar
   const groundOf = (bar: BarLayout): string => {
     const under = bar.number === handBar ? colors.leaf : ground
-    return highlight !== null && isLit(bar) ? washed(under, inkOf(highlight.tone, colors).color, WASH) : under
+    return highlight !== null && isLit(bar) ? washed(under, colorOf(highlight.tone, colors), WASH) : under
   }
   const hand = system.bars.find(({ number }) => number === handBar)
   const top = system.stavesBox.top - spacePx
