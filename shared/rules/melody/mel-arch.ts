@@ -9,7 +9,7 @@ import {
   PITCH_ROOM,
   type Noted,
 } from '@/shared/rules/fold'
-import { packExtremes, EXTREMES_ROOM, widen, type Extremes } from '@/shared/rules/melody/extremes'
+import { packExtremes, EXTREMES_ROOM, type Extremes } from '@/shared/rules/melody/extremes'
 import type { Rule, Voice } from '@/shared/rules/rule'
 import { comparePitches } from '@/shared/theory/pitch'
 import { directionFrom, type Direction } from '@/shared/theory/interval'
@@ -32,7 +32,8 @@ type State = Readonly<{
   direction: Direction
   /** Notes in a row at which the line has turned, counted no further than one more than allowed. */
   turns: number
-  zigzag: readonly Noted[]
+  /** The first of those notes. */
+  turnedAt: Noted | null
   extremes: Extremes | null
   /** Whether the highest note stands somewhere inside the line, and whether the lowest does. */
   isHighInside: boolean
@@ -40,17 +41,19 @@ type State = Readonly<{
 }>
 
 function place(state: State, now: Noted): Pick<State, 'extremes' | 'isHighInside' | 'isLowInside'> {
-  const { extremes: known } = state
-  const extremes = widen(known, now)
   const isInside = !now.isFirst && !now.isLast
-  const isHigh = comparePitches(now.note, extremes.high.note) === 0
-  const isLow = comparePitches(now.note, extremes.low.note) === 0
-  const isNewHigh = isHigh && extremes.high === now
-  const isNewLow = isLow && extremes.low === now
+  const { extremes } = state
+  if (extremes === null) {
+    return { extremes: { low: now, high: now }, isHighInside: isInside, isLowInside: isInside }
+  }
+  const { low, high } = extremes
+  const overHigh = comparePitches(now.note, high.note)
+  const overLow = comparePitches(now.note, low.note)
+  const isNew = overHigh > 0 || overLow < 0
   return {
-    extremes,
-    isHighInside: isHigh ? isInside || (!isNewHigh && state.isHighInside) : state.isHighInside,
-    isLowInside: isLow ? isInside || (!isNewLow && state.isLowInside) : state.isLowInside,
+    extremes: isNew ? { low: overLow < 0 ? now : low, high: overHigh > 0 ? now : high } : extremes,
+    isHighInside: overHigh > 0 ? isInside : state.isHighInside || (overHigh === 0 && isInside),
+    isLowInside: overLow < 0 ? isInside : state.isLowInside || (overLow === 0 && isInside),
   }
 }
 
@@ -65,7 +68,7 @@ export const melArch: Rule<State, Params> = {
     before: null,
     direction: 0,
     turns: 0,
-    zigzag: [],
+    turnedAt: null,
     extremes: null,
     isHighInside: false,
     isLowInside: false,
@@ -74,17 +77,20 @@ export const melArch: Rule<State, Params> = {
     const { voice, before } = state
     if (!isNoted(moment)) {
       if (moment.note === 'rest') return goOn(state)
-      return goOn({ ...state, before: null, direction: 0 as const, turns: 0, zigzag: [] })
+      return goOn({ ...state, before: null, direction: 0 as const, turns: 0, turnedAt: null })
     }
     const shape = place(state, moment)
     const direction = before === null ? 0 : directionFrom(before.note, moment.note)
     const hasTurned = direction !== 0 && state.direction !== 0 && direction !== state.direction
     const turns = hasTurned ? Math.min(state.turns + 1, most + 1) : 0
-    const zigzag = hasTurned && before !== null ? [...state.zigzag, before].slice(-most - 1) : []
+    const turnedAt = hasTurned ? (state.turnedAt ?? before) : null
     const isNew = turns === most + 1 && state.turns === most
     return {
-      state: { voice, before: moment, direction, turns, zigzag, ...shape },
-      breach: isNew ? breachAt(voice, 'zigzag', [...zigzag, moment], { count: turns, most }) : null,
+      state: { voice, before: moment, direction, turns, turnedAt, ...shape },
+      breach:
+        isNew && turnedAt !== null
+          ? breachAt(voice, 'zigzag', [turnedAt, moment], { count: turns, most })
+          : null,
     }
   },
   finish: ({ voice, extremes, isHighInside, isLowInside }, _params, isComplete) => {

@@ -1,5 +1,14 @@
 import { z } from 'zod'
-import { ALL_SPECIES, breachAt, goOn, isNoted, packPitch, PITCH_ROOM, type Noted } from '@/shared/rules/fold'
+import {
+  ALL_SPECIES,
+  breachAt,
+  goOn,
+  isNoted,
+  pack,
+  packPitch,
+  PITCH_ROOM,
+  type Noted,
+} from '@/shared/rules/fold'
 import type { Rule, Voice } from '@/shared/rules/rule'
 import { isSamePitch } from '@/shared/theory/pitch'
 
@@ -8,13 +17,33 @@ const params = z.strictObject({
 })
 type Params = z.infer<typeof params>
 
-/** How far back a figure is remembered, in notes. A fold must forget; what lies further back is no longer compared. */
-const MEMORY_NOTES = 4
+/**
+ * The last four notes, newest first, and how many notes in a row have been the same as three and as four notes before.
+ * A fold must forget: what lies further back is no longer compared.
+ */
+type State = Readonly<{
+  voice: Voice
+  one: Noted | null
+  two: Noted | null
+  three: Noted | null
+  four: Noted | null
+  matchesOfThree: number
+  matchesOfFour: number
+}>
 
-/** The last notes, newest last, and for each distance from 3 notes back how many notes in a row have come again. */
-type State = Readonly<{ voice: Voice; notes: readonly Noted[]; matches: readonly number[] }>
+const forget = (voice: Voice): State => ({
+  voice,
+  one: null,
+  two: null,
+  three: null,
+  four: null,
+  matchesOfThree: 0,
+  matchesOfFour: 0,
+})
 
-const DISTANCES = [3, 4] as const
+/** Counts no further than one more than makes a figure, which is then told once. */
+const countMatch = (earlier: Noted | null, now: Noted, count: number, length: number): number =>
+  earlier !== null && isSamePitch(earlier.note, now.note) ? Math.min(count + 1, length + 1) : 0
 
 export const melMotiveRepeat: Rule<State, Params> = {
   id: 'mel-motive-repeat',
@@ -22,29 +51,31 @@ export const melMotiveRepeat: Rule<State, Params> = {
   scope: 'melody',
   species: ALL_SPECIES,
   params,
-  start: (_exercise, _params, voice) => ({ voice, notes: [], matches: [0, 0] }),
-  step: (state, moment, { notes: length }) => {
-    const { voice, notes } = state
-    if (!isNoted(moment)) return goOn(moment.note === null ? { voice, notes: [], matches: [0, 0] } : state)
-    const matches = DISTANCES.map((distance, index) => {
-      const earlier = notes[notes.length - distance]
-      if (earlier === undefined || !isSamePitch(earlier.note, moment.note)) return 0
-      return Math.min((state.matches[index] as number) + 1, length + 1)
-    })
-    const isAgain = matches.some((count, index) => count === length && state.matches[index] === length - 1)
-    const kept = notes.length < MEMORY_NOTES ? notes : notes.slice(1)
-    const breach = isAgain
-      ? breachAt(voice, 'again', [...notes.slice(1 - length), moment], { count: length })
-      : null
-    return { state: { voice, notes: [...kept, moment], matches }, breach }
+  start: (_exercise, _params, voice) => forget(voice),
+  step: (state, now, { notes: length }) => {
+    const { voice, one, two, three, four } = state
+    if (!isNoted(now)) return goOn(now.note === null ? forget(voice) : state)
+    const matchesOfThree = countMatch(three, now, state.matchesOfThree, length)
+    const matchesOfFour = countMatch(four, now, state.matchesOfFour, length)
+    const isAgain =
+      (matchesOfThree === length && state.matchesOfThree === length - 1) ||
+      (matchesOfFour === length && state.matchesOfFour === length - 1)
+    const figure = isAgain ? [three, two, one].slice(4 - length).filter((noted) => noted !== null) : []
+    return {
+      state: { voice, one: now, two: one, three: two, four: three, matchesOfThree, matchesOfFour },
+      breach: isAgain ? breachAt(voice, 'again', [...figure, now], { count: length }) : null,
+    }
   },
   finish: () => null,
-  key: ({ notes, matches }) => {
-    let key = notes.length
-    for (const { note } of notes) key = key * PITCH_ROOM + packPitch(note)
-    for (const count of matches) key = key * 6 + count
-    return key
-  },
+  key: ({ one, two, three, four, matchesOfThree, matchesOfFour }) =>
+    pack(
+      [packPitch(one && one.note), PITCH_ROOM],
+      [packPitch(two && two.note), PITCH_ROOM],
+      [packPitch(three && three.note), PITCH_ROOM],
+      [packPitch(four && four.note), PITCH_ROOM],
+      [matchesOfThree, 6],
+      [matchesOfFour, 6],
+    ),
   explain: {
     title: 'No figure twice',
     statement: 'A figure or group of notes is not repeated at once.',
