@@ -97,6 +97,8 @@ export class ClassChannel {
   #welcome(socket: ChannelSocket): void {
     const { identity } = socket.data
     const { lessonId, memberId, role, sessionId } = identity
+    // The request with its headers has done its work, and would stay in memory as long as the socket.
+    Object.assign(socket.conn, { request: null })
     const lead = can(role, 'see names')
     void socket.join([
       GROUP.lesson(lessonId),

@@ -1,5 +1,6 @@
 import * as Y from 'yjs'
 import { fail, ok, type Result } from '@/shared/result'
+import { parseProposalKey } from '@/shared/board'
 import { parseBar } from '@/shared/board/parse-value'
 import { DOCUMENT_MAPS, MAX_BARS, type DocumentKind } from '@/shared/wire/documents'
 import { MAX_CLOCK, VALUE_DEPTH } from './limits'
@@ -36,6 +37,7 @@ const KEYS: Readonly<Record<string, (key: string) => boolean>> = {
   line: isBarKey,
   spread: isBarKey,
   notes: isBarKey,
+  proposals: (key) => parseProposalKey(key) !== null,
   gestures: (key) => ID_KEY.test(key),
   marks: (key) => {
     const match = MARK_KEY.exec(key)
