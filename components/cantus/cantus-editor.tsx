@@ -122,9 +122,7 @@ export function CantusEditor({
               highlight={highlight}
               onText={(text) => edit({ text })}
             />
-            <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.one, alignItems: 'center' }}>
-              <HearButton notes={judged.notes ?? []} />
-            </View>
+            <HearButton notes={judged.notes ?? []} />
           </View>
           <Form label={cantusId ? start.title : say.edit.newTitle} onSubmit={() => void keep()}>
             <Field

@@ -15,7 +15,16 @@ export function HearButton({ notes }: Readonly<{ notes: readonly PitchName[] }>)
   useStopOnLeave()
   const isOn = player.playingId === HEARING
   return (
-    <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: space.one }}>
+    <View
+      style={{
+        flexDirection: 'row',
+        flexWrap: 'wrap',
+        alignItems: 'center',
+        columnGap: space.one,
+        rowGap: space.small,
+        maxWidth: '100%',
+      }}
+    >
       <Button
         label={isOn ? words.cantus.edit.stop : words.cantus.edit.hear}
         isBusy={isOn && player.isLoading}

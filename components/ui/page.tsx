@@ -87,7 +87,9 @@ export function Page({
             )}
           </View>
           {actions ? (
-            <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small }}>{actions}</View>
+            <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small, maxWidth: '100%' }}>
+              {actions}
+            </View>
           ) : null}
         </View>
       </View>

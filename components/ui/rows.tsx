@@ -44,7 +44,11 @@ export function Row({ children, side }: Readonly<{ children: ReactNode; side?: R
       }}
     >
       <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 190, minWidth: 0 }}>{children}</View>
-      {side ? <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small }}>{side}</View> : null}
+      {side ? (
+        <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space.small, maxWidth: '100%' }}>
+          {side}
+        </View>
+      ) : null}
     </View>
   )
 }
