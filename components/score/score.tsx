@@ -126,7 +126,7 @@ function EngravedScore(props: ScoreProps) {
           <Ghost layout={layout} hit={pointer.ghost} isHeld={pointer.isHeld} ground={ground} />
         )}
       </View>
-      {isStrip && <StripClefs layout={layout} ground={ground} />}
+      {isStrip && <StripClefs layout={layout} ground={ground} isMoved={offsetPx > 0} />}
     </View>
   )
 }

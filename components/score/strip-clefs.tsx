@@ -20,6 +20,8 @@ const fadeFrom = (ground: string, leftPx: number, widthPx: number): object => ({
   },
 })
 
+type Props = Readonly<{ layout: ScoreLayout; ground: string; isMoved: boolean }>
+
 /** Clefs and signature of a strip, which stay while the bars pass under them. */
 export const StripClefs = memo(function StripClefs({
   layout,
@@ -50,7 +52,7 @@ export const StripClefs = memo(function StripClefs({
           backgroundColor: ground,
         }}
       />
-      <View {...fadeFrom(ground, system.prefixPx, layout.spacePx)} />
+      {isMoved && <View {...fadeFrom(ground, system.prefixPx, layout.spacePx)} />}
       <View>
         <Svg width={system.prefixPx + layout.spacePx} height={layout.heightPx} style={{ display: 'flex' }}>
           <PaintedMarks painted={painted} colors={colors} ground={ground} />

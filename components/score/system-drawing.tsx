@@ -53,17 +53,20 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
   return (
     <G x={system.xPx} y={system.yPx}>
       {hand && (
-        <Rect x={hand.xPx + 1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
+        <G {...easedTransform(hand.xPx, 0, easeMs)}>
+          <Rect x={1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
+        </G>
       )}
       {system.bars.filter(isLit).map((bar) => (
-        <Rect
-          key={bar.number}
-          x={bar.xPx}
-          y={top}
-          width={bar.widthPx}
-          height={system.stavesBox.bottom + spacePx - top}
-          fill={groundOf(bar)}
-        />
+        <G key={bar.number} {...easedTransform(bar.xPx, 0, easeMs)}>
+          <Rect
+            x={0}
+            y={top}
+            width={bar.widthPx}
+            height={system.stavesBox.bottom + spacePx - top}
+            fill={groundOf(bar)}
+          />
+        </G>
       ))}
       <PaintedMarks painted={lines} colors={colors} ground={ground} />
       {hasPrefix && <PaintedMarks painted={prefix} colors={colors} ground={ground} />}
