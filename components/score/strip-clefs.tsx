@@ -23,10 +23,7 @@ const fadeFrom = (ground: string, leftPx: number, widthPx: number): object => ({
 type Props = Readonly<{ layout: ScoreLayout; ground: string; isMoved: boolean }>
 
 /** Clefs and signature of a strip, which stay while the bars pass under them. */
-export const StripClefs = memo(function StripClefs({
-  layout,
-  ground,
-}: Readonly<{ layout: ScoreLayout; ground: string }>) {
+export const StripClefs = memo(function StripClefs({ layout, ground, isMoved }: Props) {
   const { colors } = useTheme()
   const system = layout.systems[0]
   const painted = useMemo(
