@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react'
+import { useLayoutEffect, type ReactNode } from 'react'
 import { View } from 'react-native'
 import { MEASURE_PX, space, useWidth } from '@/components/theme'
 import { Heading } from './heading'
@@ -36,6 +36,10 @@ export function Page({
   children,
 }: PageProps) {
   useTitle(title)
+  useLayoutEffect(() => {
+    document.documentElement.classList.add('scrolls')
+    return () => document.documentElement.classList.remove('scrolls')
+  }, [])
   const { isWide } = useWidth()
   const { marginPx } = usePageMeasure()
   return (
