@@ -1,5 +1,4 @@
 import { Redirect, type Href } from 'expo-router'
-import Head from 'expo-router/head'
 import { useCallback, useEffect, useMemo, useState } from 'react'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
 import { useEntry } from '@/components/lesson/use-entry'
@@ -42,24 +41,19 @@ export function DeskScreen({ lessonId }: Readonly<{ lessonId: string }>) {
     )
   if (!view.board) return <BoardDoor title={lesson.title} isUnloadable={room.isUnloadable} />
   return (
-    <>
-      <Head>
-        <title>{`${lesson.title} · ${words.common.product}`}</title>
-      </Head>
-      <Desk
-        title={lesson.title}
-        board={view.board}
-        sheet={view.sheet}
-        pen={pen}
-        kept={view.kept}
-        here={view.connection === 'live' ? view.presence.here : null}
-        isOffline={view.connection !== 'live'}
-        hindrance={view.hindrance}
-        isPrepared={lesson.status === 'prepared'}
-        isHandUp={hand.isUp}
-        onHand={hand.turn}
-      />
-    </>
+    <Desk
+      title={lesson.title}
+      board={view.board}
+      sheet={view.sheet}
+      pen={pen}
+      kept={view.kept}
+      here={view.connection === 'live' ? view.presence.here : null}
+      isOffline={view.connection !== 'live'}
+      hindrance={view.hindrance}
+      isPrepared={lesson.status === 'prepared'}
+      isHandUp={hand.isUp}
+      onHand={hand.turn}
+    />
   )
 }
 

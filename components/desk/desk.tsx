@@ -4,9 +4,10 @@ import { lineWith } from '@/components/lesson/line-with'
 import { PlayingScore } from '@/components/lesson/playing-score'
 import { ScoreText } from '@/components/lesson/score-text'
 import { speakScore } from '@/components/lesson/spoken'
+import { useWholeWindow } from '@/components/lesson/use-whole-window'
 import { usePlayer, useStopOnLeave } from '@/components/sound'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { Notice, Txt } from '@/components/ui'
+import { Notice, Txt, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { BoardState, SheetState } from '@/shared/board'
 import { DEFAULT_TEMPO } from '@/shared/playback'
@@ -45,8 +46,10 @@ export function Desk(props: DeskProps) {
   const { board, sheet, pen } = props
   const words = useWords()
   const { colors } = useTheme()
-  const { widthPx, isWide } = useWidth()
-  const { height } = useWindowDimensions()
+  useWholeWindow()
+  useTitle(props.title)
+  const { isWide } = useWidth()
+  const { width: widthPx, height } = useWindowDimensions()
   const player = usePlayer()
   useStopOnLeave()
   const model = useDesk(board, sheet, pen)

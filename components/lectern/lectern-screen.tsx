@@ -1,5 +1,4 @@
 import { Redirect, type Href } from 'expo-router'
-import Head from 'expo-router/head'
 import { useCallback, useMemo, useState } from 'react'
 import { useQuery } from '@/components/api'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
@@ -73,28 +72,23 @@ function LecternInLesson({ lessonId, onReopened }: Readonly<{ lessonId: string; 
     )
   if (!view.board) return <BoardDoor title={lesson.title} isUnloadable={room.isUnloadable} />
   return (
-    <>
-      <Head>
-        <title>{`${lesson.title} · ${words.common.product}`}</title>
-      </Head>
-      <Lectern
-        lesson={lesson}
-        board={view.board}
-        chorus={view.chorus}
-        here={view.presence.here}
-        hands={view.presence.hands}
-        people={people}
-        names={names}
-        isOffline={view.connection !== 'live' && lesson.status !== 'ended'}
-        hindrance={view.hindrance}
-        pen={pen}
-        onLesson={(changed) =>
-          lesson.status === 'ended' && changed.status === 'open' ? onReopened() : setLesson(changed)
-        }
-        onLower={lower}
-        onRemove={remove}
-        onCue={cue}
-      />
-    </>
+    <Lectern
+      lesson={lesson}
+      board={view.board}
+      chorus={view.chorus}
+      here={view.presence.here}
+      hands={view.presence.hands}
+      people={people}
+      names={names}
+      isOffline={view.connection !== 'live' && lesson.status !== 'ended'}
+      hindrance={view.hindrance}
+      pen={pen}
+      onLesson={(changed) =>
+        lesson.status === 'ended' && changed.status === 'open' ? onReopened() : setLesson(changed)
+      }
+      onLower={lower}
+      onRemove={remove}
+      onCue={cue}
+    />
   )
 }

@@ -6,7 +6,7 @@ import { rubricsOf, setAsideRubrics, type Rubric } from '@/components/lesson/rub
 import type { RoomGroup } from '@/components/lesson/room'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { Button, Heading, Notice, Txt } from '@/components/ui'
+import { Button, Heading, Notice, Txt, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Highlight } from '@/components/score'
 import type { Lesson } from '@/shared/api/lessons'
@@ -62,6 +62,7 @@ export function Lectern(props: LecternProps) {
   // A room of hundreds may speak faster than rows can be drawn: typing and pressing go first.
   const chorus = useDeferredValue(props.chorus)
   const words = useWords()
+  useTitle(lesson.title)
   const { colors } = useTheme()
   const { widthPx, isWide } = useWidth()
   const { view, judge } = useLessonView(board)

@@ -1,25 +1,21 @@
-import Head from 'expo-router/head'
 import type { ReactNode } from 'react'
 import { View } from 'react-native'
 import { RefusedPage } from '@/components/api'
 import type { ClosedReason } from '@/components/room'
 import { space } from '@/components/theme'
-import { Loading, Refused } from '@/components/ui'
+import { Loading, Refused, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { EntryState } from './use-entry'
 
 /** What stands in the place of a face that cannot be shown: coming up, refused, closed. */
 function DoorPage({ title, children }: Readonly<{ title: string; children: ReactNode }>) {
-  const words = useWords().common
+  useTitle(title)
   return (
     <View
       role="main"
       id="page"
       style={{ padding: space.one, paddingTop: space.wide, maxWidth: 620, width: '100%' }}
     >
-      <Head>
-        <title>{`${title} · ${words.product}`}</title>
-      </Head>
       {children}
     </View>
   )

@@ -1,16 +1,16 @@
 import { useRouter, type Href } from 'expo-router'
-import Head from 'expo-router/head'
 import { useEffect, useRef, useState } from 'react'
 import { View } from 'react-native'
 import { callApi } from '@/components/api'
 import { space } from '@/components/theme'
-import { Loading, Refused } from '@/components/ui'
+import { Loading, Refused, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
 
 /** A wall link opened on the projector's own machine: the token is given up for a cookie that can only show. */
 export function WallLinkScreen({ token }: Readonly<{ token: string }>) {
   const words = useWords()
+  useTitle(words.wall.opening)
   const router = useRouter()
   const [problem, setProblem] = useState<string | null>(null)
   const asked = useRef(false)
@@ -30,9 +30,6 @@ export function WallLinkScreen({ token }: Readonly<{ token: string }>) {
   }, [token, router, words])
   return (
     <View role="main" id="page" style={{ padding: space.double }}>
-      <Head>
-        <title>{`${words.wall.opening} · ${words.common.product}`}</title>
-      </Head>
       {problem ? <Refused level={1} title={problem} /> : <Loading lines={4} />}
     </View>
   )

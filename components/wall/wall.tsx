@@ -4,6 +4,7 @@ import { PlayingScore } from '@/components/lesson/playing-score'
 import { ScoreText } from '@/components/lesson/score-text'
 import { speakScore } from '@/components/lesson/spoken'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
+import { useWholeWindow } from '@/components/lesson/use-whole-window'
 import { useTheme } from '@/components/theme'
 import { useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
@@ -31,9 +32,10 @@ export type WallProps = Readonly<{
 /** What is projected: the score, the room, what is said of both, the task, and the way in. */
 export function Wall(props: WallProps) {
   const { lesson, board, chorus } = props
-  useTitle(lesson.title)
   const words = useWords()
   const { colors } = useTheme()
+  useWholeWindow()
+  useTitle(lesson.title)
   const { width, height } = useWindowDimensions()
   const measure = useMemo(() => measureWall(width, height), [width, height])
   const { view, judge } = useLessonView(board)

@@ -8,6 +8,7 @@ import { Score } from '@/components/score'
 import { Frame } from '@/components/session'
 import { space, useTheme, useWidth } from '@/components/theme'
 import { Button, Choice, Field, Form, Heading, Notice, Select, Txt } from '@/components/ui'
+import { usePageMeasure } from '@/components/ui/use-page-measure'
 import { useWords, type Words } from '@/components/words'
 import { api } from '@/shared/api'
 import type { Cantus } from '@/shared/api/cantus'
@@ -39,6 +40,8 @@ import {
 import { doubtsOf, type Doubt } from './soundness'
 import { CLEF_CHOICES } from './suggest-clefs'
 
+/** Width of the column in which the melody is chosen. */
+const PICKER_PX = 440
 const FIRST_PRESET = 'open-undergrad'
 const FINALS = ['C', 'C#', 'Db', 'D', 'Eb', 'E', 'F', 'F#', 'G', 'Ab', 'A', 'Bb', 'B'] as const
 
@@ -63,7 +66,7 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
   const words = useWords()
   const { setup, lesson } = words
   const router = useRouter()
-  const { widthPx, isWide } = useWidth()
+  const { isWide } = useWidth()
   const create = useMutation(api.lessons.create)
   const [form, setForm] = useState<SetupForm>(() =>
     startForm(findPreset(FIRST_PRESET) ?? (PRESETS[0] as RuleSet), setup.promptSuggestion),
@@ -95,13 +98,13 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
     if (result.ok) router.replace(`/lessons/${result.value.lesson.id}/lectern` as Href)
   }
 
-  const columnPx = Math.min(widthPx, 1560) - (isWide ? 2 * space.double + 440 + space.double : 2 * space.one)
-  const previewPx = Math.max(240, isWide ? columnPx : widthPx - 2 * space.one)
+  const { contentPx } = usePageMeasure()
+  const previewPx = isWide ? contentPx - PICKER_PX - space.double : contentPx
 
   return (
     <Form label={setup.title} onSubmit={() => void submit()} gapPx={space.wide}>
       <View style={{ flexDirection: isWide ? 'row' : 'column', gap: isWide ? space.double : space.wide }}>
-        <View style={{ width: isWide ? 440 : undefined, gap: space.wide }}>
+        <View style={{ width: isWide ? PICKER_PX : undefined, gap: space.wide }}>
           <Section title={setup.cantus}>
             <CantusPicker
               library={library}
