@@ -1,5 +1,6 @@
 import type { IncomingHttpHeaders } from 'node:http'
 import type { Response } from 'express'
+import { APIError } from 'better-auth/api'
 import { fromNodeHeaders } from 'better-auth/node'
 import type { Connection } from '@/db/connect'
 import { findWallSession } from '@/db/queries/wall-sessions'
@@ -31,6 +32,13 @@ type Findings = Readonly<{
   db: Connection
 }>
 
+/** The library hides why it could not look a login up; there is nothing in the way of that but the database. */
+function refuseUnavailable(error: unknown): never {
+  throw error instanceof APIError && error.statusCode === 500
+    ? new Refused('unavailable', { cause: error })
+    : error
+}
+
 /**
  * Reads who asks from the cookies, in the database and not in a cached cookie: a login that was ended a moment ago is
  * nobody's. Where there is a `response`, a login that is used is made to last.
@@ -43,11 +51,13 @@ export async function findAsker(
   if (!headers.cookie) return { person: null, wall: null }
   const wallCookie = readWallCookie(headers.cookie)
   const [{ headers: answered, response: login }, wall] = await Promise.all([
-    auth.api.getSession({
-      headers: fromNodeHeaders({ cookie: headers.cookie }),
-      query: { disableCookieCache: true, disableRefresh: response === undefined },
-      returnHeaders: true,
-    }),
+    auth.api
+      .getSession({
+        headers: fromNodeHeaders({ cookie: headers.cookie }),
+        query: { disableCookieCache: true, disableRefresh: response === undefined },
+        returnHeaders: true,
+      })
+      .catch(refuseUnavailable),
     wallCookie ? findWallSession(db, hashToken(wallCookie)) : undefined,
   ])
   if (login && response) for (const cookie of answered.getSetCookie()) response.append('Set-Cookie', cookie)

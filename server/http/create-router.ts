@@ -2,7 +2,8 @@ import { Router, type Request, type Response } from 'express'
 import { z } from 'zod'
 import type { Endpoint, PathParams } from '@/shared/api/endpoint'
 import { idSchema } from '@/shared/api/fields'
-import { fieldProblems } from '@/shared/api/field-problems'
+import type { FieldProblem } from '@/shared/api/errors'
+import { fieldProblems, MAX_PROBLEMS_TOLD } from '@/shared/api/field-problems'
 import { Refused } from '@/server/errors/refused'
 
 /** A request that has been parsed: what the path, the query and the body said, and the raw request for its cookies. */
@@ -36,9 +37,27 @@ function parseParams<Path extends string>(params: Request['params']): Record<Pat
   return params as Record<PathParams<Path>, string>
 }
 
+/** A NUL, or half of a character: no text, and nothing the database can keep. */
+// eslint-disable-next-line no-control-regex -- this is the character to refuse
+const UNKEEPABLE = /[\u0000\ud800-\udfff]/u
+
+function unkeepableProblems(value: unknown, path: readonly string[] = []): readonly FieldProblem[] {
+  if (typeof value === 'string') {
+    return UNKEEPABLE.test(value) ? [{ path: path.join('.'), code: 'hidden-characters' }] : []
+  }
+  if (typeof value !== 'object' || value === null) return []
+  return Object.entries(value).flatMap(([key, part]) => [
+    ...(UNKEEPABLE.test(key) ? [{ path: path.join('.'), code: 'hidden-characters' }] : []),
+    ...unkeepableProblems(part, [...path, key]),
+  ])
+}
+
 function parsePart<Schema extends z.ZodType>(schema: Schema | undefined, value: unknown): z.output<Schema> {
   const parsed = (schema ?? z.strictObject({})).safeParse(value)
   if (!parsed.success) throw new Refused('invalid', { fields: fieldProblems(parsed.error) })
+  // Looked for in what was parsed: its depth and size are bounded by then.
+  const fields = unkeepableProblems(parsed.data).slice(0, MAX_PROBLEMS_TOLD)
+  if (fields.length > 0) throw new Refused('invalid', { fields })
   return parsed.data as z.output<Schema>
 }
 

@@ -1,9 +1,9 @@
 /** Fields that several requests share, with their limits. */
 import { z } from 'zod'
 
-/** Control and bidirectional-override characters, which could hide or reorder what a name says. */
+/** Control and bidirectional-override characters, which could hide or reorder what a name says, and halves of characters. */
 // eslint-disable-next-line no-control-regex -- these are the characters to refuse
-const HIDDEN = /[\u0000-\u001f\u007f-\u009f\u061c\u200e\u200f\u202a-\u202e\u2066-\u2069\ufeff]/
+const HIDDEN = /[\u0000-\u001f\u007f-\u009f\u061c\u200e\u200f\u202a-\u202e\u2066-\u2069\ufeff\ud800-\udfff]/u
 
 export const MAX_NAME_CHARACTERS = 60
 export const MAX_TITLE_CHARACTERS = 120

@@ -18,14 +18,14 @@ function serverUrl(): string {
   return url
 }
 
-function urlOf(database: string): string {
-  const url = new URL(serverUrl())
+function urlOf(database: string, server: string): string {
+  const url = new URL(server)
   url.pathname = `/${database}`
   return url.href
 }
 
-async function withServer<Value>(work: (client: Client) => Promise<Value>): Promise<Value> {
-  const client = new Client({ connectionString: serverUrl() })
+async function withServer<Value>(server: string, work: (client: Client) => Promise<Value>): Promise<Value> {
+  const client = new Client({ connectionString: server })
   await client.connect()
   try {
     return await work(client)
@@ -43,7 +43,7 @@ function templateName(): string {
 }
 
 /** A database migrated from zero once for each state of the migrations, from which tests' own are copied. */
-async function ensureTemplate(client: Client): Promise<string> {
+async function ensureTemplate(client: Client, server: string): Promise<string> {
   const name = templateName()
   await client.query('select pg_advisory_lock($1)', [TEMPLATE_LOCK])
   try {
@@ -52,7 +52,7 @@ async function ensureTemplate(client: Client): Promise<string> {
     const making = `${name}_making`
     await client.query(`drop database if exists ${escapeIdentifier(making)} with (force)`)
     await client.query(`create database ${escapeIdentifier(making)}`)
-    const db = connect(urlOf(making), { connections: 1 })
+    const db = connect(urlOf(making, server), { connections: 1 })
     await migrateUp(db)
     await db.destroy()
     await client.query(`alter database ${escapeIdentifier(making)} rename to ${escapeIdentifier(name)}`)
@@ -63,20 +63,23 @@ async function ensureTemplate(client: Client): Promise<string> {
 }
 
 /** A database of one's own on real PostgreSQL; `isEmpty` leaves out the tables. Drop it when done. */
-export async function createTestDatabase({ isEmpty = false } = {}): Promise<TestDatabase> {
+export async function createTestDatabase({
+  isEmpty = false,
+  server = serverUrl(),
+}: Readonly<{ isEmpty?: boolean; server?: string }> = {}): Promise<TestDatabase> {
   const name = `test_${randomBytes(8).toString('hex')}`
-  await withServer(async (client) => {
-    const template = isEmpty ? 'template1' : await ensureTemplate(client)
+  await withServer(server, async (client) => {
+    const template = isEmpty ? 'template1' : await ensureTemplate(client, server)
     await client.query(`create database ${escapeIdentifier(name)} template ${escapeIdentifier(template)}`)
   })
-  const url = urlOf(name)
+  const url = urlOf(name, server)
   const db = connect(url)
   return {
     url,
     db,
     drop: async () => {
       await db.destroy()
-      await withServer((client) =>
+      await withServer(server, (client) =>
         client.query(`drop database if exists ${escapeIdentifier(name)} with (force)`),
       )
     },

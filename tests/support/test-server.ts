@@ -1,4 +1,3 @@
-import type { Endpoint } from '@/shared/api/endpoint'
 import { attachRealtime } from '@/realtime/attach'
 import { demoPeople } from '@/db/demo/people'
 import { upsertLibrary } from '@/db/library/upsert-library'
@@ -29,10 +28,10 @@ export type TestServer = Readonly<{
 /** The real app on a database of its own, listening on loopback, its mail going to the fake. */
 export async function startTestServer(
   environment: Readonly<Record<string, string>> = {},
-  { isEmpty = false }: Readonly<{ isEmpty?: boolean }> = {},
+  { databaseServer }: Readonly<{ databaseServer?: string }> = {},
 ): Promise<TestServer> {
-  const database = await createTestDatabase()
-  if (!isEmpty) await upsertLibrary(database.db)
+  const database = await createTestDatabase(databaseServer === undefined ? {} : { server: databaseServer })
+  await upsertLibrary(database.db)
   const port = await findFreePort()
   const config = parseConfig({
     PUBLIC_URL: `http://127.0.0.1:${port}`,
@@ -68,6 +67,3 @@ export async function startTestServer(
     },
   }
 }
-
-// eslint-disable-next-line @typescript-eslint/no-explicit-any -- any endpoint of the table
-export type AnyEndpoint = Endpoint<string, any, any, any>
