@@ -4,6 +4,7 @@ import { desk as deskWords } from '@/components/words/en/desk'
 import { lesson as lessonWords } from '@/components/words/en/lesson'
 import { lessons } from '@/shared/api/lessons'
 import { ask } from './support/ask'
+import { keepLastPictures } from './support/keep-picture'
 import { launchChromium } from './support/chromium'
 import { deskFace, type DeskFace } from './support/desk-face'
 import { lecternFace, type LecternFace } from './support/lectern-face'
@@ -25,6 +26,7 @@ beforeAll(async () => {
 }, 120_000)
 
 afterAll(async () => {
+  await keepLastPictures(browser, 'faults')
   await browser?.close()
   await school?.close()
 })

@@ -2,6 +2,7 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core'
 import { desk as deskWords } from '@/components/words/en/desk'
 import { join as joinWords } from '@/components/words/en/join'
+import { keepLastPictures } from './support/keep-picture'
 import { launchChromium } from './support/chromium'
 import { eventually } from './support/eventually'
 import { lecternFace, type LecternFace } from './support/lectern-face'
@@ -56,6 +57,7 @@ beforeAll(async () => {
 }, 120_000)
 
 afterAll(async () => {
+  await keepLastPictures(browser, 'keyboard')
   await browser?.close()
   await school?.close()
 })

@@ -14,7 +14,7 @@ import { ask } from './support/ask'
 import { launchChromium } from './support/chromium'
 import { deskFace, type DeskFace } from './support/desk-face'
 import { eventually } from './support/eventually'
-import { keepPicture } from './support/keep-picture'
+import { keepLastPictures, keepPicture } from './support/keep-picture'
 import { lecternFace, type LecternFace } from './support/lectern-face'
 import { openSchool, type School } from './support/school'
 import { openDevice } from './support/screens'
@@ -53,6 +53,7 @@ beforeAll(async () => {
 }, 120_000)
 
 afterAll(async () => {
+  await keepLastPictures(browser, 'lesson')
   await browser?.close()
   await school?.close()
 })
@@ -204,7 +205,7 @@ test('what is adopted stands in every score, and its bars freeze', async () => {
   await lectern.sees(words.adopted([9, 10, 11]))
   for (const phone of phones) await phone.heading(deskWords.titleNone)
   await phones[1].sees(deskWords.closed.frozenAdopted('D'))
-  await phones[1].sees(deskWords.closed.draft('C'))
+  await phones[1].sees(deskWords.closed.draft('A'))
   await wall.getByRole('img', { name: /^bar 10, cantus E, line C sharp, sixth.*frozen/ }).waitFor()
 })
 
@@ -263,7 +264,7 @@ test('ended, the lesson says so on every screen and keeps the board', async () =
   await lectern.button(words.endGo).click()
   await lectern.sees(words.endedLead)
   for (const phone of phones) await phone.sees(lessonWords.closedBecause['lesson-ended'])
-  await wall.getByText(wallWords.ended).first().waitFor()
+  await wall.getByText(lessonWords.closedBecause['lesson-ended']).waitFor()
 })
 
 test('nothing threw, and no policy was crossed, on any screen of the lesson', () => {

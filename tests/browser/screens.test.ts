@@ -1,6 +1,7 @@
 /** Every screen, looked at with the eyes that may see it: barriers, contrast on both grounds, widths, zoom, sizes of targets. */
 import type { Browser, BrowserContext, Page } from 'playwright-core'
 import { findBarriers, findSideScroll, findSmallTargets } from './support/check-page'
+import { keepLastPictures } from './support/keep-picture'
 import { launchChromium } from './support/chromium'
 import { deskFace } from './support/desk-face'
 import { openLesson } from './support/prepare-lesson'
@@ -65,6 +66,7 @@ beforeAll(async () => {
 }, 180_000)
 
 afterAll(async () => {
+  await keepLastPictures(browser, 'screens')
   await browser?.close()
   await school?.close()
 })

@@ -18,8 +18,12 @@ export function lecternFace(page: Page) {
     async select(from: number, to = from): Promise<void> {
       await bar(from).click()
       if (to !== from) await bar(to).click({ modifiers: ['Shift'] })
-      const bars = Array.from({ length: to - from + 1 }, (_, index) => from + index)
-      await page.getByText(words.selection(bars)).waitFor()
+      await page
+        .getByRole('option', { selected: true })
+        .nth(to - from)
+        .waitFor()
+      const last = page.getByRole('option', { name: new RegExp(`^bar ${to}\\b`), selected: true })
+      await last.waitFor()
     },
     async release(from: number, to = from): Promise<void> {
       await this.select(from, to)

@@ -59,6 +59,10 @@ export async function openSchool(environment: Readonly<Record<string, string>> =
     })
     for (const stream of [child.stdout, child.stderr]) stream.on('data', (chunk) => (told += String(chunk)))
     server = child
+    // A server that ends by itself explains every failure after it.
+    child.on('exit', (exitCode, signal) => {
+      if (server === child) console.error(`The server ended by itself (${signal ?? exitCode}):\n${told}`)
+    })
     const deadlineMs = Date.now() + PATIENCE_MS
     while (!(await isUp(origin))) {
       if (child.exitCode !== null) throw new Error(`The server ended while it started:\n${told}`)
