@@ -47,7 +47,7 @@ export function DeskScreen({ lessonId }: Readonly<{ lessonId: string }>) {
       sheet={view.sheet}
       pen={pen}
       kept={view.kept}
-      here={view.connection === 'live' ? view.presence.here : null}
+      here={view.connection === 'live' && view.presence.here > 0 ? view.presence.here : null}
       isOffline={view.connection !== 'live'}
       hindrance={view.hindrance}
       isPrepared={lesson.status === 'prepared'}

@@ -49,7 +49,7 @@ export function PeoplePanel({
               sizePx={11}
             />
             <View style={{ flex: 1, minWidth: 0 }}>
-              <Txt kind="note" lines={2} tone={person.isOnline ? 'lampblack' : 'lead'}>
+              <Txt kind="note" lines={3} tone={person.isOnline ? 'lampblack' : 'lead'}>
                 <Name>{person.name}</Name>
               </Txt>
               {person.hand || !person.isOnline || person.role !== 'student' ? (

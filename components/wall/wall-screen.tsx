@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useMemo, useState } from 'react'
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { useRoomEvent, type RoomHandle } from '@/components/room'
 import { lineWith } from '@/components/lesson/line-with'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
@@ -13,8 +13,20 @@ import type { Line } from '@/shared/theory/note'
 import type { ChannelEvents } from '@/shared/wire/rooms'
 import { Wall } from './wall'
 
-/** The wall of a lesson. It opens as the wall whoever opens it: a teacher's own browser shows no more than the projector's. */
+/** How often a wall whose lesson has ended asks whether it was opened again. */
+const ASK_AGAIN_MS = 15_000
+
+/**
+ * The wall of a lesson. It shows the wall whoever opens it: a teacher's own browser shows no more than the projector's. A
+ * lesson that is opened again has a new room, which is entered anew.
+ */
 export function WallScreen({ lessonId }: Readonly<{ lessonId: string }>) {
+  const [turn, setTurn] = useState(0)
+  const onReopened = useCallback(() => setTurn((before) => before + 1), [])
+  return <WallInLesson key={turn} lessonId={lessonId} onReopened={onReopened} />
+}
+
+function WallInLesson({ lessonId, onReopened }: Readonly<{ lessonId: string; onReopened: () => void }>) {
   const words = useWords()
   const { state, reload } = useEntry(lessonId)
   const { room, view, entry } = useLessonRoom(lessonId, state, reload)
@@ -28,10 +40,25 @@ export function WallScreen({ lessonId }: Readonly<{ lessonId: string }>) {
     [showsNames, members],
   )
 
+  const isOver = view.closedBecause === 'lesson-ended'
+  useEffect(() => {
+    if (!isOver) return
+    const timer = setInterval(reload, ASK_AGAIN_MS)
+    return () => clearInterval(timer)
+  }, [isOver, reload])
+  const status = entry?.lesson.status
+  const hasEnded = useRef(false)
+  useEffect(() => {
+    if (status === 'ended') hasEnded.current = true
+    else if (status === 'open' && hasEnded.current) onReopened()
+  }, [status, onReopened])
+
   if (!entry) return <EntryDoor state={state} onRetry={reload} />
   const { lesson, role } = entry
   if (role === 'student' || role === 'guest') return <ClosedDoor title={lesson.title} because="forbidden" />
-  if (view.connection === 'closed') return <ClosedDoor title={lesson.title} because={view.closedBecause} />
+  // What was built stays on the wall when the lesson is over.
+  if (view.connection === 'closed' && !(isOver && view.board))
+    return <ClosedDoor title={lesson.title} because={view.closedBecause} />
   if (!view.board) return <BoardDoor title={lesson.title} isUnloadable={room.isUnloadable} />
   return (
     <Wall
@@ -40,8 +67,8 @@ export function WallScreen({ lessonId }: Readonly<{ lessonId: string }>) {
       chorus={view.chorus}
       here={view.presence.here}
       names={names}
-      notice={view.connection === 'live' ? sound.problem : words.wall.offline}
-      onLetSound={sound.isAllowed ? null : sound.allow}
+      notice={view.connection === 'live' || isOver ? sound.problem : words.wall.offline}
+      onLetSound={sound.isAllowed || isOver ? null : sound.allow}
     />
   )
 }
