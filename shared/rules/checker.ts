@@ -32,6 +32,8 @@ type Runner = Readonly<{
   level: Finding['level']
   voice: Voice
   readsPair: boolean
+  /** Moments back that the rule remembers; `Infinity` for the whole line. */
+  reach: number
   params: unknown
   start: unknown
   step: (state: unknown, moment: Moment, params: unknown) => Step<unknown>
@@ -69,7 +71,7 @@ export function createChecker(exercise: Exercise, ruleSet: RuleSet): Checker {
         const name = nameProposal(proposal)
         let findings = known.get(name)
         if (!findings) {
-          const changed = shareMoments(readLine({ ...line, ...proposal }, setAside), readings)
+          const changed = readLine({ ...line, ...proposal }, setAside)
           findings = sortFindings(rerunAll(lineRunners, traces, readings, changed, barsOf(proposal)))
           known.set(name, findings)
         }
@@ -105,6 +107,7 @@ function startRules(
       level,
       voice,
       readsPair: rule.scope === 'pair',
+      reach: rule.reach ?? Infinity,
       params,
       start: rule.start(exercise, params, voice) as unknown,
       step: rule.step,
@@ -147,10 +150,9 @@ function runAll(runners: readonly Runner[], { pair, solo, isComplete }: Readings
 type Trace = Readonly<{
   states: readonly unknown[]
   breaches: readonly (Breach | null)[]
-  last: Breach | null
 }>
 
-function traceRule(runner: Runner, { pair, solo, isComplete }: Readings): Trace {
+function traceRule(runner: Runner, { pair, solo }: Readings): Trace {
   const states: unknown[] = [runner.start]
   const breaches: (Breach | null)[] = []
   for (const moment of runner.readsPair ? pair : solo) {
@@ -158,12 +160,12 @@ function traceRule(runner: Runner, { pair, solo, isComplete }: Readings): Trace 
     states.push(state)
     breaches.push(breach)
   }
-  return { states, breaches, last: runner.finish(states.at(-1), runner.params, isComplete) }
+  return { states, breaches }
 }
 
 /**
- * Runs every rule again over a changed line, from the first moment that differs until its state is again what it was;
- * from there on it would say what it said before. Keeps the findings that point at one of `bars`.
+ * Runs every rule again over a changed line, from the first moment that differs until it can remember nothing of the
+ * change; from there on it would say what it said before. Keeps the findings that point at one of `bars`.
  */
 function rerunAll(
   runners: readonly Runner[],
@@ -177,71 +179,65 @@ function rerunAll(
   const soloSpan = changedSpan(before.solo, after.solo)
   for (let place = 0; place < runners.length; place += 1) {
     const runner = runners[place] as Runner
+    const { readsPair, step, params } = runner
     const trace = traces[place] as Trace
-    const moments = runner.readsPair ? after.pair : after.solo
-    const span = runner.readsPair ? pairSpan : soloSpan
-    const keep = (breach: Breach | null): void => {
-      if (breach !== null && breach.bars.some((bar) => bars.has(bar))) {
-        findings.push(findingOf(runner, breach))
-      }
-    }
-    for (let index = 0; index < Math.min(span.from, moments.length); index += 1)
-      keep(trace.breaches[index] ?? null)
-    let index = span.from
-    let state = trace.states[index]
-    let isAsBefore = false
-    while (index < moments.length) {
-      isAsBefore = index >= span.to && isSameState(state, trace.states[index])
-      if (isAsBefore) break
-      const next = runner.step(state, moments[index] as Moment, runner.params)
+    const moments = readsPair ? after.pair : after.solo
+    const { from, to } = readsPair ? pairSpan : soloSpan
+    for (let index = 0; index < from; index += 1) keep(findings, runner, trace.breaches[index], bars)
+    const stop = Math.min(to + runner.reach, moments.length)
+    let state = trace.states[from]
+    for (let index = from; index < stop; index += 1) {
+      const next = step(state, moments[index] as Moment, params)
       state = next.state
-      keep(next.breach)
-      index += 1
+      keep(findings, runner, next.breach, bars)
     }
-    for (; index < moments.length; index += 1) keep(trace.breaches[index] ?? null)
-    const isSameEnd = isAsBefore && before.isComplete === after.isComplete
-    keep(
-      isSameEnd
-        ? trace.last
-        : runner.finish(isAsBefore ? trace.states.at(-1) : state, runner.params, after.isComplete),
-    )
+    for (let index = stop; index < moments.length; index += 1) {
+      keep(findings, runner, trace.breaches[index], bars)
+    }
+    const end = stop < moments.length ? trace.states[moments.length] : state
+    keep(findings, runner, runner.finish(end, params, after.isComplete), bars)
   }
   return findings
 }
 
-/** First moment that differs, and the first after it from which both readings go on alike (or the end). */
-function changedSpan(before: readonly Moment[], after: readonly Moment[]): { from: number; to: number } {
-  if (before.length !== after.length) return { from: 0, to: Infinity }
-  let from = 0
-  while (from < after.length && after[from] === before[from]) from += 1
-  let to = after.length
-  while (to > from && after[to - 1] === before[to - 1]) to -= 1
-  return { from, to }
-}
-
-/** Puts the moments of one reading in place of equal ones in another, so that states can be compared by identity. */
-function shareMoments(readings: Readings, others: Readings): Readings {
-  const share = (moments: readonly Moment[], known: readonly Moment[]): readonly Moment[] =>
-    moments.map((moment, index) => {
-      const other = known[index]
-      return other !== undefined && isSameState(moment, other) ? other : moment
-    })
-  return {
-    pair: share(readings.pair, others.pair),
-    solo: share(readings.solo, others.solo),
-    isComplete: readings.isComplete,
+function keep(
+  findings: Finding[],
+  runner: Runner,
+  breach: Breach | null | undefined,
+  bars: ReadonlySet<number>,
+): void {
+  if (breach === null || breach === undefined) return
+  for (const bar of breach.bars) {
+    if (bars.has(bar)) {
+      findings.push(findingOf(runner, breach))
+      return
+    }
   }
 }
 
-/** Equal by identity, or plain objects of identical fields. A false "no" only costs time. */
-function isSameState(a: unknown, b: unknown): boolean {
-  if (a === b) return true
-  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false
-  const left = a as Record<string, unknown>
-  const right = b as Record<string, unknown>
-  for (const field in left) if (left[field] !== right[field]) return false
-  return true
+/**
+ * The first moment that differs, and the first after it from which both readings go on alike. Everything differs where
+ * the readings have unlike lengths, or a rest, over which rules look further back than they say.
+ */
+function changedSpan(before: readonly Moment[], after: readonly Moment[]): { from: number; to: number } {
+  if (before.length !== after.length || hasRest(before) || hasRest(after))
+    return { from: 0, to: after.length }
+  let from = 0
+  while (from < after.length && isSameMoment(after[from] as Moment, before[from] as Moment)) from += 1
+  let to = after.length
+  while (to > from && isSameMoment(after[to - 1] as Moment, before[to - 1] as Moment)) to -= 1
+  return { from, to }
 }
+
+const hasRest = (moments: readonly Moment[]): boolean => moments.some(({ note }) => note === 'rest')
+
+/** True of moments at one place of two readings of equal length; pitches of one name are one object. */
+const isSameMoment = (a: Moment, b: Moment): boolean =>
+  a.note === b.note &&
+  a.bar === b.bar &&
+  a.place === b.place &&
+  a.ticks === b.ticks &&
+  a.isStruck === b.isStruck
 
 const barsOf = (proposal: Proposal): ReadonlySet<number> => new Set(Object.keys(proposal).map(Number))
 

@@ -69,7 +69,7 @@ export const spanArgs = (a: Noted, b: Noted): Breach['args'] => ({
   interval: nameInterval(intervalBetween(a.note, b.note)),
 })
 
-type Fold<State, Params> = Pick<Rule<State, Params>, 'start' | 'step' | 'finish' | 'key'>
+type Fold<State, Params> = Pick<Rule<State, Params>, 'start' | 'step' | 'finish' | 'key' | 'reach'>
 
 export type OneBehind = Readonly<{ frame: Frame; before: Noted | null }>
 
@@ -86,6 +86,7 @@ export const foldPairs = <Params>(
   },
   finish: () => null,
   key: ({ before }) => packPitch(before && before.note),
+  reach: 1,
 })
 
 export type TwoBehind = Readonly<{ frame: Frame; first: Noted | null; before: Noted | null }>
@@ -110,6 +111,7 @@ export const foldTriples = <Params>(
   },
   finish: () => null,
   key: ({ first, before }) => packPitch(first && first.note) * PITCH_ROOM + packPitch(before && before.note),
+  reach: 2,
 })
 
 /** A rule of single notes: judges each note by itself, and remembers nothing. */
@@ -123,4 +125,5 @@ export const foldNotes = <Params>(
   }),
   finish: () => null,
   key: () => 0,
+  reach: 0,
 })

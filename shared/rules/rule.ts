@@ -144,6 +144,11 @@ export type Rule<State, Params> = Readonly<{
    * follows. The bars that a breach points back at may differ.
    */
   key: (state: State) => number
+  /**
+   * How many moments back the state remembers, where that is bounded and nothing rests: 0 for a rule that judges each
+   * moment by itself. Lets the checker stop early when only a few notes have changed. Left out: the whole line.
+   */
+  reach?: number
   explain: Explanation
 }>
 

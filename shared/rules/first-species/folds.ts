@@ -9,7 +9,7 @@ export type NoParams = z.infer<typeof NO_PARAMS>
 
 export const FIRST_SPECIES: ReadonlySet<Species> = new Set([1])
 
-type Fold<State, Params> = Pick<Rule<State, Params>, 'start' | 'step' | 'finish' | 'key'>
+type Fold<State, Params> = Pick<Rule<State, Params>, 'start' | 'step' | 'finish' | 'key' | 'reach'>
 
 /** What a judge is told beside the sonorities. */
 export type Given<Params> = Readonly<{ exercise: Exercise; params: Params; moment: Moment }>
@@ -26,6 +26,7 @@ export function eachSonority<Params>(
     },
     finish: () => null,
     key: () => 0,
+    reach: 0,
   }
 }
 
@@ -50,5 +51,6 @@ export function neighbours<Params>(
     finish: () => null,
     // The cantus note under it is known from the place in the reading.
     key: ({ before }) => packPitch(before && before.note),
+    reach: 1,
   }
 }

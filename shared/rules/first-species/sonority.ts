@@ -1,4 +1,4 @@
-import type { Breach, Exercise, Moment, Position } from '@/shared/rules/rule'
+import type { Breach, Exercise, Moment, Position, Voice } from '@/shared/rules/rule'
 import { directionFrom, stepsFrom, type Direction } from '@/shared/theory/interval'
 import { nameInterval, nameSize } from '@/shared/theory/interval-name'
 import type { Pitch } from '@/shared/theory/pitch'
@@ -76,13 +76,12 @@ export function breachAt(
   args: Breach['args'] = {},
   voices: 'both' | 'line' = 'both',
 ): Breach {
-  return {
-    code,
-    bars: [...new Set(sonorities.map(({ bar }) => bar))],
-    notes: sonorities.flatMap(({ bar, place }) => {
-      const line = { voice: 'line' as const, bar, place }
-      return voices === 'line' ? [line] : [line, { voice: 'cantus' as const, bar, place: 0 }]
-    }),
-    args,
+  const bars: number[] = []
+  const notes: { voice: Voice; bar: number; place: number }[] = []
+  for (const { bar, place } of sonorities) {
+    if (bars[bars.length - 1] !== bar) bars.push(bar)
+    notes.push({ voice: 'line', bar, place })
+    if (voices === 'both') notes.push({ voice: 'cantus', bar, place: 0 })
   }
+  return { code, bars, notes, args }
 }

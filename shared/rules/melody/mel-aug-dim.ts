@@ -78,6 +78,7 @@ export const melAugDim: Rule<State, Params> = {
       [packPitch(before && before.note), 512],
       [before && owesReturn ? 1 + (stepsFrom(owesReturn.note, before.note) > 0 ? 1 : 0) : 0, 3],
     ),
+  reach: 2,
   explain: {
     title: 'No augmented or diminished interval',
     statement: 'A line makes no augmented and no diminished interval between neighbouring notes.',

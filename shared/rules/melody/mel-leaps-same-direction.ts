@@ -102,6 +102,7 @@ export const melLeapsSameDirection: Rule<State, Params> = {
       [packPitch(before && before.note), PITCH_ROOM],
       [owed === null ? 0 : 1, 2],
     ),
+  reach: 3,
   explain: {
     title: 'Two leaps one way',
     statement:

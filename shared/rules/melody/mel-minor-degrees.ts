@@ -67,6 +67,7 @@ export const melMinorDegrees: Rule<State, Params> = {
   },
   finish: () => null,
   key: ({ before }) => pack([packPitch(before && before.note), PITCH_ROOM]),
+  reach: 1,
   explain: {
     title: 'Raised degrees belong to the close',
     statement: 'The raised seventh appears only at the close, the raised sixth only on the way to it.',

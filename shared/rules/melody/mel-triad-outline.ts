@@ -34,6 +34,7 @@ export const melTriadOutline: Rule<State, Params> = {
   },
   finish: () => null,
   key: ({ leapt }) => leapt.reduce((key, { note }) => key * PITCH_ROOM + packPitch(note), 0),
+  reach: 3,
   explain: {
     title: 'No broken chords',
     statement: 'The notes of one triad do not follow each other by leap.',

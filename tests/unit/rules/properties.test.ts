@@ -4,6 +4,7 @@ import { PRESETS } from '@/shared/rules/presets'
 import { readMoments, readVoice } from '@/shared/rules/reading'
 import { RULES } from '@/shared/rules/registry'
 import type { AnyRule, Exercise, Finding, Moment, RuleSet } from '@/shared/rules/rule'
+import type { BarNotes, Line } from '@/shared/theory/note'
 import { anyBars, anyExercise, anyLine, SEED, someBars, without } from './random-score'
 
 const BARS = 8
@@ -186,3 +187,42 @@ describe.each(RULES.map((rule) => [rule.id, rule] as const))('the keys of %s', (
     expect(met).toBeGreaterThan(0)
   })
 })
+
+const REACHING = RULES.filter(({ reach }) => reach !== undefined)
+
+test.each(REACHING.map((rule) => [rule.id, rule] as const))(
+  '%s looks no further back than it says',
+  (_id, rule) => {
+    const reach = rule.reach as number
+    const params: unknown = rule.params.parse({})
+    const run = (exercise: Exercise, moments: readonly Moment[]) => {
+      let state: unknown = rule.start(exercise, params, 'line')
+      return moments.map((moment) => {
+        const next = rule.step(state, moment, params)
+        state = next.state
+        return next.breach
+      })
+    }
+    fc.assert(
+      fc.property(
+        anyExercise(BARS),
+        fewNotes,
+        fewNotes,
+        fc.integer({ min: 1, max: BARS - 1 }),
+        (exercise, one, other, changedFrom) => {
+          // Two lines that differ up to a bar, and are the same from there on.
+          const isEarly = ([bar]: [string, BarNotes]): boolean => Number(bar) <= changedFrom
+          const changed: Line = Object.fromEntries([
+            ...Object.entries(other).filter(isEarly),
+            ...Object.entries(one).filter((entry) => !isEarly(entry)),
+          ])
+          const read = (line: Line) =>
+            rule.scope === 'pair' ? readMoments(exercise, line) : readVoice(BARS, line)
+          const [first, second] = [run(exercise, read(one)), run(exercise, read(changed))]
+          expect(second.slice(changedFrom + reach)).toEqual(first.slice(changedFrom + reach))
+        },
+      ),
+      RUNS,
+    )
+  },
+)
