@@ -37,6 +37,17 @@ export class ListJournal {
     })
   }
 
+  /** As the primary key does, refuses a change whose place is taken. */
+  append(changes: readonly JournalChange[], entries: readonly JournalEntry[]): void {
+    for (const { document, ordinal } of changes) {
+      if (this.changes.some((other) => other.document === document && other.ordinal === ordinal)) {
+        throw new Error(`${document} has a change ${ordinal} already`)
+      }
+    }
+    this.changes.push(...changes)
+    this.entries.push(...entries)
+  }
+
   docOf(name: string): Y.Doc {
     const doc = new Y.Doc()
     for (const { document, bytes } of this.changes) if (document === name) Y.applyUpdate(doc, bytes)
@@ -199,8 +210,7 @@ export class SimulatedHouse {
     const batch = this.room.beginBeat(this.#nowMs)
     if (!batch) return
     if (outcome !== 'lost') {
-      this.journal.changes.push(...batch.journalChanges())
-      this.journal.entries.push(...batch.entries)
+      this.journal.append(batch.journalChanges(), batch.entries)
     }
     if (outcome === 'kept') return this.room.endBeat(batch)
     this.room.loseBeat('database')
