@@ -1,4 +1,4 @@
-import { readFileSync } from 'node:fs'
+import { readdirSync, readFileSync, readlinkSync } from 'node:fs'
 
 export function isProcessAlive(pid: number): boolean {
   try {
@@ -9,13 +9,27 @@ export function isProcessAlive(pid: number): boolean {
   }
 }
 
-/** Whether a process number belongs to a PostgreSQL server now. After a restart of the machine it may be anyone's. */
-export function isServerProcess(pid: number): boolean {
+/** Whether any process works in a directory, as every process of a PostgreSQL server does in its data directory. */
+function isWorkedIn(directory: string): boolean {
+  return readdirSync('/proc').some((entry) => {
+    try {
+      return /^\d+$/.test(entry) && readlinkSync(`/proc/${entry}/cwd`) === directory
+    } catch {
+      return false
+    }
+  })
+}
+
+/**
+ * Whether a process number that a server left behind is another program's now, as after a restart of the machine. A number
+ * that is nobody's, and a server that was killed while its children live, are for PostgreSQL's own check to judge.
+ */
+export function isPidOfAnother(pid: number, dataDirectory: string): boolean {
   if (!isProcessAlive(pid)) return false
   try {
-    return readFileSync(`/proc/${pid}/cmdline`, 'utf8').includes('postgres')
+    return !readFileSync(`/proc/${pid}/cmdline`, 'utf8').includes('postgres') && !isWorkedIn(dataDirectory)
   } catch {
-    // A system without /proc: leave it to the server's own check.
-    return true
+    // A system without /proc tells us nothing.
+    return false
   }
 }

@@ -1,15 +1,17 @@
 import { chownSync, closeSync, openSync, readFileSync, rmSync, truncateSync } from 'node:fs'
 import path from 'node:path'
+import { setTimeout as wait } from 'node:timers/promises'
 import { ClusterError } from './cluster-error'
 import type { ClusterPaths } from './cluster-paths'
 import { diskFull, isDiskFull } from './create-cluster'
 import { findFreePort } from './find-free-port'
-import { isServerProcess } from './process-alive'
+import { isPidOfAnother } from './process-alive'
 import { runCommand } from './run-command'
 import type { ServerUser } from './server-user'
 
 const START_PATIENCE_SECONDS = 60
-const PORT_TRIES = 3
+const START_TRIES = 5
+const RETRY_MS = 500
 const TOLD_LOG_LINES = 12
 
 /** Loopback only, by password only, no socket file (whose path may be too long). */
@@ -24,12 +26,12 @@ const SETTINGS = {
 /** For test clusters: quicker, and safe against the end of a process, though not of the machine. */
 const FORGETFUL_SETTINGS = { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'off' }
 
-/** A server that was killed leaves its process number, which may be another program's by now. */
+/** A number that is another program's would keep the server from starting for ever. */
 function removeStalePidFile(data: string): void {
   const file = path.join(data, 'postmaster.pid')
   try {
     const pid = Number(readFileSync(file, 'utf8').split('\n')[0])
-    if (!isServerProcess(pid)) rmSync(file, { force: true })
+    if (isPidOfAnother(pid, data)) rmSync(file, { force: true })
   } catch {
     // There is none.
   }
@@ -75,8 +77,11 @@ export async function startServer(
     )
     if (exitCode === 0) return port
     const log = readFileSync(paths.log, 'utf8')
+    if (tries >= START_TRIES) throw problemIn(log, paths.data)
     // Somebody took the port between our look and the server's.
-    if (/Address already in use/i.test(log) && tries < PORT_TRIES) wanted = 0
+    if (/Address already in use/i.test(log)) wanted = 0
+    // The children of a server that was killed notice it within moments, and end.
+    else if (/pre-existing shared memory block|lock file .* already exists/i.test(log)) await wait(RETRY_MS)
     else throw problemIn(log, paths.data)
   }
 }

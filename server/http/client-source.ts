@@ -18,3 +18,12 @@ export function sourceOf(request: Pick<Request, 'ip'>): string {
     ? `${groups.join(':')}::/64`
     : `${groups.slice(0, 4).join(':')}::/64`
 }
+
+/**
+ * The origin to write into a link for other machines: the one under which the asking page was reached, where it is one of
+ * ours. A teacher who came by the address of the local network sends phones and projectors there.
+ */
+export const originFor = (
+  request: Request,
+  { publicUrl, allowedOrigins }: Readonly<{ publicUrl: string; allowedOrigins: readonly string[] }>,
+): string => allowedOrigins.find((origin) => origin === request.headers.origin) ?? publicUrl

@@ -11,6 +11,7 @@ import { courseFor } from '@/server/courses/access'
 import { toInvitation } from '@/server/courses/course-reply'
 import { INVITATION_MS, invitationUrl, inviteMany } from '@/server/courses/invite'
 import { found, Refused } from '@/server/errors/refused'
+import { originFor } from '@/server/http/client-source'
 import { createRouter } from '@/server/http/create-router'
 import { courses } from '@/shared/api/courses'
 import { askerOf, type Context } from './context'
@@ -53,7 +54,7 @@ export function createInvitationRoutes(context: Context) {
       invitedBy: person.id,
       expiresAt: new Date(Date.now() + INVITATION_MS),
     })
-    return { invitation: toInvitation(invitation, invitationUrl(config.publicUrl, token)) }
+    return { invitation: toInvitation(invitation, invitationUrl(originFor(asked.request, config), token)) }
   })
 
   on(courses.withdrawInvitation, async (asked) => {

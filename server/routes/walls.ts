@@ -3,6 +3,7 @@ import { personOf } from '@/server/auth/asker'
 import { createToken, hashToken } from '@/server/auth/token'
 import { readWallCookie, WALL_COOKIE, WALL_COOKIE_MS, wallCookieOptions } from '@/server/auth/wall-cookie'
 import { Refused } from '@/server/errors/refused'
+import { originFor } from '@/server/http/client-source'
 import { createRouter } from '@/server/http/create-router'
 import { standingToAct } from '@/server/lessons/access'
 import { createLinkId, readWallLink, signWallLink, WALL_LINK_MS } from '@/server/lessons/wall-link'
@@ -20,7 +21,7 @@ export function createWallRoutes(context: Context) {
     const expiresAt = new Date(Date.now() + WALL_LINK_MS)
     const claim = { lessonId: lesson.id, linkId: createLinkId(), madeBy: personOf(asker).id, expiresAt }
     return {
-      url: `${config.publicUrl}/wall/${signWallLink(claim, secret)}`,
+      url: `${originFor(asked.request, config)}/wall/${signWallLink(claim, secret)}`,
       expiresAt: expiresAt.toISOString(),
     }
   })

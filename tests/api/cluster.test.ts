@@ -129,6 +129,19 @@ describe('the cluster', () => {
     expect(await answers(cluster.urlOf('postgres'))).toBe(true)
   })
 
+  it('lives elsewhere where the server’s user cannot get to the project, and is found there again', async () => {
+    chmodSync(home, 0o700)
+    directory = path.join(home, 'inner', 'postgres')
+    const first = await start()
+    const isElsewhere = !first.dataDirectory.startsWith(home)
+    expect(isElsewhere).toBe(process.getuid?.() === 0)
+    await first.release()
+    const second = await start()
+    expect(second.dataDirectory).toBe(first.dataDirectory)
+    await second.release()
+    if (isElsewhere) rmSync(path.dirname(first.dataDirectory), { recursive: true, force: true })
+  })
+
   it('of another version is called stale, with what to do', async () => {
     await (await start()).release()
     writeFileSync(path.join(directory, 'PG_VERSION'), '9\n')
