@@ -325,6 +325,7 @@ export const CASES: Readonly<Record<string, readonly Row[]>> = {
     ['A4 F4', 'E3 F3', [2], 'the cantus leaps down on the line', BELOW],
     ['E3 F3', 'G4 F4', [], 'the upper voice steps'],
     ['D3 F3', 'A4 F4', [], 'the lower voice leaps'],
+    ['E3 F3', 'A4 F4', [2], 'on the first beat of a bar', { params: { scope: 'accented' } }],
     ['E3 F3', 'E4 C4', [], 'a fifth'],
     ['E3 F3', 'E4 C4', [2], 'a fifth, where fifths count', { params: { fifths: true } }],
     ['E3 F3 E3', 'G4 F4 G4', [2], 'any closing in', { params: { form: 'converging' } }],
@@ -342,6 +343,7 @@ export const CASES: Readonly<Record<string, readonly Row[]>> = {
     [CANTUS, 'D4 F4 C#5 D5', [2], 'inside'],
     [CANTUS, 'D4 F4 E4 D4', [2, 3], 'inside, below', BELOW],
     [CANTUS, 'D5 F5 C#5 D5', [], 'octaves are no unisons'],
+    ['D4 E4 D4 D4', 'D5 Fb4 D#4 D5', [], 'neither one sound spelled twice nor one letter altered'],
   ],
   'unison-leap': [
     ['D4 C4', 'D4 E4', [], 'out by step'],
@@ -486,6 +488,8 @@ export const CASES: Readonly<Record<string, readonly Row[]>> = {
       'three notes beyond the preferred tenth',
       { params: { preferred: 10 } },
     ],
+    ['D4 D4 D4', 'G5 G5 G5', [3], 'an eleventh is beyond a tenth', { params: { preferred: 10 } }],
+    ['D4 D4 D4', 'F5 F5 F5', [], 'a tenth is not', { params: { preferred: 10 } }],
     ['D4 D4 D4 D4', 'A5 A5 F5 A5', [], 'two notes beyond it', { params: { preferred: 10 } }],
   ],
   'climax-coincide': [

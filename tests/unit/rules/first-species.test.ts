@@ -148,6 +148,35 @@ function saidAfter(rule: AnyRule, example: Example, cut: number): readonly strin
   return said
 }
 
+/** What a rule says of a row: its messages, with `?` behind a remark. */
+const saidOf = (id: string, cantus: string, line: string, params: Readonly<Record<string, unknown>>) => {
+  const rule = FIRST_SPECIES_RULES.find((one) => one.id === id)
+  if (!rule) throw new Error(`There is no rule called ${id}`)
+  return judge(rule, [cantus, line, [], '', { params }]).map(
+    ({ code, isRemark }) => code + (isRemark ? '?' : ''),
+  )
+}
+
+describe('a remark within a law', () => {
+  test.each([
+    ['s1-open-above', 'D4', 'D4', { set: ['fifth'], secondBest: ['unison'] }, ['second-best?']],
+    ['s1-open-above', 'D4', 'D5', { set: ['fifth'], secondBest: ['unison'] }, ['not-allowed']],
+    ['dist-max', 'D4 D4', 'F5 G5', { preferred: 10, beyondPreferred: 0 }, ['far?']],
+    ['dist-max', 'D4 D4', 'F5 B5', { preferred: 10, beyondPreferred: 0 }, ['too-far']],
+    ['rel-tritone', 'F4 G4', 'A4 B4', { bothStep: 'remark' }, ['against?']],
+    ['rel-tritone', 'F4 G4', 'A4 B4', { bothStep: 'judged' }, ['against']],
+    ['rel-tritone', 'F4 D4', 'A4 B4', { bothStep: 'remark' }, ['against']],
+  ] as const)('%s: %s against %s', (id, cantus, line, params, said) => {
+    expect(saidOf(id, cantus, line, params)).toEqual(said)
+  })
+})
+
+test('a repetition is told as what it is: none allowed, one too many, too long a row', () => {
+  expect(saidOf('s1-repeat', 'D4 F4', 'A4 A4', { maxRepeats: 0 })).toEqual(['never'])
+  expect(saidOf('s1-repeat', 'D4 F4 E4', 'A4 A4 A4', { maxRepeats: 1 })).toEqual(['too-many'])
+  expect(saidOf('s1-repeat', 'D4 F4 E4', 'A4 A4 A4', { maxRepeats: 9, maxInRow: 2 })).toEqual(['in-a-row'])
+})
+
 describe('bars set aside', () => {
   const lawOf = (id: string, params: Readonly<Record<string, unknown>> = {}) => ({
     id: 'one',
