@@ -1,15 +1,17 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
 import { ladderPitches, rungOfLetter } from '@/components/ladder/rungs'
 import { nextReadBar } from '@/components/lesson/desk-bars'
+import { identityOfLine, lineWithout } from '@/components/lesson/line-with'
+import type { LessonView } from '@/components/lesson/lesson-view'
 import { deskScoreOf } from '@/components/lesson/score-of'
 import { firstPitch } from '@/components/lesson/spoken'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { useWords } from '@/components/words'
 import type { BoardState, SheetState } from '@/shared/board'
-import type { BarNotes } from '@/shared/theory/note'
+import type { BarNotes, Line } from '@/shared/theory/note'
 import { comparePitches, parsePitch, type PitchName } from '@/shared/theory/pitch'
 import { barInHand, readDesk } from './desk-model'
-import { readLadder, wholeNote, type Naming } from './ladder-model'
+import { placeOnLadder, readRungs, wholeNote, type Naming } from './ladder-model'
 
 /** How the desk writes on the student's own sheet. */
 export type SheetPen = Readonly<{
@@ -43,7 +45,10 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     )
   }, [releasedKey])
 
-  const score = useMemo(() => deskScoreOf(view, desk.own, desk.findings ?? NO_FINDINGS), [view, desk])
+  const score = useMemo(
+    () => deskScoreOf(view, desk.own, desk.findings ?? NO_FINDINGS, hand),
+    [view, desk, hand],
+  )
 
   const written = firstPitch(desk.own[hand])
   const pitches = useMemo(() => {
@@ -53,16 +58,13 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     return isMissing ? [...ladder, written].sort((a, b) => comparePitches(b, a)) : ladder
   }, [view.exercise, isChromatic, written])
   const isOpen = bar?.kind === 'open'
-  const ladder = useMemo(
-    () =>
-      isOpen
-        ? readLadder(
-            { view, own: desk.own, bar: hand, pitches, judge, naming, isTold: view.stage.showsFindings },
-            words,
-          )
-        : null,
-    [isOpen, view, desk.own, hand, pitches, judge, naming, words],
+  const { isTold, elsewhere } = useSteady(view, desk.own, hand)
+  const rungs = useMemo(
+    () => (isOpen ? readRungs({ view, elsewhere, bar: hand, pitches, judge, naming, isTold }, words) : null),
+    [isOpen, view, elsewhere, hand, pitches, judge, naming, isTold, words],
   )
+  const places = useMemo(() => placeOnLadder(view, desk.own, hand, pitches), [view, desk.own, hand, pitches])
+  const ladder = useMemo(() => rungs && { rungs, ...places }, [rungs, places])
 
   const propose = useCallback(
     (at: number, name: PitchName) => {
@@ -76,7 +78,10 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     (index: number) => {
       const pitch = pitches[index]
       const state = view.bars[hand]
-      if (pitch && state) pen.write(hand, wholeNote(pitch), state.round)
+      if (!pitch || !state) return
+      // A bar that was written in stays in hand when it freezes, or the desk would leave it for the first bar.
+      setChosen(hand)
+      pen.write(hand, wholeNote(pitch), state.round)
     },
     [pitches, view, hand, pen],
   )
@@ -123,6 +128,19 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     isChromatic,
     setChromatic,
   }
+}
+
+/** The notes in the other bars, the same object until one of them changes: a tap in this bar asks nothing anew. */
+function useSteady(
+  view: LessonView,
+  own: Line,
+  hand: number,
+): Readonly<{ isTold: boolean; elsewhere: Line }> {
+  const others = lineWithout(own, [hand])
+  const identity = identityOfLine(others)
+  // eslint-disable-next-line react-hooks/exhaustive-deps -- equal texts are equal notes
+  const elsewhere = useMemo(() => others, [identity, hand])
+  return { isTold: view.stage.showsFindings, elsewhere }
 }
 
 export type DeskModel = ReturnType<typeof useDesk>

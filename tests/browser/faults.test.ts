@@ -6,9 +6,11 @@ import { lessons } from '@/shared/api/lessons'
 import { ask } from './support/ask'
 import { keepLastPictures } from './support/keep-picture'
 import { launchChromium } from './support/chromium'
+import { layLine, type CutLine } from './support/cut-line'
 import { deskFace, type DeskFace } from './support/desk-face'
 import { lecternFace, type LecternFace } from './support/lectern-face'
 import { openLesson } from './support/prepare-lesson'
+import { findFreePort } from '@/db/cluster/find-free-port'
 import { openSchool, type School } from './support/school'
 import { openDevice } from './support/screens'
 import { findPerson, signIn } from './support/sign-in'
@@ -18,9 +20,14 @@ jest.setTimeout(90_000)
 let school: School
 let browser: Browser
 let teacher: BrowserContext
+/** The wire of the phones that will be out of reach. */
+let line: CutLine
 
 beforeAll(async () => {
-  ;[school, browser] = await Promise.all([openSchool(), launchChromium()])
+  const linePort = await findFreePort()
+  const environment = { ALLOWED_ORIGINS: `http://localhost:${linePort}` }
+  ;[school, browser] = await Promise.all([openSchool(environment), launchChromium()])
+  line = await layLine(Number(new URL(school.origin).port), linePort)
   teacher = await openDevice(browser, school.origin, 'laptop')
   await signIn(teacher, school, findPerson(school, 'teacher'))
 }, 120_000)
@@ -28,6 +35,7 @@ beforeAll(async () => {
 afterAll(async () => {
   await keepLastPictures(browser, 'faults')
   await browser?.close()
+  await line?.close()
   await school?.close()
 })
 
@@ -35,9 +43,10 @@ afterAll(async () => {
 async function enterAsGuest(
   code: string,
   name: string,
+  origin: string = school.origin,
 ): Promise<{ context: BrowserContext; desk: DeskFace; lessonId: string }> {
-  const context = await openDevice(browser, school.origin, 'phone')
-  const { lessonId } = await ask(context.request, school.origin, lessons.join, { body: { code, name } })
+  const context = await openDevice(browser, origin, 'phone')
+  const { lessonId } = await ask(context.request, origin, lessons.join, { body: { code, name } })
   const page = await context.newPage()
   await page.goto(`/lessons/${lessonId}/desk`)
   return { context, desk: deskFace(page), lessonId }
@@ -58,10 +67,11 @@ const isOn = (page: Page, bar: number, pitch: string) =>
 
 test('a phone out of reach says so, keeps what is written on it, and sends it when it is back', async () => {
   const { lectern, code } = await begin('Out of reach')
-  const { context, desk } = await enterAsGuest(code, 'Mirela')
+  const { desk } = await enterAsGuest(code, 'Mirela', line.origin)
   await desk.heading(deskWords.titleReleased([9, 10, 11]))
 
-  await context.setOffline(true)
+  await desk.sees(/\d+ here/)
+  line.cut()
   await desk.sees(lessonWords.connection.offline)
   await desk.propose(9, 'D, major sixth above F')
   await desk.page.getByRole('status', { name: deskWords.keptSpoken.waiting }).waitFor()
@@ -70,21 +80,22 @@ test('a phone out of reach says so, keeps what is written on it, and sends it wh
     .getByText(/Nobody has offered/)
     .waitFor()
 
-  await context.setOffline(false)
+  line.mend()
   await desk.kept()
   await lectern.room(9, 11).getByText('Mirela').waitFor()
 })
 
 test('a phone that is closed before it could send finds its note again when it comes back', async () => {
   const { lectern, code, lessonId } = await begin('Closed before it could send')
-  const { context, desk } = await enterAsGuest(code, 'Jun')
+  const { context, desk } = await enterAsGuest(code, 'Jun', line.origin)
   await desk.heading(deskWords.titleReleased([9, 10, 11]))
-  await context.setOffline(true)
+  await desk.sees(/\d+ here/)
+  line.cut()
   await desk.sees(lessonWords.connection.offline)
   await desk.propose(10, 'B, fifth above E')
   await desk.page.close()
 
-  await context.setOffline(false)
+  line.mend()
   const page = await context.newPage()
   await page.goto(`/lessons/${lessonId}/desk`)
   const again = deskFace(page)
@@ -137,15 +148,16 @@ test('a server killed in the middle of a lesson comes back with everything it ac
 
 test('a bar frozen while a phone was away keeps what was written as a draft, and the phone says so', async () => {
   const { lectern, code } = await begin('Frozen meanwhile')
-  const { context, desk } = await enterAsGuest(code, 'Noor')
+  const { desk } = await enterAsGuest(code, 'Noor', line.origin)
   await desk.heading(deskWords.titleReleased([9, 10, 11]))
-  await context.setOffline(true)
+  await desk.sees(/\d+ here/)
+  line.cut()
   await desk.sees(lessonWords.connection.offline)
   await desk.propose(9, 'D, major sixth above F')
   await lectern.button('Freeze 9–11').click()
   await lectern.button('Release 9–11').waitFor()
 
-  await context.setOffline(false)
+  line.mend()
   await desk.sees(deskWords.closed.draft('D'))
   await desk.kept()
   await lectern.button('Release 9–11').click()
