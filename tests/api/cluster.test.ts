@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process'
 import {
+  chmodSync,
   existsSync,
   mkdirSync,
   mkdtempSync,
@@ -21,6 +22,8 @@ import { startCluster, type Cluster } from '@/db/cluster/start-cluster'
 let home: string
 let directory: string
 const clusters: Cluster[] = []
+/** Directories beside `home` to clear away. */
+const litter: string[] = []
 const start = async () => {
   const cluster = await startCluster(directory, { isForgetful: true })
   clusters.push(cluster)
@@ -33,7 +36,7 @@ beforeEach(() => {
 })
 afterEach(async () => {
   for (const cluster of clusters.splice(0)) await cluster.release()
-  rmSync(home, { recursive: true, force: true })
+  for (const place of [home, ...litter.splice(0)]) rmSync(place, { recursive: true, force: true })
 })
 
 const answers = async (url: string): Promise<boolean> => {
@@ -138,8 +141,7 @@ describe('the cluster', () => {
     await first.release()
     const second = await start()
     expect(second.dataDirectory).toBe(first.dataDirectory)
-    await second.release()
-    if (isElsewhere) rmSync(path.dirname(first.dataDirectory), { recursive: true, force: true })
+    if (isElsewhere) litter.push(path.dirname(first.dataDirectory))
   })
 
   it('of another version is called stale, with what to do', async () => {
