@@ -4,6 +4,7 @@ import { MEASURE_PX, space, useWidth } from '@/components/theme'
 import { Heading } from './heading'
 import { LinkText } from './link-text'
 import { Txt } from './txt'
+import { useArrival } from './use-arrival'
 import { usePageMeasure, WIDEST_PX } from './use-page-measure'
 import { useTitle } from './use-title'
 
@@ -24,6 +25,9 @@ export type PageProps = Readonly<{
   children: ReactNode
 }>
 
+/** Where the skip link leads. */
+const MAIN_ID = 'page'
+
 /** The sheet that a page is written on: margins, heading, and the tab's name. */
 export function Page({
   title,
@@ -36,6 +40,7 @@ export function Page({
   children,
 }: PageProps) {
   useTitle(title)
+  useArrival(MAIN_ID)
   useLayoutEffect(() => {
     document.documentElement.classList.add('scrolls')
     return () => document.documentElement.classList.remove('scrolls')
@@ -45,7 +50,7 @@ export function Page({
   return (
     <View
       role="main"
-      id="page"
+      id={MAIN_ID}
       style={{
         width: '100%',
         maxWidth: (width === 'text' ? MEASURE_PX : WIDEST_PX) + 2 * marginPx,
