@@ -22,7 +22,7 @@ export function attachRealtime(options: RealtimeOptions): Promise<Realtime> {
     channel.endMember(lessonId, memberId)
     channel.presenceOf(lessonId).remove(memberId)
     channel.tellPresence(lessonId)
-    channel.tellLeaders(lessonId, 'roster')
+    channel.tellRoster(lessonId)
   }
 
   const channel: ClassChannel = new ClassChannel({
@@ -88,13 +88,14 @@ export function attachRealtime(options: RealtimeOptions): Promise<Realtime> {
       channel.tellLesson(lessonId, 'door')
       refresh(lessonId).catch((error: unknown) => log.error({ err: error, lessonId }, 'lesson not refreshed'))
     },
+    rosterChanged: (lessonId) => channel.tellRoster(lessonId),
     memberChanged: async (lessonId, memberId) => {
       const member = await findMember(lessonId, memberId)
       if (!member || member.isRemoved) return sendOut(lessonId, memberId)
       rooms.peek(lessonId)?.closeWhere((identity) => identity.memberId === memberId, CLOSE.restarting)
       channel.tellMember(lessonId, memberId, 'role')
       channel.endMember(lessonId, memberId)
-      channel.tellLeaders(lessonId, 'roster')
+      channel.tellRoster(lessonId)
     },
     sessionEnded: (sessionId) => {
       for (const room of rooms.all()) {

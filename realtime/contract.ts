@@ -41,8 +41,10 @@ export type RealtimeOptions = Readonly<{
 export type Realtime = Readonly<{
   /** A lesson was ended or removed: says so to everyone in it and closes its rooms. */
   lessonEnded: (lessonId: string) => Promise<void>
-  /** Door, title or code changed. */
+  /** Door, title or code changed: everyone in the lesson asks again. */
   lessonChanged: (lessonId: string) => void
+  /** Somebody new entered: told to those who lead, and gathered, for a class enters within seconds. */
+  rosterChanged: (lessonId: string) => void
   /** A member's role or standing changed: its connections are identified again. */
   memberChanged: (lessonId: string, memberId: string) => Promise<void>
   /** A login or wall session ended. */

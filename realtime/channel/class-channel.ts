@@ -55,6 +55,7 @@ export class ClassChannel {
   readonly #io: Server<ClientEvents, ChannelEvents, Record<string, never>, SocketData>
   readonly #presence = new Map<string, Presence>()
   readonly #toTell = new Map<string, NodeJS.Timeout>()
+  readonly #rosters = new Map<string, NodeJS.Timeout>()
 
   constructor(options: ClassChannelOptions) {
     this.#options = options
@@ -215,8 +216,15 @@ export class ClassChannel {
     this.#io.to(GROUP.lesson(lessonId)).emit('lesson', { kind })
   }
 
-  tellLeaders(lessonId: string, kind: Parameters<ChannelEvents['lesson']>[0]['kind']): void {
-    this.#io.to(GROUP.leaders(lessonId)).emit('lesson', { kind })
+  /** Tells those who lead, soon, that there are other members. */
+  tellRoster(lessonId: string): void {
+    if (this.#rosters.has(lessonId)) return
+    const timer = setTimeout(() => {
+      this.#rosters.delete(lessonId)
+      this.#io.to(GROUP.leaders(lessonId)).emit('lesson', { kind: 'roster' })
+    }, PRESENCE_MS)
+    timer.unref()
+    this.#rosters.set(lessonId, timer)
   }
 
   tellMember(lessonId: string, memberId: string, kind: Parameters<ChannelEvents['lesson']>[0]['kind']): void {
@@ -238,7 +246,7 @@ export class ClassChannel {
 
   /** Lets go of every socket; the HTTP server is its owner's to close. */
   close(): void {
-    for (const timer of this.#toTell.values()) clearTimeout(timer)
+    for (const timer of [...this.#toTell.values(), ...this.#rosters.values()]) clearTimeout(timer)
     this.#io.disconnectSockets(true)
     this.#io.engine.close()
   }

@@ -60,7 +60,7 @@ export function createJoinRoutes(context: Context) {
       const standing = found(await findStanding(db, lesson.id, { person, wall: null }))
       const entered = await enterLesson(db, standing, person)
       if (!entered.ok) throw new Refused(ENTRY_ERRORS[entered.reason])
-      if (!standing.member) context.realtime().lessonChanged(lesson.id)
+      if (!standing.member) context.realtime().rosterChanged(lesson.id)
       return { lessonId: lesson.id, memberId: found(entered.value.memberId), name: entered.value.name }
     }
 
@@ -84,7 +84,7 @@ export function createJoinRoutes(context: Context) {
     )
     if (made === 'full') throw new Refused('lesson-full')
     if (made === 'gone') throw new Refused('code-unknown')
-    context.realtime().lessonChanged(lesson.id)
+    context.realtime().rosterChanged(lesson.id)
     return { lessonId: lesson.id, memberId: made.id, name: made.name }
   })
 

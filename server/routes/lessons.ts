@@ -130,7 +130,7 @@ export function createLessonRoutes(context: Context) {
     const standing = await standingFor(context, asker, asked.params.lessonId)
     const entered = await enterLesson(db, standing, asker.person)
     if (!entered.ok) throw new Refused(ENTRY_ERRORS[entered.reason])
-    if (!standing.member && entered.value.memberId) context.realtime().lessonChanged(standing.lesson.id)
+    if (!standing.member && entered.value.memberId) context.realtime().rosterChanged(standing.lesson.id)
     return { lesson: toLesson(standing.lesson, standing.role), ...entered.value }
   })
 
