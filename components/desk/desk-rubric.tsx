@@ -3,13 +3,14 @@ import { View } from 'react-native'
 import { RubricLine } from '@/components/lesson/rubric-line'
 import { rubricOf } from '@/components/lesson/rubrics'
 import { space, useTheme } from '@/components/theme'
-import { Txt } from '@/components/ui'
+import { Lozenge, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Finding } from '@/shared/rules'
 import { findingsAt } from './desk-model'
 
 /** What the rules say of the bar in hand, then of the rest, then the task. */
 export function DeskRubric({
+  notices,
   findings,
   hand,
   released,
@@ -17,6 +18,8 @@ export function DeskRubric({
   prompt,
   heightPx,
 }: Readonly<{
+  /** What hinders the work: out of touch, not opened yet. They come first, and in this place, so that they move nothing. */
+  notices: readonly string[]
   /** Null while the teacher keeps findings back. */
   findings: readonly Finding[] | null
   hand: number
@@ -74,6 +77,16 @@ export function DeskRubric({
           outlineOffset: -3,
         }}
       >
+        {notices.map((notice) => (
+          <View key={notice} style={{ flexDirection: 'row', gap: space.small }}>
+            <View style={{ paddingTop: 5 }}>
+              <Lozenge kind="hollow" tone="orpiment" />
+            </View>
+            <Txt kind="note" tone="orpiment" style={{ flex: 1, minWidth: 0 }}>
+              {notice}
+            </Txt>
+          </View>
+        ))}
         {rubrics.length > 0 ? (
           <>
             {rubrics.map(({ rubric, isHere }) => (

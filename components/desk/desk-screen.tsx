@@ -48,7 +48,7 @@ export function DeskScreen({ lessonId }: Readonly<{ lessonId: string }>) {
       pen={pen}
       kept={view.kept}
       here={view.connection === 'live' && view.presence.here > 0 ? view.presence.here : null}
-      isOffline={view.connection !== 'live'}
+      isOffline={view.connection === 'offline'}
       hindrance={view.hindrance}
       isPrepared={lesson.status === 'prepared'}
       isHandUp={hand.isUp}

@@ -1,4 +1,4 @@
-import { useCallback, useMemo, useState } from 'react'
+import { useCallback, useDeferredValue, useMemo, useState } from 'react'
 import { useWindowDimensions, View } from 'react-native'
 import { lineWith } from '@/components/lesson/line-with'
 import { PlayingScore } from '@/components/lesson/playing-score'
@@ -7,7 +7,7 @@ import { speakScore } from '@/components/lesson/spoken'
 import { useWholeWindow } from '@/components/lesson/use-whole-window'
 import { usePlayer, useStopOnLeave } from '@/components/sound'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { Notice, Txt, useTitle } from '@/components/ui'
+import { Txt, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { BoardState, SheetState } from '@/shared/board'
 import { DEFAULT_TEMPO } from '@/shared/playback'
@@ -17,6 +17,7 @@ import { DeskHeader, type KeptState } from './desk-header'
 import { DeskLadder } from './desk-ladder'
 import { DeskRubric } from './desk-rubric'
 import { DeskSettings } from './desk-settings'
+import { SteadyHeight } from './steady-height'
 import { useDesk, type SheetPen } from './use-desk'
 
 const RUBRIC_PX = 92
@@ -57,7 +58,12 @@ export function Desk(props: DeskProps) {
   const { view, desk, hand, pitches, take } = model
 
   const read = useMemo(() => lineWith(view.line, desk.own), [view, desk])
-  const sentences = useMemo(() => speakScore(view, read, desk.findings, words), [view, read, desk, words])
+  // Read, not looked at: it may come after the picture.
+  const later = useDeferredValue(desk)
+  const sentences = useMemo(
+    () => speakScore(view, lineWith(view.line, later.own), later.findings, words),
+    [view, later, words],
+  )
   const { play, strike } = player
   const hear = useCallback(() => {
     const { cantus } = view.written
@@ -100,8 +106,15 @@ export function Desk(props: DeskProps) {
       accessibilityLabel={words.desk.scoreLabel(props.title)}
     />
   )
+  const notices = [
+    props.isPrepared ? words.desk.prepared : null,
+    props.hindrance ? words.lesson.hindrance[props.hindrance] : null,
+    props.isOffline ? words.lesson.connection.offline : null,
+    player.problem,
+  ].filter((notice) => notice !== null)
   const rubric = (
     <DeskRubric
+      notices={notices}
       findings={desk.findings}
       hand={hand}
       released={view.released}
@@ -109,14 +122,6 @@ export function Desk(props: DeskProps) {
       prompt={view.stage.prompt}
       heightPx={isWide ? null : height < LOW_SCREEN_PX ? LOW_RUBRIC_PX : RUBRIC_PX}
     />
-  )
-  const notices = (
-    <>
-      {props.isPrepared ? <Notice kind="note" title={words.desk.prepared} /> : null}
-      {props.hindrance ? <Notice kind="note" title={words.lesson.hindrance[props.hindrance]} /> : null}
-      {props.isOffline ? <Notice kind="note" title={words.lesson.connection.offline} /> : null}
-      {player.problem ? <Notice kind="note" title={player.problem} /> : null}
-    </>
   )
   const ladder = <DeskLadder model={model} onHearRung={hearRung} onSettings={() => setSetting(true)} />
   const footer = (
@@ -149,7 +154,6 @@ export function Desk(props: DeskProps) {
               {score}
             </View>
             {rubric}
-            {notices}
           </View>
           <View style={{ width: SIDE_PX, borderLeftWidth: 1, borderColor: colors.hairline }}>
             {ladder}
@@ -158,9 +162,8 @@ export function Desk(props: DeskProps) {
         </View>
       ) : (
         <>
-          {score}
+          <SteadyHeight>{score}</SteadyHeight>
           {rubric}
-          {notices}
           {ladder}
           {footer}
         </>

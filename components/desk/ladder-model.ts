@@ -32,40 +32,32 @@ const markOf = (findings: readonly Finding[]): LadderRung['mark'] => {
   return findings.some(({ level }) => level === 'law') ? 'breach' : 'remark'
 }
 
-export type LadderModel = Readonly<{ rungs: readonly LadderRung[]; chosen: number | null; home: number }>
+export type LadderQuestion = Readonly<{
+  view: LessonView
+  /** Own notes in the other bars: what stands in this one changes nothing about its rungs. */
+  elsewhere: Line
+  bar: number
+  pitches: readonly Pitch[]
+  judge: Judge
+  naming: Naming
+  /** Whether findings may be told. */
+  isTold: boolean
+}>
 
 /** Every rung for a bar: what the pitch would be against the cantus, how it is come to, and what the rules say. */
-export function readLadder(
-  {
-    view,
-    own,
-    bar,
-    pitches,
-    judge,
-    naming,
-    isTold,
-  }: Readonly<{
-    view: LessonView
-    own: Line
-    bar: number
-    pitches: readonly Pitch[]
-    judge: Judge
-    naming: Naming
-    /** Whether findings may be told. */
-    isTold: boolean
-  }>,
+export function readRungs(
+  { view, elsewhere, bar, pitches, judge, naming, isTold }: LadderQuestion,
   words: Words,
-): LadderModel {
+): readonly LadderRung[] {
   const cantus = view.exercise.cantus[bar - 1] as Pitch
-  const read = lineWith(view.line, own)
-  const tries = pitches.map((pitch) => ({ ...own, [bar]: wholeNote(pitch) }))
+  const read = lineWith(view.line, elsewhere)
+  const tries = pitches.map((pitch): Line => ({ ...elsewhere, [bar]: wholeNote(pitch) }))
   if (isTold) judge.ofAll(tries)
-  const rungs = pitches.map((pitch, index): LadderRung => {
+  return pitches.map((pitch, index): LadderRung => {
+    const tried = tries[index] as Line
     const motion = motionInto(view.exercise, read, view.setAside, bar, pitch)
     const findings = isTold
-      ? judge
-          .ofNotes(tries[index] as Line)
-          .filter((finding) => completedAt(finding, tries[index] as Line) === bar)
+      ? judge.ofNotes(tried).filter((finding) => completedAt(finding, tried) === bar)
       : null
     const sentence = speakSounding({ bar, pitch, cantus, motion, findings }, words)
     return {
@@ -74,22 +66,35 @@ export function readLadder(
       interval: intervalWord(cantus, pitch),
       motion,
       mark: findings && markOf(findings),
-      spoken:
-        naming === 'degrees'
-          ? `${words.desk.ladder.degreeSpoken(
-              degreeOf(pitch, view.exercise.final),
-              alterationInMode(pitch, view.exercise.mode, view.exercise.final),
-            )}: ${sentence}`
-          : sentence,
+      spoken: naming === 'degrees' ? `${speakDegree(pitch, view, words)}: ${sentence}` : sentence,
     }
   })
+}
+
+function speakDegree(pitch: Pitch, { exercise: { mode, final } }: LessonView, words: Words): string {
+  return words.desk.ladder.degreeSpoken(degreeOf(pitch, final), alterationInMode(pitch, mode, final))
+}
+
+export type LadderPlaces = Readonly<{
+  /** The rung that is written, or null. */
+  chosen: number | null
+  /** The rung to open the ladder at. */
+  home: number
+}>
+
+/** Where the hand is on the ladder of a bar, and where it would begin. */
+export function placeOnLadder(
+  view: LessonView,
+  own: Line,
+  bar: number,
+  pitches: readonly Pitch[],
+): LadderPlaces {
   const written = firstPitch(own[bar])
   const chosen = written ? pitches.findIndex((pitch) => comparePitches(pitch, written) === 0) : -1
   const before = barReadBefore(bar, view.setAside)
-  const near = written ?? firstPitch(before === null ? null : read[before])
+  const near = written ?? firstPitch(before === null ? null : (own[before] ?? view.line[before]))
   return {
-    rungs,
     chosen: chosen < 0 ? null : chosen,
-    home: homeRung(pitches, near, cantus, view.exercise.position),
+    home: homeRung(pitches, near, view.exercise.cantus[bar - 1] as Pitch, view.exercise.position),
   }
 }

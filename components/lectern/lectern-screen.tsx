@@ -80,7 +80,7 @@ function LecternInLesson({ lessonId, onReopened }: Readonly<{ lessonId: string; 
       hands={view.presence.hands}
       people={people}
       names={names}
-      isOffline={view.connection !== 'live' && lesson.status !== 'ended'}
+      isOffline={view.connection === 'offline' && lesson.status !== 'ended'}
       hindrance={view.hindrance}
       pen={pen}
       onLesson={(changed) =>

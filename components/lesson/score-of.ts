@@ -36,6 +36,24 @@ export function arcsOf(findings: readonly Finding[]): readonly ScoreArc[] {
   return [...arcs.values()]
 }
 
+const overlaps = (a: Finding, b: Finding): boolean =>
+  (a.bars[0] ?? 0) < (b.bars.at(-1) ?? 0) && (b.bars[0] ?? 0) < (a.bars.at(-1) ?? 0)
+
+/**
+ * As many findings as fit on one level of arcs, those of the bar in hand first, then breaches. A strip that grew with every
+ * arc would push the rungs from under the finger.
+ */
+export function oneLevel(findings: readonly Finding[], hand: number): readonly Finding[] {
+  const ranked = [...spanning(findings)].sort(
+    (a, b) =>
+      Number(b.bars.includes(hand)) - Number(a.bars.includes(hand)) ||
+      Number(b.level === 'law') - Number(a.level === 'law'),
+  )
+  const level: Finding[] = []
+  for (const finding of ranked) if (!level.some((other) => overlaps(other, finding))) level.push(finding)
+  return level
+}
+
 const bracketsOf = (view: LessonView): readonly ScoreBracket[] =>
   view.gestures.map(({ from, to, label }) => ({ fromBar: from, toBar: to, label }))
 
@@ -111,7 +129,12 @@ export function roomScoreOf(
 }
 
 /** The score for a desk: the agreed line and the student's own lozenges, with the findings on them when they are shown. */
-export function deskScoreOf(view: LessonView, own: Line, findings: readonly Finding[]): ScoreInput {
+export function deskScoreOf(
+  view: LessonView,
+  own: Line,
+  findings: readonly Finding[],
+  hand: number,
+): ScoreInput {
   const tones = figureTones(findings)
   return compose(view, {
     read: lineWith(view.line, own),
@@ -122,7 +145,7 @@ export function deskScoreOf(view: LessonView, own: Line, findings: readonly Find
       return [{ notes, count: null, tone: tone === 'breach' || tone === 'remark' ? tone : 'line' }]
     },
     findings,
-    arcs: spanning(findings),
+    arcs: oneLevel(findings, hand),
   })
 }
 

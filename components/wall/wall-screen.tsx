@@ -67,7 +67,7 @@ function WallInLesson({ lessonId, onReopened }: Readonly<{ lessonId: string; onR
       chorus={view.chorus}
       here={view.presence.here}
       names={names}
-      notice={view.connection === 'live' || isOver ? sound.problem : words.wall.offline}
+      notice={view.connection === 'offline' ? words.wall.offline : sound.problem}
       onLetSound={sound.isAllowed || isOver ? null : sound.allow}
     />
   )

@@ -1,5 +1,5 @@
 import { barInHand, findingsAt, readDesk } from '@/components/desk/desk-model'
-import { readLadder, wholeNote } from '@/components/desk/ladder-model'
+import { placeOnLadder, readRungs, wholeNote } from '@/components/desk/ladder-model'
 import { ladderPitches } from '@/components/ladder/rungs'
 import type { Judge } from '@/components/lesson/judge'
 import { viewOf } from '@/components/lesson/lesson-view'
@@ -95,7 +95,7 @@ describe('the desk', () => {
 
   test('the score shows own notes as lozenges without a number, the breach where it was completed', () => {
     const own = { 6: note('C5'), 7: note('E5') }
-    const score = deskScoreOf(view, own, [risen])
+    const score = deskScoreOf(view, own, [risen], 7)
     expect(score.bars[5]).toMatchObject({ figure: { text: '5', tone: 'cantus' }, motion: 'contrary' })
     expect(score.bars[5]?.proposals).toMatchObject([{ count: null, tone: 'line' }])
     expect(score.bars[6]).toMatchObject({ figure: { text: '5', tone: 'breach' }, motion: 'parallel' })
@@ -109,19 +109,12 @@ describe('the desk', () => {
 describe('the ladder of a bar', () => {
   const view = viewOf(board())
   const pitches = ladderPitches(view.exercise, false)
-  const ladder = (own: Readonly<Record<number, string>>, bar: number, isTold = true) =>
-    readLadder(
-      {
-        view,
-        own: Object.fromEntries(Object.entries(own).map(([at, pitch]) => [at, note(pitch)])),
-        bar,
-        pitches,
-        judge,
-        naming: 'letters',
-        isTold,
-      },
-      words,
-    )
+  const ladder = (written: Readonly<Record<number, string>>, bar: number, isTold = true) => {
+    const own = Object.fromEntries(Object.entries(written).map(([at, pitch]) => [at, note(pitch)]))
+    const elsewhere = Object.fromEntries(Object.entries(own).filter(([at]) => Number(at) !== bar))
+    const rungs = readRungs({ view, elsewhere, bar, pitches, judge, naming: 'letters', isTold }, words)
+    return { rungs, ...placeOnLadder(view, own, bar, pitches) }
+  }
   const rungOf = (model: ReturnType<typeof ladder>, name: string) =>
     model.rungs[pitches.findIndex((pitch) => formatPitch(pitch) === name)]
 
@@ -170,4 +163,25 @@ test('the score as text: a sentence a bar, bars set aside and unwritten ones too
     'bar 5, B, major third above G.',
     'bar 6, A, major third above F, parallel motion.',
   ])
+})
+
+test('a desk keeps its arcs on one level: the bar in hand first, then breaches', () => {
+  const view = viewOf(board())
+  const of = (bars: readonly number[], level: Finding['level']): Finding => ({ ...risen, bars, level })
+  const findings = [
+    of([5, 6, 7, 8, 9], 'preference'),
+    of([5, 6], 'preference'),
+    risen,
+    of([7, 8], 'law'),
+    of([8, 9], 'law'),
+  ]
+  const arcs = (hand: number) =>
+    deskScoreOf(view, {}, findings, hand).arcs.map(({ fromBar, toBar }) => [fromBar, toBar])
+  expect(arcs(7)).toEqual([
+    [6, 7],
+    [7, 8],
+    [8, 9],
+    [5, 6],
+  ])
+  expect(arcs(5)).toEqual([[5, 9]])
 })
