@@ -182,6 +182,18 @@ describe('the live room of a screen', () => {
     expect(cues).toEqual(['wall stop'])
   })
 
+  it('tells the lectern of newcomers gathered, and the class nothing', async () => {
+    const [lectern, desk] = [enter(lesson.teacher), enter(student())]
+    await until(() => isLive(lectern) && isLive(desk))
+    const told: string[] = []
+    lectern.on('lesson', ({ kind }) => told.push(`lectern ${kind}`))
+    desk.on('lesson', ({ kind }) => told.push(`desk ${kind}`))
+    for (let newcomers = 0; newcomers < 50; newcomers += 1) server.realtime.rosterChanged(lesson.lessonId)
+    server.realtime.lessonChanged(lesson.lessonId)
+    await until(() => told.includes('desk door') && told.includes('lectern roster'))
+    expect([...told].sort()).toEqual(['desk door', 'lectern door', 'lectern roster'])
+  })
+
   it('goes on when the storage of the browser is full', async () => {
     const forbidden: Storage = {
       getItem: () => null,
