@@ -41,7 +41,12 @@ type Runner = Readonly<{
 }>
 
 /** The two readings of a line that rules fold over. */
-type Readings = Readonly<{ pair: readonly Moment[]; solo: readonly Moment[]; isComplete: boolean }>
+type Readings = Readonly<{
+  pair: readonly Moment[]
+  solo: readonly Moment[]
+  isComplete: boolean
+  hasRest: boolean
+}>
 
 const SCOPES_OF_LINE: readonly Scope[] = ['melody', 'line', 'pair']
 const SCOPES_OF_CANTUS: readonly Scope[] = ['melody', 'cantus']
@@ -54,14 +59,14 @@ export function createChecker(exercise: Exercise, ruleSet: RuleSet): Checker {
   const readLine = (line: Line, setAside?: SetAside): Readings => {
     const pair = readMoments(exercise, line, setAside)
     const solo = readVoice(exercise.cantus.length, line, setAside)
-    return { pair, solo, isComplete: isWhollyWritten(pair) }
+    return { pair, solo, isComplete: isWhollyWritten(pair), hasRest: hasRest(pair) }
   }
 
   return {
     checkLine: (line, setAside) => runAll(lineRunners, readLine(line, setAside)),
     checkCantus: () => {
       const solo = readCantus(exercise.cantus)
-      return runAll(cantusRunners, { pair: solo, solo, isComplete: true })
+      return runAll(cantusRunners, { pair: solo, solo, isComplete: true, hasRest: false })
     },
     annotate: (line, proposals, setAside) => {
       const readings = readLine(line, setAside)
@@ -115,19 +120,12 @@ function startRules(
     }))
 }
 
-const findingOf = (
-  { ruleId, level, voice }: Runner,
-  { code, bars, notes, args, isRemark }: Breach,
-): Finding => ({
-  ruleId,
-  level: isRemark ? 'preference' : level,
-  voice,
-  code,
-  bars,
-  notes,
-  args,
-  ...(isRemark && { isRemark }),
-})
+function findingOf({ ruleId, level, voice }: Runner, breach: Breach): Finding {
+  const { code, bars, notes, args } = breach
+  return breach.isRemark
+    ? { ruleId, level: 'preference', voice, code, bars, notes, args, isRemark: true }
+    : { ruleId, level, voice, code, bars, notes, args }
+}
 
 function runAll(runners: readonly Runner[], { pair, solo, isComplete }: Readings): readonly Finding[] {
   const findings: Finding[] = []
@@ -175,8 +173,9 @@ function rerunAll(
   bars: ReadonlySet<number>,
 ): Finding[] {
   const findings: Finding[] = []
-  const pairSpan = changedSpan(before.pair, after.pair)
-  const soloSpan = changedSpan(before.solo, after.solo)
+  const isPlain = !before.hasRest && !after.hasRest
+  const pairSpan = changedSpan(before.pair, after.pair, isPlain)
+  const soloSpan = changedSpan(before.solo, after.solo, isPlain)
   for (let place = 0; place < runners.length; place += 1) {
     const runner = runners[place] as Runner
     const { readsPair, step, params } = runner
@@ -217,11 +216,14 @@ function keep(
 
 /**
  * The first moment that differs, and the first after it from which both readings go on alike. Everything differs where
- * the readings have unlike lengths, or a rest, over which rules look further back than they say.
+ * the readings have unlike lengths, or a rest (are not plain), over which rules look further back than they say.
  */
-function changedSpan(before: readonly Moment[], after: readonly Moment[]): { from: number; to: number } {
-  if (before.length !== after.length || hasRest(before) || hasRest(after))
-    return { from: 0, to: after.length }
+function changedSpan(
+  before: readonly Moment[],
+  after: readonly Moment[],
+  isPlain: boolean,
+): Readonly<{ from: number; to: number }> {
+  if (before.length !== after.length || !isPlain) return { from: 0, to: after.length }
   let from = 0
   while (from < after.length && isSameMoment(after[from] as Moment, before[from] as Moment)) from += 1
   let to = after.length
@@ -243,9 +245,11 @@ const barsOf = (proposal: Proposal): ReadonlySet<number> => new Set(Object.keys(
 
 function nameProposal(proposal: Proposal): string {
   let name = ''
-  for (const [bar, notes] of Object.entries(proposal)) {
+  for (const bar in proposal) {
     name += `|${bar}`
-    for (const { pitch, ticks, tied } of notes) name += ` ${pitch}:${ticks}${tied ? '~' : ''}`
+    for (const { pitch, ticks, tied } of proposal[bar] as BarNotes) {
+      name += ` ${pitch ?? 'r'}:${ticks}${tied ? '~' : ''}`
+    }
   }
   return name
 }

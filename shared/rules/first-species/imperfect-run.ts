@@ -34,7 +34,8 @@ export const imperfectRun: Rule<State, Params> = {
   start: (_exercise, { counting }) => ({ run: NONE, isPlaceNeeded: counting === 'parallel' }),
   step: (state, moment, { max, counting }) => {
     const now = sonorityOf(moment)
-    if (now === null || !(isThird(now) || isSixth(now))) return goOn({ ...state, run: NONE })
+    if (now === null || !(isThird(now) || isSixth(now)))
+      return goOn({ run: NONE, isPlaceNeeded: state.isPlaceNeeded })
     const before = state.run.at(-1)
     const goesOn =
       before !== undefined &&
@@ -43,7 +44,7 @@ export const imperfectRun: Rule<State, Params> = {
     const run = goesOn ? [...state.run.slice(-max), now] : [now]
     const code = isThird(now) ? 'thirds' : 'sixths'
     return {
-      state: { ...state, run },
+      state: { run, isPlaceNeeded: state.isPlaceNeeded },
       breach: run.length > max ? breachAt(code, run, { count: run.length, max }) : null,
     }
   },

@@ -29,9 +29,9 @@ export const s1Repeat: Rule<State, Params> = {
   start: (exercise) => ({ exercise, before: null, repeats: 0, inRow: 0 }),
   step: (state, moment, params) => {
     const { exercise, before } = state
-    if (!isNoted(moment)) return goOn({ ...state, before: null, inRow: 0 })
+    if (!isNoted(moment)) return goOn({ exercise, before: null, repeats: state.repeats, inRow: 0 })
     if (before === null || !isSamePitch(before.note, moment.note)) {
-      return goOn({ ...state, before: moment, inRow: 1 })
+      return goOn({ exercise, before: moment, repeats: state.repeats, inRow: 1 })
     }
     const repeats = Math.min(state.repeats + 1, params.maxRepeats + 1)
     const inRow = Math.min(state.inRow + 1, params.maxInRow + 1)
