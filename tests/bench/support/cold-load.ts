@@ -32,6 +32,11 @@ export async function loadCold(
     await session.send('Network.enable')
     let bytes = 0
     session.on('Network.loadingFinished', ({ encodedDataLength }) => (bytes += encodedDataLength))
+    session.on('Network.webSocketFrameReceived', ({ response }) => {
+      // Binary frames are told in base64, four characters for three bytes.
+      const { opcode, payloadData } = response
+      bytes += opcode === 1 ? payloadData.length : Math.ceil((payloadData.length * 3) / 4)
+    })
     if (isPhone) {
       const bytesASecond = PHONE.bitsASecond / 8
       await session.send('Emulation.setCPUThrottlingRate', { rate: PHONE.slowdown })
