@@ -2,10 +2,13 @@ import { Fragment } from 'react'
 import { View } from 'react-native'
 import type { LessonView } from '@/components/lesson/lesson-view'
 import { useTheme } from '@/components/theme'
-import { Lozenge, Txt } from '@/components/ui'
+import { Heading, Lozenge, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Lesson } from '@/shared/api/lessons'
 import type { WallMeasure } from './wall-measure'
+
+/** A long title is set smaller, so that it and the syllables share the line. */
+const titleSizePx = (title: string): number => (title.length <= 48 ? 35 : 25)
 
 /** What the lesson is, and how to come in. */
 export function WallHeader({
@@ -32,20 +35,17 @@ export function WallHeader({
       }}
     >
       <Lozenge tone="azurite" sizePx={Math.max(12, px(26))} />
-      <Txt
-        kind="head"
-        isStrong
-        lines={isStacked ? 3 : 1}
-        role={'heading' as never}
+      <Heading
+        level={1}
         style={{
-          fontSize: Math.max(21, px(35)),
-          lineHeight: Math.max(28, px(44)),
+          fontSize: Math.max(21, px(titleSizePx(lesson.title))),
+          lineHeight: Math.max(28, px(titleSizePx(lesson.title) * 1.25)),
           flexShrink: 1,
           minWidth: 0,
         }}
       >
         {lesson.title}
-      </Txt>
+      </Heading>
       <Txt
         tone="lead"
         lines={1}

@@ -44,7 +44,7 @@ export const desk = {
     naming: 'Name the pitches by',
     accidentals: 'All accidentals',
     accidentalsHint: 'Every note also with a flat and a sharp.',
-    erase: 'Take the note away',
+    erase: 'Take away the note of this bar',
     eraseShort: 'Take away',
     degreeSpoken: (degree: number, alteration: number) =>
       alteration === 0
