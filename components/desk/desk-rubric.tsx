@@ -70,7 +70,7 @@ export function DeskRubric({
         style={{
           flex: 1,
           overflowY: heightPx === null ? 'visible' : 'auto',
-          padding: `${space.half - 2}px ${space.one}px`,
+          padding: `${space.half - 2}px ${heightPx === null ? space.double : space.one}px`,
           display: 'flex',
           flexDirection: 'column',
           gap: space.small,

@@ -87,8 +87,7 @@ const useRungStyles = createStyles((colors) => ({
     fontVariant: ['lining-nums'],
     userSelect: 'none',
   },
-  // The signs are drawn about the foot of the letter; raised, they stand beside its middle.
-  sign: { fontSize: type.text, position: 'relative', top: -8, marginLeft: 2 },
+  sign: { fontSize: type.text, marginLeft: 2 },
   interval: {
     flex: 1,
     minWidth: 0,

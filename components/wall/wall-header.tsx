@@ -60,7 +60,8 @@ export function WallHeader({
           alignItems: 'center',
           columnGap: px(22),
           flexWrap: isStacked ? 'wrap' : 'nowrap',
-          flexShrink: 0,
+          flexShrink: isStacked ? 1 : 0,
+          maxWidth: '100%',
         }}
       >
         {lesson.code && lesson.isDoorOpen ? (

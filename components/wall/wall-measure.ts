@@ -36,7 +36,7 @@ export function marginRoom(
   hasSquare: boolean,
   hasNames: boolean,
 ): Readonly<{ lines: number; letters: number }> {
-  if (isStacked) return { lines: 40, letters: 38 }
+  if (isStacked) return { lines: 16, letters: 38 }
   const { sizePx, linePx, squarePx, paddingPx, gapPx, namesPx } = MARGIN_TYPE
   const taken = 2 * paddingPx + (hasSquare ? squarePx + gapPx : 0) + (hasNames ? namesPx : 0) + linePx
   return {
