@@ -1,12 +1,11 @@
 import { useCallback, useDeferredValue, useMemo, useRef, useState } from 'react'
 import { View } from 'react-native'
-import { runsOf, selectedBars, type Selection } from '@/components/lesson/bars'
-import { RubricLine } from '@/components/lesson/rubric-line'
+import { selectedBars, type Selection } from '@/components/lesson/bars'
 import { rubricsOf, setAsideRubrics, type Rubric } from '@/components/lesson/rubrics'
 import type { RoomGroup } from '@/components/lesson/room'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { Button, Heading, Notice, Txt, useTitle } from '@/components/ui'
+import { Button, Notice, Txt, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Highlight } from '@/components/score'
 import type { Lesson } from '@/shared/api/lessons'
@@ -18,6 +17,7 @@ import { BarActButtons, type BarAct } from './bar-acts'
 import { HearingDialog } from './hearing-dialog'
 import { LecternHeader } from './lectern-header'
 import { actsFor, NO_ACTS, readLectern, sortPeople } from './lectern-model'
+import { LineFindings } from './line-findings'
 import { PeoplePanel } from './people-panel'
 import { RoomList } from './room-list'
 import { SelectableScore } from './selectable-score'
@@ -221,40 +221,12 @@ export function Lectern(props: LecternProps) {
           onHear={hearGroup}
           onAdopt={isReadOnly ? null : adopt}
         />
-        <View role="region" aria-label={words.lectern.line.title} style={{ gap: space.small }}>
-          <Heading level={2}>{words.lectern.line.title}</Heading>
-          {lineRubrics.length === 0 ? (
-            <Txt tone="lead">
-              {Object.keys(view.line).length === 0 ? words.lectern.line.empty : words.lectern.line.none}
-            </Txt>
-          ) : (
-            lineRubrics.map((rubric) => (
-              <button
-                key={rubric.id}
-                type="button"
-                className="bare"
-                onClick={() => {
-                  const run = runsOf(rubric.bars)[0] ?? rubric.bars
-                  setSelection({ anchor: run[0] ?? 1, head: rubric.bars.at(-1) ?? 1 })
-                }}
-                onPointerEnter={() => setPointedAt(rubric)}
-                onPointerLeave={() => setPointedAt(null)}
-                onFocus={() => setPointedAt(rubric)}
-                onBlur={() => setPointedAt(null)}
-                style={{
-                  background: 'none',
-                  border: 0,
-                  padding: `${space.small}px 0`,
-                  minHeight: 44,
-                  textAlign: 'left',
-                  cursor: 'pointer',
-                }}
-              >
-                <RubricLine rubric={rubric} kind="note" />
-              </button>
-            ))
-          )}
-        </View>
+        <LineFindings
+          rubrics={lineRubrics}
+          hasLine={Object.keys(view.line).length > 0}
+          onPoint={setPointedAt}
+          onSelect={setSelection}
+        />
         {isWide ? null : side}
       </View>
     </View>

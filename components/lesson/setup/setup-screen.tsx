@@ -2,12 +2,9 @@ import { useRouter, type Href } from 'expo-router'
 import { useCallback, useMemo, useState } from 'react'
 import { View } from 'react-native'
 import { Asked, RefusalNotice, useMutation, useQuery } from '@/components/api'
-import { RubricLine } from '@/components/lesson/rubric-line'
-import { rubricOf } from '@/components/lesson/rubrics'
-import { Score } from '@/components/score'
 import { Frame } from '@/components/session'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { Button, Choice, Field, Form, Heading, Notice, Select, Txt } from '@/components/ui'
+import { Button, Choice, Field, Form, Heading, Select, Txt } from '@/components/ui'
 import { usePageMeasure } from '@/components/ui/use-page-measure'
 import { useWords, type Words } from '@/components/words'
 import { api } from '@/shared/api'
@@ -18,14 +15,11 @@ import { findPreset, PRESETS, type Position, type RuleSet } from '@/shared/rules
 import { MODES, type Mode } from '@/shared/theory/mode'
 import { MAX_PROMPT_CHARACTERS } from '@/shared/wire/documents'
 import { CantusPicker } from './cantus-picker'
-import { exerciseScoreOf } from './cantus-score'
-import { MelodySummary } from './melody-summary'
 import { RuleList } from './rule-list'
 import {
   changedRules,
   exerciseOf,
   firstStage,
-  readPitchClass,
   setupProblems,
   startForm,
   withCantus,
@@ -37,7 +31,8 @@ import {
   type SetupForm,
   type SetupProblem,
 } from './setup-form'
-import { doubtsOf, type Doubt } from './soundness'
+import { SetupPreview } from './setup-preview'
+import { doubtsOf } from './soundness'
 import { CLEF_CHOICES } from './suggest-clefs'
 
 /** Width of the column in which the melody is chosen. */
@@ -170,7 +165,7 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
         </View>
         <View style={{ flex: 1, minWidth: 0, gap: space.wide }}>
           <Section title={setup.preview}>
-            <Preview exercise={exercise} form={form} doubts={doubts} widthPx={previewPx} />
+            <SetupPreview exercise={exercise} form={form} doubts={doubts} widthPx={previewPx} />
           </Section>
           <Section title={setup.words}>
             <Field
@@ -257,60 +252,6 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
         </View>
       </View>
     </Form>
-  )
-}
-
-function Preview({
-  exercise,
-  form,
-  doubts,
-  widthPx,
-}: Readonly<{
-  exercise: ReturnType<typeof exerciseOf>
-  form: SetupForm
-  doubts: readonly Doubt[]
-  widthPx: number
-}>) {
-  const words = useWords()
-  const { setup } = words
-  const final = readPitchClass(form.final)
-  const score = useMemo(() => exercise && exerciseScoreOf(exercise), [exercise])
-  if (!score || !form.cantus || !final || !exercise)
-    return <Txt tone="lead">{form.cantus ? setup.problems.noSpelling : setup.previewNone}</Txt>
-  return (
-    <View style={{ gap: space.half }}>
-      <Score input={score} size="page" width={widthPx} accessibilityLabel={setup.preview} />
-      <MelodySummary cantus={form.cantus} mode={form.mode} final={final} />
-      {doubts.length === 0 ? (
-        <Notice kind="good" title={setup.sound}>
-          {setup.soundLead}
-        </Notice>
-      ) : (
-        <Notice kind="note" title={setup.unsound}>
-          <View style={{ gap: space.small }}>
-            <Txt kind="note" tone="lead">
-              {setup.unsoundLead}
-            </Txt>
-            {doubts.map((doubt, index) => (
-              <DoubtLine key={index} doubt={doubt} words={words} />
-            ))}
-          </View>
-        </Notice>
-      )}
-    </View>
-  )
-}
-
-function DoubtLine({ doubt, words }: Readonly<{ doubt: Doubt; words: Words }>) {
-  if (doubt.kind === 'finding')
-    return <RubricLine rubric={rubricOf(doubt.finding, words)} kind="note" isMendTold={false} />
-  const print = words.lesson.pitchPrinted
-  return (
-    <Txt kind="note">
-      {doubt.kind === 'clef'
-        ? words.setup.problems.clefCantus(print(doubt.pitch))
-        : words.setup.problems.lastNotFinal(print(doubt.pitch), doubt.final)}
-    </Txt>
   )
 }
 
