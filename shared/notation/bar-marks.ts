@@ -1,6 +1,6 @@
 import { MOTION_HALF_STAFF_SPACES, type MeasuredBar } from '@/shared/notation/bar-measure'
-import { ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
 import {
+  barlinePx,
   crispPx,
   moveMark,
   rectangleMark,
@@ -100,7 +100,7 @@ function leftBarlineMarks(
 ): readonly Mark[] {
   if (placed.isFirstInSystem) return []
   const name = { role: 'barline', ink: 'barline', group: `barline ${placed.measured.bar.number}` } as const
-  const thickness = crispPx(ENGRAVING_DEFAULTS.thinBarlineThickness, spacePx)
+  const thickness = barlinePx(spacePx)
   const top = rows.staves[0]?.topPx ?? 0
   const bottom = (rows.staves.at(-1)?.topPx ?? 0) + 4 * spacePx
   if (!isCrossed || rows.railPx === null) return [ruleMark(name, [0, top], [0, bottom], thickness)]

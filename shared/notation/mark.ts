@@ -172,3 +172,7 @@ export function ruleMark(name: MarkName, from: Point, to: Point, thicknessPx: nu
 
 export const staffLinePx = (spacePx: number): number =>
   crispPx(ENGRAVING_DEFAULTS.staffLineThickness, spacePx)
+
+/** A bar line is a little thicker than a staff line; on small staves, where a px is much, as thick. */
+export const barlinePx = (spacePx: number): number =>
+  Math.max(staffLinePx(spacePx), Math.floor(ENGRAVING_DEFAULTS.thinBarlineThickness * spacePx - 0.1))

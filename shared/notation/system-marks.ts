@@ -1,7 +1,7 @@
 import { CLOSING_WIDTH_STAFF_SPACES } from '@/shared/notation/bar-measure'
 import { BRAVURA, ENGRAVING_DEFAULTS } from '@/shared/notation/bravura'
 import { signatureMarks } from '@/shared/notation/key-signature'
-import { crispPx, glyphMark, rectangleMark, ruleMark, staffLinePx, type Mark } from '@/shared/notation/mark'
+import { barlinePx, glyphMark, rectangleMark, ruleMark, staffLinePx, type Mark } from '@/shared/notation/mark'
 import type { StaffLayout } from '@/shared/notation/score-layout'
 import { CLEF_PLACES, depthStaffSpaces, STAFF_LINES } from '@/shared/notation/staff-place'
 import type { Clef } from '@/shared/theory/clef'
@@ -59,7 +59,7 @@ export function prefixMarks(
   if (staves.length < 2) return marks
   const top = staves[0]?.topPx ?? 0
   const bottom = (staves.at(-1)?.topPx ?? 0) + 4 * spacePx
-  const thickness = crispPx(ENGRAVING_DEFAULTS.thinBarlineThickness, spacePx)
+  const thickness = barlinePx(spacePx)
   const name = { role: 'barline', ink: 'barline', group: 'systemic' } as const
   return [rectangleMark(name, { left: 0, right: thickness, top, bottom }), ...marks]
 }
@@ -94,7 +94,7 @@ export function endBarlineMarks(
   const top = Math.round((staves[0]?.topPx ?? 0) - half)
   const bottom = Math.round((staves.at(-1)?.topPx ?? 0) + 4 * spacePx + half)
   const name = { role: 'barline', ink: 'barline', group: 'end' } as const
-  const thin = crispPx(ENGRAVING_DEFAULTS.thinBarlineThickness, spacePx)
+  const thin = barlinePx(spacePx)
   if (!isClosing) return [rectangleMark(name, { left: widthPx - thin, right: widthPx, top, bottom })]
   const thick = Math.round(ENGRAVING_DEFAULTS.thickBarlineThickness * spacePx)
   const left = Math.round(widthPx - CLOSING_WIDTH_STAFF_SPACES * spacePx)
