@@ -102,6 +102,11 @@ export default tseslint.config(
     },
   },
   {
+    // Runs in the page before anything else, as it stands.
+    files: ['public/**/*.js'],
+    languageOptions: { globals: { document: 'readonly', localStorage: 'readonly' } },
+  },
+  {
     files: ['**/*.mjs', '**/*.js'],
     languageOptions: {
       globals: {

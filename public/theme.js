@@ -3,7 +3,7 @@
   try {
     var choice = localStorage.getItem('bicinium.ground')
     if (choice === 'light' || choice === 'dark') document.documentElement.dataset.ground = choice
-  } catch (error) {
+  } catch {
     /* Storage refused: the system's choice stands. */
   }
 })()

@@ -42,7 +42,7 @@ export const createDemoLessons = (): readonly DemoLesson[] => [
     isOpen: true,
     exercise: exerciseOn(FUX_CANTUS, 'library-fux-d', {
       position: 'above',
-      clefs: { cantus: 'alto', line: 'treble' },
+      clefs: { cantus: 'treble', line: 'treble' },
       signature: 0,
       ruleSetId: 'open-undergrad',
     }),
