@@ -53,9 +53,7 @@ export function WallFooter({
         </Txt>
         {notice || onLetSound ? (
           <View style={{ flexDirection: 'row', alignItems: 'center', gap: 12, paddingTop: 6 }}>
-            {onLetSound ? (
-              <Button label={words.wall.letSound} hint={words.wall.letSoundHint} onPress={onLetSound} />
-            ) : null}
+            {onLetSound ? <Button label={words.wall.letSound} onPress={onLetSound} /> : null}
             <Txt tone="lead" role="status">
               {notice ?? words.wall.letSoundHint}
             </Txt>

@@ -101,14 +101,14 @@ async function measureDesk({ school, browser, code }: Room, tell: Tell): Promise
   const desk = deskFace(page)
   await desk.hold(9)
   await slowDown(page, PHONE.slowdown)
-  const pitches = ['A', 'C', 'D', 'B'] as const
+  const rungs = ['A, major third', 'C, fifth', 'D, major sixth', 'E, major seventh'] as const
   const samples: number[] = []
   for (let tap = 0; tap < TAPS; tap += 1) {
-    const pitch = pitches[tap % pitches.length] as string
-    samples.push(await measureTap(page, `bar 9, ${pitch}`, `bar 9, cantus F, ${pitch} proposed`))
+    const rung = rungs[tap % rungs.length] as string
+    samples.push(await measureTap(page, `bar 9, ${rung}`, `bar 9, cantus F, ${rung.charAt(0)} proposed`))
   }
-  await desk.propose(10, 'B')
-  await desk.propose(11, 'A')
+  await desk.propose(10, 'B, fifth')
+  await desk.propose(11, 'A, fifth')
   await desk.kept()
   const shift = await readShift(page)
   await context.close()

@@ -6,12 +6,10 @@ import type { Page } from 'playwright-core'
  */
 export async function measureTap(page: Page, spoken: string, proposed: string): Promise<number> {
   const rung = page.getByRole('radio', { name: new RegExp(`^${spoken}\\b`) })
-  await rung.scrollIntoViewIfNeeded()
-  const box = await rung.boundingBox()
-  if (!box) throw new Error(`The rung “${spoken}” is not in sight.`)
   const painted = page.evaluate(
     ([start, score]) =>
-      new Promise<number>((resolve) => {
+      new Promise<number>((resolve, reject) => {
+        setTimeout(() => reject(new Error('The tap was never painted.')), 10_000)
         document.addEventListener(
           'click',
           (event) => {
@@ -34,6 +32,6 @@ export async function measureTap(page: Page, spoken: string, proposed: string): 
       }),
     [spoken, proposed],
   )
-  await page.mouse.click(box.x + box.width / 2, box.y + box.height / 2)
+  await rung.click()
   return painted
 }
