@@ -34,5 +34,7 @@ export async function openDevice(
     ...more,
   })
   context.setDefaultTimeout(PATIENCE_MS)
+  // The runner of our programs names inner functions by a helper of its own, which a page does not have.
+  await context.addInitScript('globalThis.__name ??= (it) => it')
   return context
 }
