@@ -120,4 +120,13 @@ export default tseslint.config(
       },
     },
   },
+  {
+    // The bundler and babel load their configuration with `require`.
+    files: ['bundling/*.js'],
+    languageOptions: {
+      sourceType: 'commonjs',
+      globals: { module: 'readonly', require: 'readonly', __dirname: 'readonly' },
+    },
+    rules: { '@typescript-eslint/no-require-imports': 'off' },
+  },
 )

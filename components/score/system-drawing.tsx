@@ -1,5 +1,4 @@
 import { memo, useMemo } from 'react'
-import { G, Rect } from 'react-native-svg'
 import { MOTION_MS, useTheme, type Pigments } from '@/components/theme'
 import { paintMarks } from '@/shared/notation/paint-marks'
 import type { BarLayout, SystemLayout } from '@/shared/notation/score-layout'
@@ -18,9 +17,9 @@ type BarProps = Readonly<{ bar: BarLayout; colors: Pigments; ground: string; eas
 function BarDrawing({ bar, colors, ground, easeMs }: BarProps) {
   const painted = useMemo(() => paintMarks(bar.marks), [bar.marks])
   return (
-    <G {...easedTransform(bar.xPx, 0, easeMs)}>
+    <g {...easedTransform(bar.xPx, 0, easeMs)}>
       <PaintedMarks painted={painted} colors={colors} ground={ground} />
-    </G>
+    </g>
   )
 }
 
@@ -51,22 +50,22 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
   const hand = system.bars.find(({ number }) => number === handBar)
   const top = system.stavesBox.top - spacePx
   return (
-    <G x={system.xPx} y={system.yPx}>
+    <g transform={`translate(${system.xPx} ${system.yPx})`}>
       {hand && (
-        <G {...easedTransform(hand.xPx, 0, easeMs)}>
-          <Rect x={1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
-        </G>
+        <g {...easedTransform(hand.xPx, 0, easeMs)}>
+          <rect x={1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
+        </g>
       )}
       {system.bars.filter(isLit).map((bar) => (
-        <G key={bar.number} {...easedTransform(bar.xPx, 0, easeMs)}>
-          <Rect
+        <g key={bar.number} {...easedTransform(bar.xPx, 0, easeMs)}>
+          <rect
             x={0}
             y={top}
             width={bar.widthPx}
             height={system.stavesBox.bottom + spacePx - top}
             fill={groundOf(bar)}
           />
-        </G>
+        </g>
       ))}
       <PaintedMarks painted={lines} colors={colors} ground={ground} />
       {hasPrefix && <PaintedMarks painted={prefix} colors={colors} ground={ground} />}
@@ -74,6 +73,6 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
         <BarDrawing key={bar.number} bar={bar} colors={colors} ground={groundOf(bar)} easeMs={easeMs} />
       ))}
       <PaintedMarks painted={spans} colors={colors} ground={ground} />
-    </G>
+    </g>
   )
 })

@@ -20,7 +20,7 @@ const made = `${OUTPUT}-${process.pid}`
 const old = `${OUTPUT}-old-${process.pid}`
 const STAMP = path.join(OUTPUT, '.stamp')
 /** What the web client is made of. */
-const SOURCES = ['app', 'components', 'shared', 'fonts', 'public']
+const SOURCES = ['app', 'bundling', 'components', 'shared', 'fonts', 'public']
 const FILES = ['app.json', 'babel.config.js', 'metro.config.js', 'package-lock.json', 'tsconfig.json']
 const COMPRESSED = new Set(['.js', '.css', '.html', '.json', '.svg', '.txt'])
 const LEAST_COMPRESSED_BYTES = 1024
