@@ -105,7 +105,8 @@ function findLeaps(cantus: readonly Pitch[]): readonly Leap[] {
   return leaps
 }
 
-function recoveryOf(to: Pitch, next: Pitch | undefined, direction: Direction): Recovery {
+/** What a line that has leapt to a note does next. */
+export function recoveryOf(to: Pitch, next: Pitch | undefined, direction: Direction): Recovery {
   if (next === undefined) return 'end'
   const steps = stepsFrom(to, next)
   if (steps === 0 || Math.sign(steps) === direction) return 'none'

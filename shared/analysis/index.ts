@@ -1,0 +1,7 @@
+export { analyseLine, type LineAnalysis, type SonorityCounts } from './analyse-line'
+export { listMotions, shareMotions, type MotionInto, type MotionShares } from './motions'
+export { findParallelRuns, type ParallelRun } from './parallel-runs'
+export { proposeSkeleton, reduceCantus, type Reduction } from './reductions'
+export { findShape, type LineLeap, type LineShape, type NotePlace } from './shape'
+export { proposeStages, type ProposedStage } from './stages'
+export { findVoiceExchanges, type VoiceExchange } from './voice-exchanges'
