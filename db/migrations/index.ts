@@ -5,6 +5,7 @@ import * as cantus from './003-cantus'
 import * as lessons from './004-lessons'
 import * as attempts from './005-attempts'
 import * as journal from './006-journal'
+import * as ruleSets from './007-rule-sets'
 
 /** Every migration by name. Names sort in the order they run in; one that has shipped is never changed. */
 export const MIGRATIONS: Readonly<Record<string, Migration>> = {
@@ -14,4 +15,5 @@ export const MIGRATIONS: Readonly<Record<string, Migration>> = {
   '004-lessons': lessons,
   '005-attempts': attempts,
   '006-journal': journal,
+  '007-rule-sets': ruleSets,
 }

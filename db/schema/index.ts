@@ -3,6 +3,7 @@ import type { AttemptTable } from './attempts'
 import type { CantusTable } from './cantus'
 import type { CourseMemberTable, CourseTable, InvitationTable } from './courses'
 import type { JournalChangeTable, JournalEventTable, JournalSnapshotTable } from './journal'
+import type { RuleSetTable } from './rule-sets'
 import type { LessonMemberTable, LessonTable, WallSessionTable } from './lessons'
 
 /** Tables of the database as Kysely sees them; one file an aggregate. */
@@ -15,6 +16,7 @@ export interface Database {
   courseMember: CourseMemberTable
   invitation: InvitationTable
   cantus: CantusTable
+  ruleSet: RuleSetTable
   lesson: LessonTable
   lessonMember: LessonMemberTable
   wallSession: WallSessionTable

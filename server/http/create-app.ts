@@ -12,6 +12,8 @@ import { createJoinRoutes } from '@/server/routes/join'
 import { createLessonRoutes } from '@/server/routes/lessons'
 import { createMemberRoutes } from '@/server/routes/members'
 import { createPeopleRoutes } from '@/server/routes/people'
+import { createRuleSetRoutes } from '@/server/routes/rule-sets'
+import { serveSchemas } from './serve-schemas'
 import { createWallRoutes } from '@/server/routes/walls'
 import { guardOrigin } from './guard-origin'
 import { logRequests } from './log-requests'
@@ -43,6 +45,7 @@ export function createApp(context: Context): Express {
     createMemberRoutes,
     createInvitationRoutes,
     createCantusRoutes,
+    createRuleSetRoutes,
     createLessonRoutes,
     createWallRoutes,
     createJoinRoutes,
@@ -53,6 +56,7 @@ export function createApp(context: Context): Express {
   app.use('/api', () => {
     throw new Refused('not-found')
   })
+  app.use(serveSchemas())
   app.use(serveWeb(config.webDirectory))
   app.use(answerErrors(log))
   return app

@@ -7,10 +7,10 @@ import {
   updateCantus,
   type CantusRow,
 } from '@/db/queries/cantus'
-import { listCourses } from '@/db/queries/courses'
 import { findCourseRole } from '@/db/queries/course-members'
 import { accountOf, type Person } from '@/server/auth/asker'
 import { cantusProblems } from '@/server/cantus/cantus-problems'
+import { assertTeaches } from '@/server/courses/assert-teaches'
 import { found, Refused } from '@/server/errors/refused'
 import { createRouter } from '@/server/http/create-router'
 import { cantus, type Cantus, type CantusBody } from '@/shared/api/cantus'
@@ -28,14 +28,6 @@ const toCantus = ({ ownerId, createdAt: _, ...row }: CantusRow, person: Person):
 export function createCantusRoutes(context: Context) {
   const { router, on } = createRouter()
   const { db } = context
-
-  /** Whoever leads a course, or may make one, may write. */
-  async function assertWriter(person: Person): Promise<void> {
-    if (person.mayMakeCourses || person.isAdministrator) return
-    const courses = await listCourses(db, person.id, { isEveryone: false })
-    if (!courses.some(({ role }) => role === 'teacher' || role === 'assistant'))
-      throw new Refused('forbidden')
-  }
 
   async function assertWritten(person: Person, body: CantusBody): Promise<void> {
     const fields = [...cantusProblems(body)]
@@ -66,7 +58,7 @@ export function createCantusRoutes(context: Context) {
 
   on(cantus.create, async (asked) => {
     const person = accountOf(await askerOf(context, asked))
-    await assertWriter(person)
+    await assertTeaches(db, person)
     await assertWritten(person, asked.body)
     if ((await countOwnCantus(db, person.id)) >= MOST_OWN_CANTUS) throw new Refused('conflict')
     return { cantus: toCantus(await insertCantus(db, person.id, asked.body), person) }

@@ -18,6 +18,7 @@ const TABLE = {
   'see prepared lessons': [...STAFF, 'administrator'],
   'prepare lesson': STAFF,
   'share cantus': STAFF,
+  'share rule set': STAFF,
 } as const satisfies Readonly<Record<string, readonly CourseStanding[]>>
 
 export type CourseAct = keyof typeof TABLE

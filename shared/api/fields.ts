@@ -7,6 +7,7 @@ const HIDDEN = /[\u0000-\u001f\u007f-\u009f\u061c\u200e\u200f\u202a-\u202e\u2066
 
 export const MAX_NAME_CHARACTERS = 60
 export const MAX_TITLE_CHARACTERS = 120
+export const MAX_RULE_SET_NAME_CHARACTERS = 80
 export const MAX_EMAIL_CHARACTERS = 254
 export const PAGE_SIZE = 50
 
@@ -20,6 +21,7 @@ const words = (max: number) =>
 
 export const nameSchema = words(MAX_NAME_CHARACTERS)
 export const titleSchema = words(MAX_TITLE_CHARACTERS)
+export const ruleSetNameSchema = words(MAX_RULE_SET_NAME_CHARACTERS)
 export const emailSchema = z
   .string()
   .trim()

@@ -5,6 +5,7 @@
 import { createId } from '@/db/create-id'
 import { insertCantus } from '@/db/queries/cantus'
 import { insertLinkInvitation } from '@/db/queries/invitations'
+import { insertRuleSet } from '@/db/queries/rule-sets'
 import { createToken, hashToken } from '@/server/auth/token'
 import { api } from '@/shared/api'
 import type { TestBrowser } from '@/tests/support/test-browser'
@@ -103,6 +104,19 @@ const teachersCantus = async (): Promise<Input> => {
   const { id } = await insertCantus(db(), peopleOf.teacher.id, { ...melody, notes: [...melody.notes] })
   return { params: { cantusId: id }, body: melody }
 }
+const fewRules = {
+  name: 'A few rules',
+  basedOn: 'starter',
+  rules: { 'par-perfect': { level: 'law' as const } },
+}
+const teachersRuleSet = async (): Promise<Input> => {
+  const { id } = await insertRuleSet(db(), peopleOf.teacher.id, { ...fewRules, courseId: null })
+  return { params: { ruleSetId: id }, body: fewRules }
+}
+const sharedRuleSet = async (): Promise<Input> => {
+  const { id } = await insertRuleSet(db(), peopleOf.teacher.id, { ...fewRules, courseId })
+  return { params: { ruleSetId: id } }
+}
 const freshMember = async (): Promise<Input> => {
   const { id } = await insertPerson(db(), 'A pupil')
   await db().insertInto('courseMember').values({ courseId, userId: id, role: 'student' }).execute()
@@ -181,6 +195,18 @@ const TABLE: Readonly<Record<string, readonly [input: () => Promise<Input>, stat
   'cantus.remove': [
     async () => ({ params: (await teachersCantus()).params ?? {} }),
     '404 200 404 404 404 403 403 401 401 401 401',
+  ],
+  'ruleSets.list': [async () => ({}), '200 200 200 200 200 403 403 401 401 401 401'],
+  'ruleSets.get': [sharedRuleSet, '404 200 200 404 404 403 403 401 401 401 401'],
+  'ruleSets.create': [async () => ({ body: fewRules }), '200 200 200 403 200 403 403 401 401 401 401'],
+  'ruleSets.import': [
+    async () => ({ body: { version: 1, ...fewRules } }),
+    '200 200 200 403 200 403 403 401 401 401 401',
+  ],
+  'ruleSets.update': [teachersRuleSet, '404 200 404 404 404 403 403 401 401 401 401'],
+  'ruleSets.remove': [
+    async () => ({ params: (await sharedRuleSet()).params ?? {} }),
+    '404 200 403 404 404 403 403 401 401 401 401',
   ],
   'lessons.list': [inCourse, '200 200 200 200 404 403 403 401 401 401 401'],
   'lessons.create': [

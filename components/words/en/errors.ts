@@ -63,6 +63,8 @@ const fields: Readonly<Record<string, (args: Readonly<Record<string, string | nu
   'password-short': () => 'A password has at least ten characters.',
   'password-long': () => 'This password is too long.',
   'address-taken': () => 'There is an account with this address already. Sign in, or set a new password.',
+  'unknown-rule': () => 'There is no rule of this name.',
+  'bad-params': () => 'A rule has a value it cannot take.',
   'not-alike': () => 'The two are not alike.',
 }
 
