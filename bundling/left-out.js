@@ -55,6 +55,8 @@ const LEFT_OUT = [
   /\/expo-router\/build\/link\/(LinkWithPreview|elements)\.js$/,
   /\/expo-router\/build\/link\/preview\/(HrefPreview|native)\.js$/,
   /\/expo-router\/build\/react-navigation\/(core\/StaticNavigation|native\/(createStaticNavigation|ServerContainer))\.js$/,
+  // Drawings read out of files and addresses, and their style sheets: ours are drawn from elements.
+  /\/react-native-svg\/lib\/module\/(xml|deprecated|utils\/fetchData)\.js$/,
   new RegExp(`/${WITHIN_REACT_NATIVE_WEB}/(?!(?:${KEPT_EXPORTS.join('|')})/)\\w+/index\\.js$`),
 ]
 

@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { useWindowDimensions, View } from 'react-native'
+import Svg, { Line, Polygon } from 'react-native-svg'
 import { fonts, leading, type, useTheme } from '@/components/theme'
 import { useWords } from '@/components/words'
 import { CODE_SYLLABLES, type Syllable } from '@/shared/api/lessons'
@@ -42,9 +43,9 @@ export function SyllableStaff({
     >
       {widthPx > 0 ? (
         <>
-          <svg width={widthPx} height={heightPx} aria-hidden style={{ position: 'absolute' }}>
+          <Svg width={widthPx} height={heightPx} aria-hidden style={{ position: 'absolute' }}>
             {LINES.map((place) => (
-              <line
+              <Line
                 key={place}
                 x1={0}
                 x2={widthPx}
@@ -55,7 +56,7 @@ export function SyllableStaff({
                 opacity={0.6}
               />
             ))}
-            <line
+            <Line
               x1={Math.max(0, placeOf(0).x - ledgerPx)}
               x2={placeOf(0).x + ledgerPx}
               y1={yOf(0)}
@@ -68,7 +69,7 @@ export function SyllableStaff({
               const { x, y } = placeOf(index)
               const isLit = syllable === (held ?? lastTapped)
               return (
-                <polygon
+                <Polygon
                   key={syllable}
                   points={`${x},${y - HALF_PX + 1} ${x + HALF_PX - 1},${y} ${x},${y + HALF_PX - 1} ${x - HALF_PX + 1},${y}`}
                   fill={isLit ? colors.azurite : colors.vellum}
@@ -77,7 +78,7 @@ export function SyllableStaff({
                 />
               )
             })}
-          </svg>
+          </Svg>
           {CODE_SYLLABLES.map((syllable, index) => {
             const { x, y } = placeOf(index)
             const isLit = syllable === (held ?? lastTapped)

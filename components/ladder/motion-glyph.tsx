@@ -1,4 +1,5 @@
 import { memo } from 'react'
+import Svg, { Path } from 'react-native-svg'
 import type { BarMotion } from '@/shared/notation/score-input'
 
 /** Two strokes, the upper and the lower voice, as on the rail between the staves. */
@@ -14,8 +15,8 @@ export const MotionGlyph = memo(function MotionGlyph({
   color,
 }: Readonly<{ motion: BarMotion; color: string }>) {
   return (
-    <svg width={30} height={22} viewBox="0 0 30 22" aria-hidden>
-      <path d={STROKES[motion]} stroke={color} strokeWidth={2.4} strokeLinecap="round" fill="none" />
-    </svg>
+    <Svg width={30} height={22} viewBox="0 0 30 22" aria-hidden>
+      <Path d={STROKES[motion]} stroke={color} strokeWidth={2.4} strokeLinecap="round" fill="none" />
+    </Svg>
   )
 })

@@ -1,5 +1,6 @@
 import { useMemo } from 'react'
 import { View } from 'react-native'
+import { Svg } from 'react-native-svg'
 import { useTheme } from '@/components/theme'
 import type { StaffHit } from '@/shared/notation/hit-test'
 import { proposalMarks } from '@/shared/notation/note-marks'
@@ -44,9 +45,9 @@ export function Ghost({ layout, hit, isHeld, ground }: Props) {
         opacity: isHeld ? 0.9 : 0.5,
       }}
     >
-      <svg width={sizePx} height={sizePx}>
+      <Svg width={sizePx} height={sizePx}>
         <PaintedMarks painted={painted} colors={colors} ground={ground} />
-      </svg>
+      </Svg>
     </View>
   )
 }

@@ -1,4 +1,5 @@
-import { memo, type CSSProperties } from 'react'
+import { memo } from 'react'
+import { Path, Text } from 'react-native-svg'
 import type { Pigments } from '@/components/theme'
 import type { Painted, PaintedPath, PaintedText } from '@/shared/notation/paint-marks'
 import { colorOf, familyOf } from './inks'
@@ -12,19 +13,19 @@ function PaintedShape({
 }: Readonly<{ path: PaintedPath; colors: Pigments; ground: string }>) {
   const fill = path.fill === null ? 'none' : path.fill === 'ground' ? ground : colorOf(path.fill, colors)
   return (
-    <path
+    <Path
       d={path.d}
       fill={fill}
       stroke={path.stroke === null ? 'none' : colorOf(path.stroke, colors)}
       strokeWidth={path.strokePx}
       strokeLinecap="round"
-      strokeDasharray={path.isDashed ? `${3 * path.strokePx} ${2.5 * path.strokePx}` : undefined}
+      {...(path.isDashed ? { strokeDasharray: [3 * path.strokePx, 2.5 * path.strokePx] } : null)}
     />
   )
 }
 
-const LETTERING: CSSProperties = { fontVariantNumeric: 'lining-nums' }
-const RIMMED: CSSProperties = { ...LETTERING, paintOrder: 'stroke', strokeLinejoin: 'round' }
+const LETTERING = { fontVariantNumeric: 'lining-nums' }
+const RIMMED = { ...LETTERING, paintOrder: 'stroke', strokeLinejoin: 'round' }
 
 function PaintedWords({
   words,
@@ -32,7 +33,7 @@ function PaintedWords({
   ground,
 }: Readonly<{ words: PaintedText; colors: Pigments; ground: string }>) {
   return (
-    <text
+    <Text
       x={words.x}
       y={words.y}
       fill={colorOf(words.ink, colors)}
@@ -40,10 +41,11 @@ function PaintedWords({
       fontSize={words.sizePx}
       stroke={words.hasRim ? ground : 'none'}
       strokeWidth={words.sizePx / 4}
-      style={words.hasRim ? RIMMED : LETTERING}
+      // Web styles that the native types do not know.
+      {...({ style: words.hasRim ? RIMMED : LETTERING } as object)}
     >
       {words.text}
-    </text>
+    </Text>
   )
 }
 

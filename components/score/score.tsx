@@ -1,5 +1,6 @@
-import { memo, useCallback, useMemo, type CSSProperties } from 'react'
+import { memo, useCallback, useMemo } from 'react'
 import { StyleSheet, View } from 'react-native'
+import { Svg } from 'react-native-svg'
 import { MOTION_MS, useTheme } from '@/components/theme'
 import { useWords } from '@/components/words'
 import type { Playhead } from '@/shared/notation/hit-test'
@@ -51,7 +52,7 @@ type SheetProps = Readonly<{
 /** The drawing itself, which a moving playhead or pointer leaves alone. */
 const Sheet = memo(function Sheet({ layout, ground, handBar, highlight }: SheetProps) {
   return (
-    <svg width={layout.widthPx} height={layout.heightPx} aria-hidden style={SHEET}>
+    <Svg width={layout.widthPx} height={layout.heightPx} aria-hidden style={styles.sheet}>
       {layout.systems.map((system, i) => (
         <SystemDrawing
           key={i}
@@ -63,7 +64,7 @@ const Sheet = memo(function Sheet({ layout, ground, handBar, highlight }: SheetP
           hasPrefix={layout.size !== 'strip'}
         />
       ))}
-    </svg>
+    </Svg>
   )
 })
 
@@ -130,9 +131,7 @@ function EngravedScore(props: ScoreProps) {
   )
 }
 
-/** Presses are for the bars' own buttons over it. */
-const SHEET: CSSProperties = { display: 'flex', pointerEvents: 'none' }
-
 const styles = StyleSheet.create({
   window: { overflow: 'hidden', userSelect: 'none' },
+  sheet: { display: 'flex', pointerEvents: 'none' },
 })

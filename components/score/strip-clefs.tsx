@@ -1,5 +1,6 @@
 import { memo, useMemo } from 'react'
 import { View } from 'react-native'
+import { Svg } from 'react-native-svg'
 import { useTheme } from '@/components/theme'
 import { paintMarks } from '@/shared/notation/paint-marks'
 import type { ScoreLayout } from '@/shared/notation/score-layout'
@@ -50,9 +51,9 @@ export const StripClefs = memo(function StripClefs({ layout, ground, isMoved }: 
       />
       {isMoved && <View {...fadeFrom(ground, system.prefixPx, layout.spacePx)} />}
       <View>
-        <svg width={system.prefixPx + layout.spacePx} height={layout.heightPx} style={{ display: 'flex' }}>
+        <Svg width={system.prefixPx + layout.spacePx} height={layout.heightPx} style={{ display: 'flex' }}>
           <PaintedMarks painted={painted} colors={colors} ground={ground} />
-        </svg>
+        </Svg>
       </View>
     </View>
   )

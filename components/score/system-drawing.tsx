@@ -1,4 +1,5 @@
 import { memo, useMemo } from 'react'
+import { G, Rect } from 'react-native-svg'
 import { MOTION_MS, useTheme, type Pigments } from '@/components/theme'
 import { paintMarks } from '@/shared/notation/paint-marks'
 import type { BarLayout, SystemLayout } from '@/shared/notation/score-layout'
@@ -17,9 +18,9 @@ type BarProps = Readonly<{ bar: BarLayout; colors: Pigments; ground: string; eas
 function BarDrawing({ bar, colors, ground, easeMs }: BarProps) {
   const painted = useMemo(() => paintMarks(bar.marks), [bar.marks])
   return (
-    <g {...easedTransform(bar.xPx, 0, easeMs)}>
+    <G {...easedTransform(bar.xPx, 0, easeMs)}>
       <PaintedMarks painted={painted} colors={colors} ground={ground} />
-    </g>
+    </G>
   )
 }
 
@@ -50,22 +51,22 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
   const hand = system.bars.find(({ number }) => number === handBar)
   const top = system.stavesBox.top - spacePx
   return (
-    <g transform={`translate(${system.xPx} ${system.yPx})`}>
+    <G x={system.xPx} y={system.yPx}>
       {hand && (
-        <g {...easedTransform(hand.xPx, 0, easeMs)}>
-          <rect x={1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
-        </g>
+        <G {...easedTransform(hand.xPx, 0, easeMs)}>
+          <Rect x={1} y={0} width={hand.widthPx - 2} height={system.heightPx} fill={colors.leaf} />
+        </G>
       )}
       {system.bars.filter(isLit).map((bar) => (
-        <g key={bar.number} {...easedTransform(bar.xPx, 0, easeMs)}>
-          <rect
+        <G key={bar.number} {...easedTransform(bar.xPx, 0, easeMs)}>
+          <Rect
             x={0}
             y={top}
             width={bar.widthPx}
             height={system.stavesBox.bottom + spacePx - top}
             fill={groundOf(bar)}
           />
-        </g>
+        </G>
       ))}
       <PaintedMarks painted={lines} colors={colors} ground={ground} />
       {hasPrefix && <PaintedMarks painted={prefix} colors={colors} ground={ground} />}
@@ -73,6 +74,6 @@ export const SystemDrawing = memo(function SystemDrawing(props: Props) {
         <BarDrawing key={bar.number} bar={bar} colors={colors} ground={groundOf(bar)} easeMs={easeMs} />
       ))}
       <PaintedMarks painted={spans} colors={colors} ground={ground} />
-    </g>
+    </G>
   )
 })

@@ -1,5 +1,6 @@
 import { create } from 'qrcode'
 import { useMemo } from 'react'
+import Svg, { Path, Rect } from 'react-native-svg'
 import { LIGHT } from '@/components/theme'
 
 /** Light modules that must surround a code, by its standard (ISO/IEC 18004). */
@@ -16,16 +17,16 @@ export function QrCode({ text, sizePx, label }: Readonly<{ text: string; sizePx:
     return { path: drawn, modules: grid.size + 2 * QUIET_MODULES }
   }, [text])
   return (
-    <svg
+    <Svg
       width={sizePx}
       height={sizePx}
       viewBox={`0 0 ${modules} ${modules}`}
       role="img"
       aria-label={label}
-      shapeRendering="crispEdges"
+      {...({ shapeRendering: 'crispEdges' } as object)}
     >
-      <rect x={0} y={0} width={modules} height={modules} fill={LIGHT.leaf} />
-      <path d={path} fill={LIGHT.lampblack} />
-    </svg>
+      <Rect x={0} y={0} width={modules} height={modules} fill={LIGHT.leaf} />
+      <Path d={path} fill={LIGHT.lampblack} />
+    </Svg>
   )
 }
