@@ -85,33 +85,45 @@ function momentsOf(onsets: readonly Onset[], otherAt: (bar: number) => Pitch | n
   const last = onsets.length - 1
   let heldTicks = 0
   for (let index = last; index >= 0; index -= 1) {
-    const { bar, place, note, ticks, isHeld } = onsets[index] as Onset
-    const soundingTicks = ticks + heldTicks
-    heldTicks = isHeld ? soundingTicks : 0
-    const other = otherAt(bar)
-    const isSonority = other !== null && note !== null && note !== 'rest'
-    const order = isSonority && comparePitches(note, other) < 0 ? -1 : 1
-    const steps = isSonority ? order * stepsFrom(other, note) : 0
-    const semitones = isSonority ? order * semitonesFrom(other, note) : 0
-    const octaves = Math.floor(steps / 7)
-    moments[index] = {
-      bar,
-      index,
-      place,
-      note,
-      other,
-      steps,
-      semitones,
-      simpleSteps: steps - 7 * octaves,
-      simpleSemitones: semitones - 12 * octaves,
-      isStruck: !isHeld,
-      ticks: soundingTicks,
-      isFirst: index === 0,
-      isPenultimate: index === last - 1,
-      isLast: index === last,
-    }
+    const onset = onsets[index] as Onset
+    const soundingTicks = onset.ticks + heldTicks
+    heldTicks = onset.isHeld ? soundingTicks : 0
+    const isNextToLast = index === last - 1
+    moments[index] = momentOf(onset, otherAt(onset.bar), soundingTicks, index, isNextToLast, index === last)
   }
   return moments
+}
+
+/** One onset as rules see it, for readings and for whoever makes moments one at a time. */
+export function momentOf(
+  { bar, place, note, isHeld }: Readonly<Pick<Onset, 'bar' | 'place' | 'note' | 'isHeld'>>,
+  other: Pitch | null,
+  ticks: number,
+  index: number,
+  isPenultimate: boolean,
+  isLast: boolean,
+): Moment {
+  const isSonority = other !== null && note !== null && note !== 'rest'
+  const order = isSonority && comparePitches(note, other) < 0 ? -1 : 1
+  const steps = isSonority ? order * stepsFrom(other, note) : 0
+  const semitones = isSonority ? order * semitonesFrom(other, note) : 0
+  const octaves = Math.floor(steps / 7)
+  return {
+    bar,
+    index,
+    place,
+    note,
+    other,
+    steps,
+    semitones,
+    simpleSteps: steps - 7 * octaves,
+    simpleSemitones: semitones - 12 * octaves,
+    isStruck: !isHeld,
+    ticks,
+    isFirst: index === 0,
+    isPenultimate,
+    isLast,
+  }
 }
 
 /** The pitch of a name; what is no pitch counts as unwritten, as readers of documents ignore what does not parse. */

@@ -1,0 +1,5 @@
+export { createSearch } from './search'
+export type { AliveNotes, Best, Inquiry, Question, Search, SearchOptions, Ways } from './search'
+export type { DeadEnd } from './dead-end'
+export type { Limits } from './graph'
+export type { Compass } from './pool'
