@@ -60,6 +60,8 @@ export function DeskRubric({
         borderTopWidth: 1,
         borderBottomWidth: 1,
         borderColor: colors.hairline,
+        // Outside what scrolls, so that lines are cut between and never through.
+        paddingVertical: space.half - 2,
         ...(heightPx === null ? {} : { height: heightPx }),
       }}
     >
@@ -70,7 +72,7 @@ export function DeskRubric({
         style={{
           flex: 1,
           overflowY: heightPx === null ? 'visible' : 'auto',
-          padding: `${space.half - 2}px ${heightPx === null ? space.double : space.one}px`,
+          padding: `0 ${heightPx === null ? space.double : space.one}px`,
           display: 'flex',
           flexDirection: 'column',
           gap: space.small,

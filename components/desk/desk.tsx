@@ -20,10 +20,13 @@ import { DeskSettings } from './desk-settings'
 import { SteadyHeight } from './steady-height'
 import { useDesk, type SheetPen } from './use-desk'
 
-const RUBRIC_PX = 92
+/** Room for four whole lines; on a low screen, for three, then two. */
+const RUBRIC_PX = 114
+const MIDDLE_SCREEN_PX = 760
+const MIDDLE_RUBRIC_PX = 91
 /** Screens so low that the rungs need the room more. */
 const LOW_SCREEN_PX = 640
-const LOW_RUBRIC_PX = 62
+const LOW_RUBRIC_PX = 68
 const SIDE_PX = 400
 
 export type DeskProps = Readonly<{
@@ -41,6 +44,9 @@ export type DeskProps = Readonly<{
   isHandUp: boolean
   onHand: () => void
 }>
+
+const rubricHeightPx = (screenPx: number): number =>
+  screenPx < LOW_SCREEN_PX ? LOW_RUBRIC_PX : screenPx < MIDDLE_SCREEN_PX ? MIDDLE_RUBRIC_PX : RUBRIC_PX
 
 /** The student's desk: the score in a strip, the bar in hand, their own notes, what is said of them. */
 export function Desk(props: DeskProps) {
@@ -120,7 +126,7 @@ export function Desk(props: DeskProps) {
       released={view.released}
       hasWritten={Object.keys(desk.own).length > 0}
       prompt={view.stage.prompt}
-      heightPx={isWide ? null : height < LOW_SCREEN_PX ? LOW_RUBRIC_PX : RUBRIC_PX}
+      heightPx={isWide ? null : rubricHeightPx(height)}
     />
   )
   const ladder = <DeskLadder model={model} onHearRung={hearRung} onSettings={() => setSetting(true)} />
@@ -162,7 +168,9 @@ export function Desk(props: DeskProps) {
         </View>
       ) : (
         <>
-          <SteadyHeight>{score}</SteadyHeight>
+          <View style={{ paddingTop: space.small }}>
+            <SteadyHeight>{score}</SteadyHeight>
+          </View>
           {rubric}
           {ladder}
           {footer}

@@ -87,7 +87,7 @@ const useRungStyles = createStyles((colors) => ({
     fontVariant: ['lining-nums'],
     userSelect: 'none',
   },
-  sign: { fontSize: type.text, marginLeft: 2 },
+  sign: { fontSize: type.large, lineHeight: leading.title, marginLeft: 2 },
   interval: {
     flex: 1,
     minWidth: 0,

@@ -43,8 +43,14 @@ export function BarActButtons({
       {has && acts.canFreeze ? (
         <Button label={lectern.freeze(short)} onPress={() => onAct('freeze', bars)} />
       ) : null}
-      {has && acts.canClear ? (
-        <Button label={lectern.clear} hasPopup="dialog" onPress={() => setClearing(true)} />
+      {has && (acts.canClear || acts.canFreeze) ? (
+        // Its place is kept while bars are open: the first proposal must not push the others aside.
+        <Button
+          label={lectern.clear}
+          hasPopup="dialog"
+          isDisabled={!acts.canClear}
+          onPress={() => setClearing(true)}
+        />
       ) : null}
       {has && acts.canTakeBack ? (
         <Button label={lectern.takeBack} onPress={() => onAct('take-back', bars)} />

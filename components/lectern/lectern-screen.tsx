@@ -8,12 +8,10 @@ import { tellWallsHere } from '@/components/lesson/wall-cues'
 import { useWords } from '@/components/words'
 import { api } from '@/shared/api'
 import { can } from '@/shared/board'
-import type { PresentMember } from '@/shared/wire/rooms'
 import { createLecternPen } from './lectern-pen'
 import { Lectern, type LecternPen } from './lectern'
 import type { WallCue } from './use-hearing'
 
-const NOBODY: readonly PresentMember[] = []
 const IDLE: LecternPen = { act: () => {}, adopt: () => {}, undoAdopt: () => {}, stage: () => {} }
 
 /** The lectern of a lesson. A lesson that is opened again has a new room, which is entered anew. */
@@ -53,7 +51,7 @@ function LecternInLesson({ lessonId, onReopened }: Readonly<{ lessonId: string; 
     [send, lessonId],
   )
   const people = useMemo(
-    () => members?.filter(({ role }) => role === 'student' || role === 'guest') ?? NOBODY,
+    () => members?.filter(({ role }) => role === 'student' || role === 'guest') ?? null,
     [members],
   )
 

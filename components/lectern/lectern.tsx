@@ -1,11 +1,11 @@
 import { useCallback, useDeferredValue, useMemo, useRef, useState } from 'react'
-import { View } from 'react-native'
+import { useWindowDimensions, View } from 'react-native'
 import { selectedBars, type Selection } from '@/components/lesson/bars'
 import { rubricsOf, setAsideRubrics, type Rubric } from '@/components/lesson/rubrics'
 import type { RoomGroup } from '@/components/lesson/room'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { space, useTheme, useWidth } from '@/components/theme'
-import { Button, Notice, Txt, useTitle } from '@/components/ui'
+import { Button, EasedStack, Notice, Txt, useTitle } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Highlight } from '@/components/score'
 import type { Lesson } from '@/shared/api/lessons'
@@ -25,7 +25,10 @@ import { TaskPanel } from './task-panel'
 import { useHearing, type WallCue } from './use-hearing'
 
 const SIDE_PX = 280
-const SCORE_PX = 290
+/** The score's place is kept whatever stands in it; a higher window gives it more. */
+const LEAST_SCORE_PX = 290
+const MOST_SCORE_PX = 440
+const SCORE_SHARE = 0.37
 
 /** Every act of the lectern on the board; each is one change of the document. */
 export type LecternPen = Readonly<{
@@ -42,7 +45,8 @@ export type LecternProps = Readonly<{
   chorus: ChorusState
   here: number
   hands: number
-  people: readonly PresentMember[]
+  /** Null until they are known. */
+  people: readonly PresentMember[] | null
   /** Names of everyone who ever came in, by member id. */
   names: ReadonlyMap<string, string>
   isOffline: boolean
@@ -65,6 +69,8 @@ export function Lectern(props: LecternProps) {
   useTitle(lesson.title)
   const { colors } = useTheme()
   const { widthPx, isWide } = useWidth()
+  const { height: heightPx } = useWindowDimensions()
+  const scorePx = Math.round(Math.min(MOST_SCORE_PX, Math.max(LEAST_SCORE_PX, heightPx * SCORE_SHARE)))
   const { view, judge } = useLessonView(board)
   const [selection, setSelection] = useState<Selection>(NOTHING)
   const [isNamed, setNamed] = useState(true)
@@ -87,7 +93,7 @@ export function Lectern(props: LecternProps) {
     () => [...rubricsOf(judge.ofLine(), words), ...setAsideRubrics(view, words)],
     [judge, view, words],
   )
-  const people = useMemo(() => sortPeople(props.people), [props.people])
+  const people = useMemo(() => props.people && sortPeople(props.people), [props.people])
   const hearing = useHearing(view, props.onCue)
   const { hear, stop, playingId } = hearing
 
@@ -187,15 +193,17 @@ export function Lectern(props: LecternProps) {
             onHearing={() => setHearingOpen(true)}
           />
         </View>
-        <SelectableScore
-          input={reading.score}
-          width={scoreWidthPx}
-          maxHeight={isWide ? SCORE_PX : undefined}
-          selection={selection}
-          onSelect={setSelection}
-          highlight={highlight}
-          label={words.lectern.scoreLabel}
-        />
+        <View style={{ minHeight: isWide ? scorePx : undefined, paddingBottom: space.one }}>
+          <SelectableScore
+            input={reading.score}
+            width={scoreWidthPx}
+            maxHeight={isWide ? scorePx - space.one : undefined}
+            selection={selection}
+            onSelect={setSelection}
+            highlight={highlight}
+            label={words.lectern.scoreLabel}
+          />
+        </View>
         {hearing.problem ? <Notice kind="note" title={hearing.problem} /> : null}
       </View>
       <View
@@ -207,27 +215,34 @@ export function Lectern(props: LecternProps) {
           paddingHorizontal: marginPx,
           paddingTop: space.half,
           paddingBottom: space.wide,
-          gap: space.wide,
         }}
       >
-        <RoomList
-          reading={reading}
-          view={view}
-          names={props.names}
-          isNamed={isNamed}
-          onNamed={setNamed}
-          isWide={isWide}
-          heardKey={playingId}
-          onHear={hearGroup}
-          onAdopt={isReadOnly ? null : adopt}
-        />
-        <LineFindings
-          rubrics={lineRubrics}
-          hasLine={Object.keys(view.line).length > 0}
-          onPoint={setPointedAt}
-          onSelect={setSelection}
-        />
-        {isWide ? null : side}
+        <EasedStack gapPx={space.wide}>
+          <RoomList
+            key="room"
+            reading={reading}
+            view={view}
+            names={props.names}
+            isNamed={isNamed}
+            onNamed={setNamed}
+            isWide={isWide}
+            heardKey={playingId}
+            onHear={hearGroup}
+            onAdopt={isReadOnly ? null : adopt}
+          />
+          <LineFindings
+            key="line"
+            rubrics={lineRubrics}
+            hasLine={Object.keys(view.line).length > 0}
+            onPoint={setPointedAt}
+            onSelect={setSelection}
+          />
+          {isWide ? null : (
+            <View key="side" style={{ gap: space.wide }}>
+              {side}
+            </View>
+          )}
+        </EasedStack>
       </View>
     </View>
   )

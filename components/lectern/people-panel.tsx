@@ -11,7 +11,8 @@ export function PeoplePanel({
   onLower,
   onRemove,
 }: Readonly<{
-  people: readonly PresentMember[]
+  /** Null until they are known. */
+  people: readonly PresentMember[] | null
   onLower: (memberId: string) => void
   onRemove: (memberId: string) => void
 }>) {
@@ -24,13 +25,13 @@ export function PeoplePanel({
       <Heading level={2} kind="text">
         {sayings.title}
       </Heading>
-      {people.length === 0 ? (
+      {people?.length === 0 ? (
         <Txt kind="note" tone="lead">
           {sayings.none}
         </Txt>
       ) : null}
       <View role="list" aria-label={sayings.title}>
-        {people.map((person) => (
+        {people?.map((person) => (
           <View
             key={person.memberId}
             role="listitem"

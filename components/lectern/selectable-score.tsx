@@ -143,8 +143,9 @@ export function SelectableScore({ input, width, maxHeight, selection, onSelect, 
 const boxOf = (system: SystemLayout, bar: BarLayout) =>
   ({
     position: 'absolute',
-    left: system.xPx + bar.xPx,
-    top: system.yPx,
+    left: 0,
+    top: 0,
+    transform: `translate(${system.xPx + bar.xPx}px, ${system.yPx}px)`,
     width: bar.widthPx,
     height: system.heightPx,
   }) as const

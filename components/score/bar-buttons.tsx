@@ -41,8 +41,7 @@ export const BarButtons = memo(function BarButtons(props: Props) {
     system.bars.map((bar) => ({
       bar: bars[bar.index] as ScoreBar,
       style: {
-        left: system.xPx + bar.xPx,
-        top: system.yPx,
+        transform: `translate(${system.xPx + bar.xPx}px, ${system.yPx}px)`,
         width: bar.widthPx,
         height: system.heightPx,
       },
@@ -95,6 +94,6 @@ export const BarButtons = memo(function BarButtons(props: Props) {
 
 const styles = StyleSheet.create({
   // The ring stays inside, as the score is cut at its edges.
-  bar: { position: 'absolute', outlineOffset: -3 },
+  bar: { position: 'absolute', left: 0, top: 0, outlineOffset: -3 },
   silent: { pointerEvents: 'none' },
 })

@@ -2,7 +2,7 @@ import { useSyncExternalStore } from 'react'
 import { WIDE_PX } from './scale'
 
 /** Of the page itself: the window's own width counts a scroll bar that takes its room from the page. */
-const readWidthPx = (): number => document.documentElement.clientWidth
+const readWidthPx = (): number => document.documentElement.offsetWidth
 
 function subscribe(tell: () => void): () => void {
   const observer = new ResizeObserver(tell)

@@ -3,7 +3,7 @@ import { firstPitch } from '@/components/lesson/spoken'
 import type { RoomGroup } from '@/components/lesson/room'
 import type { Rubric } from '@/components/lesson/rubrics'
 import { useTheme } from '@/components/theme'
-import { Lozenge, Name, Txt } from '@/components/ui'
+import { EasedStack, Lozenge, Name, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import type { Lesson } from '@/shared/api/lessons'
 import { QrCode } from './qr-code'
@@ -48,48 +48,48 @@ export function WallMargin({
           : {
               width: measure.asidePx,
               minHeight: 0,
-              paddingVertical: px(MARGIN_TYPE.paddingPx),
+              paddingTop: px(MARGIN_TYPE.paddingPx),
+              paddingBottom: px(MARGIN_TYPE.paddingPx / 2),
               gap: px(MARGIN_TYPE.gapPx),
             }
       }
     >
-      <View
-        role="status"
-        style={{ gap: isStacked ? 14 : px(26), flexShrink: 1, minHeight: 0, overflow: 'hidden' }}
-      >
-        {rubrics.map((rubric) => (
-          <View key={rubric.id}>
-            <View style={{ flexDirection: 'row', alignItems: 'center', gap: px(14) }}>
-              <Lozenge
-                kind={rubric.tone === 'breach' ? 'filled' : 'hollow'}
-                tone={TONE[rubric.tone]}
-                sizePx={Math.max(12, px(19))}
-              />
-              <Txt face="serif" tone={TONE[rubric.tone]} style={size}>
-                {rubric.heading}
+      <View role="status" style={{ flexShrink: 1, minHeight: 0, overflow: 'hidden' }}>
+        <EasedStack gapPx={isStacked ? 14 : px(26)}>
+          {rubrics.map((rubric) => (
+            <View key={rubric.id}>
+              <View style={{ flexDirection: 'row', alignItems: 'center', gap: px(14) }}>
+                <Lozenge
+                  kind={rubric.tone === 'breach' ? 'filled' : 'hollow'}
+                  tone={TONE[rubric.tone]}
+                  sizePx={Math.max(12, px(19))}
+                />
+                <Txt face="serif" tone={TONE[rubric.tone]} style={size}>
+                  {rubric.heading}
+                </Txt>
+              </View>
+              <Txt tone={rubric.tone === 'quiet' ? 'lead' : 'lampblack'} style={size}>
+                {rubric.sentence}
+                {rubric.mend ? ` ${rubric.mend}` : ''}
               </Txt>
             </View>
-            <Txt tone={rubric.tone === 'quiet' ? 'lead' : 'lampblack'} style={size}>
-              {rubric.sentence}
-              {rubric.mend ? ` ${rubric.mend}` : ''}
+          ))}
+          {untold > 0 ? (
+            <Txt key="untold" tone="lead" style={size}>
+              {words.wall.moreFindings(untold)}
             </Txt>
-          </View>
-        ))}
-        {untold > 0 ? (
-          <Txt tone="lead" style={size}>
-            {words.wall.moreFindings(untold)}
-          </Txt>
-        ) : null}
-        {groups && names && groups.length > 0 ? (
-          <View style={{ gap: px(10) }}>
-            <Txt face="serif" tone="lead" style={size}>
-              {words.wall.whoOffered}
-            </Txt>
-            {groups.slice(0, MOST_GROUPS).map((group) => (
-              <GroupNames key={group.key} group={group} names={names} sizePx={size.fontSize} />
-            ))}
-          </View>
-        ) : null}
+          ) : null}
+          {groups && names && groups.length > 0 ? (
+            <View key="who" style={{ gap: px(10) }}>
+              <Txt face="serif" tone="lead" style={size}>
+                {words.wall.whoOffered}
+              </Txt>
+              {groups.slice(0, MOST_GROUPS).map((group) => (
+                <GroupNames key={group.key} group={group} names={names} sizePx={size.fontSize} />
+              ))}
+            </View>
+          ) : null}
+        </EasedStack>
       </View>
       {hasSquare && lesson.code ? (
         <View

@@ -28,9 +28,9 @@ export type WallMeasure = Readonly<{
 }>
 
 /** Type of the margin as drawn at 1920. */
-export const MARGIN_TYPE = { sizePx: 27, linePx: 35, squarePx: 196, paddingPx: 28, gapPx: 26, namesPx: 250 }
+export const MARGIN_TYPE = { sizePx: 27, linePx: 35, squarePx: 196, paddingPx: 56, gapPx: 26, namesPx: 250 }
 
-/** How many lines of rubrics the margin holds beside the square and the names. Letters of the sans are near half as wide as high. */
+/** How many lines of rubrics the margin holds beside the square and the names. A letter of the sans takes some two fifths of its size. */
 export function marginRoom(
   { isStacked, scoreHeightPx, asidePx, px }: WallMeasure,
   hasSquare: boolean,
@@ -38,10 +38,10 @@ export function marginRoom(
 ): Readonly<{ lines: number; letters: number }> {
   if (isStacked) return { lines: 16, letters: 38 }
   const { sizePx, linePx, squarePx, paddingPx, gapPx, namesPx } = MARGIN_TYPE
-  const taken = 2 * paddingPx + (hasSquare ? squarePx + gapPx : 0) + (hasNames ? namesPx : 0) + linePx
+  const taken = 1.5 * paddingPx + (hasSquare ? squarePx + gapPx : 0) + (hasNames ? namesPx : 0) + linePx
   return {
     lines: Math.floor((scoreHeightPx - px(taken)) / px(linePx)),
-    letters: Math.floor(asidePx / (px(sizePx) * 0.45)),
+    letters: Math.floor(asidePx / (px(sizePx) * 0.42)),
   }
 }
 

@@ -66,8 +66,9 @@ export function fitRubrics<Told extends Readonly<{ rubric: Rubric }>>(
   let left = lines
   for (const each of told) {
     // Half a line stands between two.
-    left -= rubricLines(each.rubric, letters) + (fitting.length > 0 ? 0.75 : 0)
-    if (left < 0 && fitting.length > 0) break
+    const taken = rubricLines(each.rubric, letters) + (fitting.length > 0 ? 0.75 : 0)
+    if (taken > left && fitting.length > 0) continue
+    left -= taken
     fitting.push(each)
   }
   return fitting

@@ -1,4 +1,4 @@
-import { useMemo } from 'react'
+import { useDeferredValue, useMemo } from 'react'
 import { useWindowDimensions, View } from 'react-native'
 import { PlayingScore } from '@/components/lesson/playing-score'
 import { ScoreText } from '@/components/lesson/score-text'
@@ -14,7 +14,7 @@ import { readWall } from './wall-model'
 import { WallFooter } from './wall-footer'
 import { WallHeader } from './wall-header'
 import { WallMargin } from './wall-margin'
-import { marginRoom, measureWall } from './wall-measure'
+import { MARGIN_TYPE, marginRoom, measureWall } from './wall-measure'
 
 export type WallProps = Readonly<{
   lesson: Lesson
@@ -31,7 +31,9 @@ export type WallProps = Readonly<{
 
 /** What is projected: the score, the room, what is said of both, the task, and the way in. */
 export function Wall(props: WallProps) {
-  const { lesson, board, chorus } = props
+  const { lesson, board } = props
+  // A room of hundreds may speak at once: what it says is read and drawn between frames.
+  const chorus = useDeferredValue(props.chorus)
   const words = useWords()
   const { colors } = useTheme()
   useWholeWindow()
@@ -66,12 +68,17 @@ export function Wall(props: WallProps) {
             : { flex: 1, flexDirection: 'row', gap: measure.gapPx, minHeight: 0 }
         }
       >
-        <View style={{ width: measure.scoreWidthPx, justifyContent: 'center' }}>
+        <View
+          style={{
+            width: measure.scoreWidthPx,
+            paddingTop: isStacked ? 0 : measure.px(MARGIN_TYPE.paddingPx),
+          }}
+        >
           <PlayingScore
             input={wall.score}
             size={isStacked ? 'page' : 'wall'}
             width={measure.scoreWidthPx}
-            maxHeight={isStacked ? undefined : measure.scoreHeightPx}
+            maxHeight={isStacked ? undefined : measure.scoreHeightPx - 2 * measure.px(MARGIN_TYPE.paddingPx)}
             accessibilityLabel={words.desk.scoreLabel(lesson.title)}
           />
         </View>
@@ -89,7 +96,7 @@ export function Wall(props: WallProps) {
         prompt={view.stage.prompt}
         released={view.released}
         offered={wall.offered}
-        here={props.here}
+        here={Math.max(props.here, wall.offered)}
         notice={props.notice}
         onLetSound={props.onLetSound}
         measure={measure}

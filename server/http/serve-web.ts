@@ -22,12 +22,21 @@ function setFreshness(response: Response, file: string): void {
   )
 }
 
+/** The path that an address names, or null for an address that is no text: half a letter, escaped. */
+function decodedPath(address: string): string | null {
+  try {
+    return decodeURIComponent(address)
+  } catch {
+    return null
+  }
+}
+
 /** Serves the compressed twin of a file where the build made one and the browser takes it. */
 const serveCompressed =
   (directory: string): RequestHandler =>
   (request, response, next) => {
     const accepted = request.acceptsEncodings()
-    const file = path.join(directory, path.normalize(decodeURIComponent(request.path)))
+    const file = path.join(directory, path.normalize(decodedPath(request.path) ?? ''))
     if (!file.startsWith(directory + path.sep)) return next()
     const twin = ENCODINGS.find(({ token, ending }) => accepted.includes(token) && existsSync(file + ending))
     if (!twin) return next()
@@ -43,7 +52,8 @@ export function serveWeb(directory: string): Router {
   const router = Router()
   const page = path.join(directory, 'index.html')
   router.use((request, _response, next) => {
-    next(request.method === 'GET' || request.method === 'HEAD' ? undefined : new Refused('not-found'))
+    const isAsked = request.method === 'GET' || request.method === 'HEAD'
+    next(isAsked && decodedPath(request.path) !== null ? undefined : new Refused('not-found'))
   })
   router.use(serveCompressed(directory))
   router.use(

@@ -264,7 +264,7 @@ test('ended, the lesson says so on every screen and keeps the board', async () =
   await lectern.button(words.endGo).click()
   await lectern.sees(words.endedLead)
   for (const phone of phones) await phone.sees(lessonWords.closedBecause['lesson-ended'])
-  await wall.getByText(lessonWords.closedBecause['lesson-ended']).waitFor()
+  await wall.getByText(wallWords.ended).waitFor()
 })
 
 test('nothing threw, and no policy was crossed, on any screen of the lesson', () => {
