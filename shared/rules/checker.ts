@@ -1,5 +1,5 @@
 import { isWhollyWritten, readCantus, readMoments, readVoice, type SetAside } from '@/shared/rules/reading'
-import { resolveRuleSet, type ActiveRule } from '@/shared/rules/rule-set'
+import { resolveRuleSet, rulesInForce, type ActiveRule } from '@/shared/rules/rule-set'
 import type { Breach, Exercise, Finding, Moment, RuleSet, Scope, Step, Voice } from '@/shared/rules/rule'
 import type { BarNotes, Line } from '@/shared/theory/note'
 
@@ -104,9 +104,9 @@ function startRules(
   exercise: Exercise,
   voice: Voice,
 ): readonly Runner[] {
-  return active
+  const inForce = voice === 'cantus' ? active : rulesInForce(active, exercise.species)
+  return inForce
     .filter(({ rule }) => scopes.includes(rule.scope))
-    .filter(({ rule }) => voice === 'cantus' || rule.species.has(exercise.species))
     .map(({ rule, level, params }) => ({
       ruleId: rule.id,
       level,

@@ -4,7 +4,7 @@ import { QUARTER_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
 import type { BarNotes, Line, Note } from '@/shared/theory/note'
 import { parsePitch, pitchClassOf, type Pitch } from '@/shared/theory/pitch'
 
-const NOTE_GRAMMAR = /^(r|[A-G](?:##|#|bb|b)?[0-8])(?::([1-4]))?(~)?$/
+const NOTE_GRAMMAR = /^(r|[A-G](?:##|#|bb|b)?[0-8])(?::([1-4]|[0-3]\.5))?(~)?$/
 
 /** An example made ready to be drawn, played or judged. `cantus` has one pitch a bar; an unwritten bar repeats none. */
 export type ReadExample = Readonly<{

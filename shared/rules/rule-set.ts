@@ -1,5 +1,5 @@
 import { findRule } from '@/shared/rules/registry'
-import type { AnyRule, Finding, RuleId, RuleSet } from '@/shared/rules/rule'
+import type { AnyRule, Finding, RuleId, RuleSet, Species } from '@/shared/rules/rule'
 
 /** A rule of a set with its parameters read: what the checker runs. */
 export type ActiveRule = Readonly<{ rule: AnyRule; level: Finding['level']; params: unknown }>
@@ -37,6 +37,13 @@ export function resolveRuleSet(ruleSet: RuleSet): Resolution {
     }
   }
   return { active, problems }
+}
+
+/** The rules that judge a line in one species: those made for it, without those that another one of them suspends. */
+export function rulesInForce(active: readonly ActiveRule[], species: Species): readonly ActiveRule[] {
+  const ofSpecies = active.filter(({ rule }) => rule.species.has(species))
+  const suspended = new Set(ofSpecies.flatMap(({ rule }) => [...(rule.suspends ?? [])]))
+  return ofSpecies.filter(({ rule }) => !suspended.has(rule.id))
 }
 
 /** What is wrong with a rule set, in words; empty when it may be used. */

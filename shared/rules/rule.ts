@@ -149,6 +149,8 @@ export type Rule<State, Params> = Readonly<{
    * moment by itself. Lets the checker stop early when only a few notes have changed. Left out: the whole line.
    */
   reach?: number
+  /** Rules that are not asked in the species of this one while it is on: a licence that frees from them. */
+  suspends?: ReadonlySet<RuleId>
   explain: Explanation
 }>
 

@@ -10,6 +10,8 @@ export type WrittenOnset = Readonly<{
   /** Written length, within the bar. */
   ticks: number
   isTied: boolean
+  /** A pitch or a value that is tried only where it is already written. */
+  isForeign: boolean
 }>
 
 /**

@@ -8,13 +8,14 @@ import { narrow, readWritten, type Written } from '@/shared/search/narrow'
 import { lineOf, pathAt, walkPaths } from '@/shared/search/paths'
 import type { Places } from '@/shared/search/place'
 import { poolOf, type Compass } from '@/shared/search/pool'
+import { createPlaces } from '@/shared/search/places'
 import { createSeeded } from '@/shared/search/seeded'
-import { placesOfWholeNotes } from '@/shared/search/whole-notes'
+import { createStrangers } from '@/shared/search/strangers'
 import { createWorld, rulesOfLine, type World } from '@/shared/search/world'
 import type { Proposal } from '@/shared/rules/checker'
 import type { SetAside } from '@/shared/rules/reading'
 import type { Line } from '@/shared/theory/note'
-import { comparePitches, parsePitch, type Pitch, type PitchName } from '@/shared/theory/pitch'
+import type { PitchName } from '@/shared/theory/pitch'
 
 export type SearchOptions = Readonly<{
   /** Bars that are not read: the rest is finished as if they were not there. */
@@ -93,16 +94,12 @@ export function createSearch(exercise: Exercise, ruleSet: RuleSet, options: Sear
   const bars = exercise.cantus.map((_, index) => index + 1).filter((bar) => !setAside?.has(bar))
   const active = rulesOfLine(exercise, ruleSet)
   const pool = poolOf(exercise, active, compass)
-  /** Pitches outside the pool that have been written, by bar: they are judged like any other. */
-  const foreign = new Map<number, Pitch[]>()
+  const strangers = createStrangers(exercise, bars, pool)
   let made: Readonly<{ world: World; graph: Graph }> | null = null
   let version = 0
 
   const make = (): Readonly<{ world: World; graph: Graph }> => {
-    const places = placesOfWholeNotes(exercise, bars, (bar) => {
-      const more = foreign.get(bar)
-      return more === undefined ? pool : [...pool, ...more].sort(comparePitches)
-    })
+    const places = createPlaces(exercise, bars, strangers.rhythmsAt, strangers.triedIn)
     const world = createWorld(exercise, active, places)
     return { world, graph: createGraph(world.members, places, limits) }
   }
@@ -111,7 +108,7 @@ export function createSearch(exercise: Exercise, ruleSet: RuleSet, options: Sear
     version += 1
     const asked = version
     const written = readWritten({ ...line, ...offered }, bars)
-    if (addForeign(written, pool, foreign) || made === null) made = make()
+    if (strangers.admit(written) || made === null) made = make()
     const { world, graph } = made
     graph.restart(
       world.places.map((place, index) => narrow(place, world.tried[index] as Uint16Array, written)),
@@ -229,21 +226,4 @@ function aliveOf(graph: Graph, places: Places, waysOn: readonly Counts[]): reado
   return [...slots]
     .sort(([a], [b]) => a - b)
     .map(([at, notes]) => ({ bar: Math.floor(at / 10_000), place: at % 10_000, notes: [...notes.values()] }))
-}
-
-/** Takes written pitches that are not in the pool among those to be tried; true when there was a new one. */
-function addForeign(written: Written, pool: readonly Pitch[], foreign: Map<number, Pitch[]>): boolean {
-  let isNew = false
-  for (const [bar, { notes }] of written) {
-    for (const { pitch } of notes.values()) {
-      const parsed = pitch === null ? null : parsePitch(pitch)
-      if (!parsed?.ok) continue
-      const { value } = parsed
-      const known = foreign.get(bar) ?? []
-      if ([...pool, ...known].some((other) => comparePitches(other, value) === 0)) continue
-      foreign.set(bar, [...known, value])
-      isNew = true
-    }
-  }
-  return isNew
 }

@@ -1,5 +1,5 @@
 /** What stays the same while questions are asked about one exercise: its places, and its laws as automata. */
-import { resolveRuleSet, type ActiveRule } from '@/shared/rules/rule-set'
+import { resolveRuleSet, rulesInForce, type ActiveRule } from '@/shared/rules/rule-set'
 import type { Exercise, RuleId, RuleSet } from '@/shared/rules/rule'
 import type { Automaton } from '@/shared/search/automaton'
 import { createGroup } from '@/shared/search/group'
@@ -23,7 +23,7 @@ export type World = Readonly<{
 
 /** The rules of a set that speak of an added line in the exercise's species. */
 export const rulesOfLine = ({ species }: Exercise, ruleSet: RuleSet): readonly ActiveRule[] =>
-  resolveRuleSet(ruleSet).active.filter(({ rule }) => rule.scope !== 'cantus' && rule.species.has(species))
+  rulesInForce(resolveRuleSet(ruleSet).active, species).filter(({ rule }) => rule.scope !== 'cantus')
 
 export function createWorld(exercise: Exercise, active: readonly ActiveRule[], places: Places): World {
   const laws = active.filter(({ level }) => level === 'law')

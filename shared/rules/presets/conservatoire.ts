@@ -1,3 +1,4 @@
+import { FOURTH_FIFTH } from '@/shared/rules/presets/fourth-fifth'
 import { ANY_VOICE, law, OFF, taste } from '@/shared/rules/presets/setting'
 import type { RuleSet } from '@/shared/rules/rule'
 
@@ -82,5 +83,7 @@ export const conservatoire: RuleSet = {
     's1-repeat': taste({ maxRepeats: 99, maxInRow: 3, lowerMayRepeat: false }),
     'rel-tritone': taste(),
     'rel-chromatic': law(),
+    // Two voices, fourth and fifth species.
+    ...FOURTH_FIFTH.conservatoire,
   },
 }

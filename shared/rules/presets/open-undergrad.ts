@@ -1,3 +1,4 @@
+import { FOURTH_FIFTH } from '@/shared/rules/presets/fourth-fifth'
 import { law, OFF, taste } from '@/shared/rules/presets/setting'
 import type { RuleSet } from '@/shared/rules/rule'
 
@@ -81,5 +82,7 @@ export const openUndergrad: RuleSet = {
     's1-repeat': law({ maxRepeats: 1 }),
     'rel-tritone': OFF,
     'rel-chromatic': law(),
+    // Two voices, fourth and fifth species.
+    ...FOURTH_FIFTH['open-undergrad'],
   },
 }

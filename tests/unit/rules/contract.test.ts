@@ -2,6 +2,7 @@ import { existsSync } from 'node:fs'
 import { join } from 'node:path'
 import { judgeExample, readExample } from '@/shared/rules/example'
 import { FIRST_SPECIES_RULES } from '@/shared/rules/first-species'
+import { FOURTH_SPECIES_RULES } from '@/shared/rules/fourth-species'
 import { MELODY_RULES } from '@/shared/rules/melody'
 import { RULES } from '@/shared/rules/registry'
 import type { AnyRule } from '@/shared/rules/rule'
@@ -9,7 +10,14 @@ import { ruleSetProblems } from '@/shared/rules/rule-set'
 import { findSource } from '@/shared/rules/sources'
 import { CATALOGUE } from './catalogue'
 
-const folderOf = (rule: AnyRule): string => (MELODY_RULES.includes(rule) ? 'melody' : 'first-species')
+/** Folders of rules, with the part of the catalogue that each holds. */
+const FOLDERS: readonly (readonly [folder: string, rules: readonly AnyRule[], species: number])[] = [
+  ['melody', MELODY_RULES, 0],
+  ['first-species', FIRST_SPECIES_RULES, 1],
+  ['fourth-species', FOURTH_SPECIES_RULES, 4],
+]
+const folderOf = (rule: AnyRule): string =>
+  FOLDERS.find(([, rules]) => rules.includes(rule))?.[0] ?? 'no folder'
 const rows = RULES.map((rule) => [rule.id, rule] as const)
 
 /** Freezes an object and all it holds, so that writing to it throws. */
@@ -22,13 +30,17 @@ function freezeDeeply<Value>(value: Value): Value {
 }
 
 describe('the registry', () => {
-  test('holds just the rules of sections 1 and 2 of the catalogue, each once, in its order', () => {
-    expect(MELODY_RULES.map(({ id }) => id)).toEqual(
-      CATALOGUE.filter(({ section }) => section === 1).map(({ id }) => id),
-    )
-    expect(FIRST_SPECIES_RULES.map(({ id }) => id)).toEqual(
-      CATALOGUE.filter(({ section }) => section === 2).map(({ id }) => id),
-    )
+  test.each(FOLDERS)(
+    'holds in %s just the rules of its part of the catalogue, in its order',
+    (_folder, rules, species) => {
+      expect(rules.map(({ id }) => id)).toEqual(
+        CATALOGUE.filter((row) => row.species === species).map(({ id }) => id),
+      )
+    },
+  )
+
+  test('holds the whole catalogue, each rule once, in its order', () => {
+    expect(RULES.map(({ id }) => id)).toEqual(CATALOGUE.map(({ id }) => id))
     expect(new Set(RULES.map(({ id }) => id)).size).toBe(RULES.length)
   })
 

@@ -46,7 +46,7 @@ test.each(WORLDS)(
 )
 
 describe(`a hundred thousand lines from seed ${SEED}`, () => {
-  const CASES = [FUX_EXERCISES[0], FUX_EXERCISES[11]]
+  const CASES = [FUX_EXERCISES[0], FUX_EXERCISES[1]]
     .map((exercise) => exercise as Exercise)
     .flatMap((exercise) => ruleSetsFor(exercise).map((ruleSet) => ({ ruleSet, exercise })))
   test.each(CASES)('$ruleSet.id $exercise.mode $exercise.position', ({ ruleSet, exercise }) => {

@@ -114,11 +114,8 @@ describe('dead ends', () => {
   })
 
   test('tell of a bar that has no place in the rhythm of the species', () => {
-    const halves = [
-      { pitch: 'A4', ticks: 960 },
-      { pitch: 'G4', ticks: 960 },
-    ]
-    const { deadEnd } = createSearch(DORIAN, CORE_1).find({ line: { 3: halves } })
+    const half = [{ pitch: 'A4', ticks: 960 }]
+    const { deadEnd } = createSearch(DORIAN, CORE_1).find({ line: { 3: half } })
     expect(deadEnd).toEqual({ bar: 3, rules: [], because: 'rhythm' })
   })
 })

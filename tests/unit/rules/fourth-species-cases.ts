@@ -1,0 +1,286 @@
+/**
+ * What each rule of fourth species accepts and rejects: a table of facts, and therefore long. Common practice where the
+ * catalogue's sources give no example.
+ */
+import type { Row } from './rule-cases'
+
+export const FOURTH_CANTUS = 'D4 F4 E4 D4'
+const LINE = 'r:2,A4:2~ A4:2,D5:2~ D5:2,C#5:2 D5'
+const LINE_BELOW = 'r:2,D3:2~ D3:2,D4:2~ D4:2,C#4:2 D4'
+const BELOW = { position: 'below' } as const
+const PHRYGIAN = { mode: 'phrygian', final: 'E', cantus: 'E4 G4 F4 E4' } as const
+const RISING = { mode: 'ionian', final: 'C', cantus: 'C4 E4 B3 C4' } as const
+
+export const FOURTH_CASES: Readonly<Record<string, readonly Row[]>> = {
+  's4-rhythm': [
+    [LINE, [], 'halves, tied'],
+    ['r:2,A4:2 A4:2,D5:2 D5:2,C#5:2 D5', [], 'ties are another rule’s matter'],
+    ['r:2,A4:2~ A4:2 . D5', [], 'what is not written is not judged'],
+    ['A4:2,D5:2~ D5:2,A4:2~ A4:2,C#5:2 D5', [], 'no rest at the beginning'],
+    ['r:2,A4:2~ A4 D5:2,C#5:2 D5', [2], 'a whole note inside'],
+    ['r:2,A4:2~ A4:1,D5:1,D5:2~ D5:2,C#5:2 D5', [2], 'quarters, told once'],
+    ['r:2,A4:2~ A4:2,r:2 D5:2,C#5:2 D5', [2], 'a rest inside'],
+    ['r:1,A4:3~ A4:2,D5:2~ D5:2,C#5:2 D5', [1], 'a quarter rest'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,C#5:2 D5:2,D5:2', [4], 'two halves at the end'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:3,C#5:1 D5', [3], 'a dotted half'],
+  ],
+  's4-open': [
+    [LINE, [], 'a fifth above'],
+    ['r:2,D5:2~ D5:2,A4:2~ A4:2,C#5:2 D5', [], 'an octave above'],
+    [LINE_BELOW, [], 'an octave below', BELOW],
+    ['A4:2,D5:2~ . . .', [], 'no rest, where it is optional', { params: { rest: 'optional' } }],
+    ['r:2,F4:2~ F4:2,A4:2 . .', [], 'a third, where it may begin', { params: { imperfect: true } }],
+    ['. A4:2,D5:2~ . .', [], 'the first bar is not written'],
+    ['A4:2,D5:2~ . . .', [1], 'no rest'],
+    ['r:1,A4:1,D5:2~ . . .', [1], 'a quarter rest'],
+    ['r:2,F4:2~ . . .', [1], 'a third'],
+    ['r:2,G3:2~ . . .', [1], 'a fifth below', BELOW],
+    ['r:2,A4:2~ . . .', [1], 'a fifth, where only the octave begins', { params: { above: ['octave'] } }],
+  ],
+  's4-upbeat-consonant': [
+    [LINE, [], 'fifth, sixth, sixth'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2 D5', [], 'a held dissonance is another rule’s matter'],
+    ['r:2,A4:2~ A4:2,B4:2~ . .', [2], 'an augmented fourth'],
+    ['r:2,G4:2~ G4:2,E4:2~ . .', [1, 2], 'a fourth, a second'],
+  ],
+  's4-resolve': [
+    [LINE, [], 'a seventh falls to the sixth'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,E5:2 D5', [], 'rising is another rule’s matter'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2 D5', [], 'what follows is not written'],
+    ['r:2,A4:2~ A4:2,D5:2 D5:2,C#5:2 D5', [3], 'struck, though it falls'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,B4:2 D5', [3], 'a leap down'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,D5:2 D5', [3], 'struck again'],
+    ['r:2,D5:2~ D5:2,A4:2~ A4:2,E5:2~ E5', [3, 4], 'the last note, and a fourth left by leap'],
+  ],
+  's4-set-above': [
+    [LINE, [], 'seven, six'],
+    ['r:2,A4:2~ A4:2,F5:2~ F5:2,E5:2 D5', [], 'nine, eight'],
+    ['r:2,A4:2~ A4:2,F4:2~ F4:2,E4:2 D4', [], 'two, one, where it is used', { params: { allowed: ['2-1'] } }],
+    ['r:2,A4:2~ A4:2,F4:2~ F4:2,E4:2 D4', [3], 'two, one'],
+    ['r:2,D4:2~ D4:2,C#4:2 . .', [], 'below the cantus', BELOW],
+    [
+      'r:2,B4:2~ B4:2,A4:2 . .',
+      [2],
+      'an augmented fourth, where fours are not used',
+      { params: { allowed: ['7-6'] } },
+    ],
+    [
+      'r:2,A4:2~ A4:2,F5:2~ F5:2,E5:2 D5',
+      [3],
+      'nine, eight, as a remark',
+      { params: { allowed: ['7-6'], secondBest: ['9-8'] } },
+    ],
+    ['r:2,F4:2~ F4:2,E4:2 . .', [2], 'a diminished fifth', { cantus: 'D4 B3 E4 D4' }],
+  ],
+  's4-set-below': [
+    [LINE_BELOW, [], 'two, three', BELOW],
+    ['r:2,D3:2~ D3:2,D3:2~ D3:2,C#3:2 D3', [], 'nine, ten', BELOW],
+    ['r:2,B3:2~ B3:2,A3:2 . .', [], 'four, five', { ...BELOW, cantus: 'D4 E4 E4 D4' }],
+    ['r:2,D4:2~ D4:2,F3:2~ F3:2,E3:2 D3', [3], 'seven, eight', BELOW],
+    [
+      'r:2,B3:2~ B3:2,A3:2 . .',
+      [2],
+      'four, five, where only 2–3 is used',
+      { ...BELOW, cantus: 'D4 E4 E4 D4', params: { allowed: ['2-3'] } },
+    ],
+    [
+      'r:2,B3:2~ B3:2,A3:2 . .',
+      [2],
+      'four, five, as a remark',
+      { ...BELOW, cantus: 'D4 E4 E4 D4', params: { allowed: ['2-3'], secondBest: ['4-5'] } },
+    ],
+    ['r:2,B3:2~ B3:2,A3:2 . .', [2], 'a diminished fifth', { ...BELOW, cantus: 'D4 F4 E4 D4' }],
+  ],
+  's4-consonant-tie': [
+    [LINE, [], 'a third is left by a fourth up'],
+    ['r:2,A4:2~ A4:2,D4:2 . .', [], 'by a fifth down'],
+    ['r:2,A4:2~ A4:2,A4:2~ . .', [2], 'it is struck again'],
+    ['r:2,A4:2~ A4:2,D5:2~ . .', [2], 'a leap, where steps are asked for', { params: { motion: 'step' } }],
+    ['r:2,A4:2~ A4:2,B4:2~ . .', [], 'a step, where steps are asked for', { params: { motion: 'step' } }],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,D5:2 D5', [], 'a dissonance is another rule’s matter'],
+  ],
+  's4-chain-limit': [
+    ['r:2,D5:2~ D5:2,G5:2~ G5:2,F5:2~ F5:2,E5:2~ E5:2,D5:2 .', [], 'three', { cantus: 'D4 B4 A4 G4 F4 E4' }],
+    [
+      'r:2,A5:2~ A5:2,G5:2~ G5:2,F5:2~ F5:2,E5:2~ E5:2,D5:2~ D5:2,C#5:2 D5',
+      [5, 6],
+      'five',
+      { cantus: 'D4 B4 A4 G4 F4 E4 D4' },
+    ],
+    [
+      'r:2,A5:2~ A5:2,G5:2~ G5:2,F5:2~ . E5:2,D5:2~ D5:2,C#5:2 D5',
+      [],
+      'over a gap',
+      { cantus: 'D4 B4 A4 G4 F4 E4 D4' },
+    ],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,C#5:2 D5', [], 'one', { params: { max: 1 } }],
+    [
+      'r:2,D4:2~ D4:2,C4:2~ C4:2,B3:2~ B3:2,A3:2 .',
+      [3, 4],
+      'three below, where one is the limit',
+      { ...BELOW, cantus: 'D4 E4 D4 C4 D4', params: { max: 1 } },
+    ],
+  ],
+  's4-perfect-chain': [
+    [LINE, [], 'sixths'],
+    [
+      'r:2,A4:2~ A4:2,E5:2~ E5:2,D5:2~ D5:2,E5:2~ E5:2,C#5:2 D5',
+      [],
+      'one octave',
+      { cantus: 'D4 C4 D4 C4 E4 D4' },
+    ],
+    [
+      'r:2,A4:2~ A4:2,E5:2~ E5:2,D5:2~ D5:2,C5:2~ C5:2,C#5:2 D5',
+      [4],
+      'two octaves',
+      { cantus: 'D4 C4 D4 C4 E4 D4' },
+    ],
+    ['r:2,D5:2~ D5:2,C5:2~ C5:2,B4:2 . .', [3], 'two six–fives', { cantus: 'D4 F4 E4 D4 C4' }],
+    [
+      'r:2,B3:2~ B3:2,A3:2~ A3:2,G3:2 . .',
+      [3],
+      'two four–fives below',
+      { ...BELOW, cantus: 'D4 E4 D4 F4 D4' },
+    ],
+    ['r:2,D5:2~ D5:2,C5:2~ . B4:2,A4:2 .', [], 'over a gap', { cantus: 'D4 F4 E4 D4 C4' }],
+  ],
+  's4-98-preparation': [
+    [LINE, [], 'a seventh'],
+    ['r:2,A4:2~ A4:2,E5:2~ E5:2,D5:2~ . .', [], 'a ninth out of a tenth', { cantus: 'D4 C4 D4 C4 D4' }],
+    ['r:2,A4:2~ A4:2,F5:2~ F5:2,E5:2 D5', [3], 'a ninth out of an octave'],
+    ['r:2,A4:2~ A4:2,F4:2~ F4:2,E4:2 D4', [3], 'a second out of a unison'],
+    ['r:2,A4:2~ A4:2,F5:2 F5:2,E5:2 D5', [], 'struck anew'],
+    ['r:2,D4:2~ D4:2,F3:2~ F3:2,E3:2 D3', [], 'seven–eight below is another rule’s matter', BELOW],
+  ],
+  's4-strip-test': [
+    [LINE, [], 'sixths'],
+    ['r:2,A4:2~ A4:2,C5:2~ C5:2,C#5:2 D5', [], 'fifths without a suspension are another rule’s matter'],
+    ['r:2,D5:2~ D5:2,F5:2~ F5:2,E5:2 D5', [3], 'nine, eight out of an octave'],
+    [
+      'r:2,D4:2~ D4:2,C4:2~ C4:2,B3:2 .',
+      [3],
+      'fifths below, through four–five',
+      { ...BELOW, cantus: 'D4 G4 F#4 D4' },
+    ],
+    [
+      'r:2,D4:2~ D4:2,C4:2~ C4:2,B3:2 .',
+      [],
+      'the same, where ninths alone are tested',
+      { ...BELOW, cantus: 'D4 G4 F#4 D4', params: { scope: 'ninths' } },
+    ],
+    [
+      'r:2,D5:2~ D5:2,F5:2~ F5:2,E5:2 D5',
+      [3],
+      'nine, eight, where ninths alone are tested',
+      { params: { scope: 'ninths' } },
+    ],
+    [
+      'r:2,A4:2~ A4:2,D4:2~ D4:2,C4:2 .',
+      [3],
+      'similar motion into a fifth, where it is asked',
+      { ...BELOW, cantus: 'D4 B4 G4 D4', params: { direct: true } },
+    ],
+  ],
+  's4-afterbeat-perfects': [
+    [LINE, [], 'a fifth, sixths'],
+    ['r:2,A4:2~ A4:2,C5:2~ C5:2,C#5:2 D5', [2], 'two fifths'],
+    ['r:2,D5:2~ D5:2,F5:2~ F5:2,E5:2 D5', [2], 'two octaves; the third resolves a suspension'],
+    [
+      'r:2,A4:2~ A4:2,C5:2~ C5:2,C#5:2 D5',
+      [],
+      'two fifths, where they are free',
+      { params: { fifths: false } },
+    ],
+    ['r:2,D5:2~ D5:2,F5:2~ . .', [], 'two octaves, where they are free', { params: { octaves: false } }],
+    ['r:2,D5:2~ D5:2 . D5', [], 'nothing to compare'],
+  ],
+  's4-break': [
+    [LINE, [], 'all ties'],
+    ['r:2,A4:2 A4:2,D5:2 D5:2,C#5:2 D5', [], 'two bars'],
+    [
+      'r:2,A4:2 A4:2,D5:2 B4:2,G4:2 F4:2,A4:2~ A4:2,D5:2~ D5:2,C#5:2 D5',
+      [4],
+      'three bars',
+      { cantus: 'D4 F4 E4 D4 F4 E4 D4' },
+    ],
+    ['r:2,A4:2 A4:2,D5:2~ D5:2,C#5:2 D5', [2], 'one, where none is let pass', { params: { times: 0 } }],
+    [
+      'r:2,A4:2 A4:2,D5:2~ D5:2,B4:2 A4:2,C#5:2 D5',
+      [4],
+      'a second break',
+      { cantus: 'D4 F4 E4 F4 D4', params: { times: 1 } },
+    ],
+    [
+      'r:2,A4:2 A4:2,D5:2 . B4:2,C#5:2 D5',
+      [],
+      'over a gap',
+      { cantus: 'D4 F4 E4 F4 D4', params: { bars: 1 } },
+    ],
+  ],
+  's4-suspension-quota': [
+    [LINE, [], 'half of them'],
+    ['r:2,A4:2~ A4:2,C5:2~ C5:2,C#5:2 .', [], 'not before the line is whole'],
+    ['r:2,A4:2~ A4:2,C5:2~ C5:2,C#5:2 D5', [3], 'none'],
+    [LINE, [2], 'half, where more are wanted', { params: { percent: 60 } }],
+  ],
+  's4-cadence-above': [
+    [LINE, [], 'seven, six'],
+    [LINE_BELOW, [], 'below', BELOW],
+    ['r:2,B4:2~ B4:2,E5:2~ E5:2,D5:2 E5', [], 'Phrygian', PHRYGIAN],
+    ['r:2,G4:2~ G4:2,E4:2~ E4:2,D4:2 C4', [], 'a cantus that rises', RISING],
+    ['r:2,A4:2~ A4:2,C5:2~ C5:2,C#5:2 D5', [3], 'no seventh'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,C5:2 D5', [3], 'a minor sixth'],
+    ['r:2,A4:2~ A4:2,A4:2~ A4:2,G4:2 D5', [3], 'a third'],
+    ['r:2,G4:2~ G4:2,E4:2~ E4:2,G4:2 C5', [3], 'a cantus that rises, and no second degree', RISING],
+    ['r:2,A4:2~ A4:2,D5:2~ . D5', [], 'not written yet'],
+  ],
+  's4-cadence-below': [
+    [LINE_BELOW, [], 'two, three', BELOW],
+    [LINE, [], 'above'],
+    ['r:2,D3:2~ D3:2,D3:2~ D3:2,C#3:2 D3', [], 'nine, ten', BELOW],
+    ['r:2,D4:2~ D4:2,A3:2~ A3:2,C#4:2 D4', [3], 'no second', BELOW],
+    ['r:2,D3:2~ D3:2,D4:2~ D4:2,C4:2 D4', [3], 'a major third', BELOW],
+    ['r:2,D3:2~ D3:2,D4:2~ D4:2,B3:2 D4', [3], 'a fourth', BELOW],
+    [
+      'r:2,C4:2~ C4:2,C4:2~ C4:2,G3:2 C4',
+      [3],
+      'a cantus that rises, and no second degree',
+      { ...RISING, ...BELOW },
+    ],
+  ],
+  's4-shape-relaxed': [
+    [LINE, [], 'one leap up'],
+    ['r:2,D4:2~ D4:2,A4:2~ A4:2,D5:2~ D5', [], 'two'],
+    ['r:2,D4:2~ D4:2,G4:2~ G4:2,C5:2~ C5:2,F5:2 D5', [4], 'three', { cantus: 'D4 F4 E4 D4 D4' }],
+    ['r:2,D4:2~ D4:2,A4:2~ . .', [2], 'one, where none is let pass', { params: { leapsUp: 0 } }],
+    [
+      'r:2,D4:2~ D4:2,A4:2~ . .',
+      [],
+      'a fifth, where only octaves count',
+      { params: { leapsUp: 0, from: 8 } },
+    ],
+  ],
+  's4-retardation': [
+    [LINE, [], 'it falls'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,B4:2 D5', [], 'a leap is another rule’s matter'],
+    ['r:2,A4:2~ A4:2,D5:2~ D5:2,E5:2 D5', [3], 'it rises'],
+    [
+      'r:2,A4:2~ A4:2,C#5:2~ C#5:2,D5:2 D5',
+      [],
+      'the leading tone, where it may',
+      { cantus: 'D4 E4 D4 D4', params: { leadingTone: true } },
+    ],
+    [
+      'r:2,A4:2~ A4:2,C#5:2~ C#5:2,D5:2 D5',
+      [3],
+      'the leading tone, where it may not',
+      { cantus: 'D4 E4 D4 D4' },
+    ],
+    [
+      'r:2,A4:2~ A4:2,D5:2~ D5:2,E5:2 D5',
+      [3],
+      'a whole tone, where the leading tone may',
+      { params: { leadingTone: true } },
+    ],
+  ],
+}
