@@ -3,6 +3,7 @@ import type { LessonView } from '@/components/lesson/lesson-view'
 import type { RoomGroup } from '@/components/lesson/room'
 import { space } from '@/components/theme'
 import { Button, Heading, Txt } from '@/components/ui'
+import type { KnownWays } from '@/components/ways/use-ways'
 import { useWords } from '@/components/words'
 import { MOST_GROUPS, type LecternReading } from './lectern-model'
 import { RoomRow } from './room-row'
@@ -11,6 +12,7 @@ import { RoomRow } from './room-row'
 export function RoomList({
   reading,
   view,
+  ways,
   names,
   isNamed,
   onNamed,
@@ -21,6 +23,7 @@ export function RoomList({
 }: Readonly<{
   reading: LecternReading
   view: LessonView
+  ways: KnownWays
   names: ReadonlyMap<string, string>
   isNamed: boolean
   onNamed: (isNamed: boolean) => void
@@ -63,6 +66,7 @@ export function RoomList({
               key={group.key}
               group={group}
               view={view}
+              ways={ways(group.key)}
               names={isNamed ? names : null}
               isWide={isWide}
               isHeard={heardKey === group.key}
