@@ -67,7 +67,7 @@ export function MelodyFindings({
               onFocus={() => point(rubric.id)}
               onBlur={() => point(null)}
             >
-              <RubricLine rubric={rubric} />
+              <RubricLine rubric={rubric} hasWhy />
             </div>
           ))
         )}

@@ -3,6 +3,7 @@ import { Ladder } from '@/components/ladder/ladder'
 import { firstPitch } from '@/components/lesson/spoken'
 import { space, TOUCH_TARGET_PX, useTheme } from '@/components/theme'
 import { Button, Txt } from '@/components/ui'
+import { useRungWays } from '@/components/ways/use-rung-ways'
 import { useWords } from '@/components/words'
 import { ClosedBar } from './closed-bar'
 import type { DeskModel } from './use-desk'
@@ -17,6 +18,7 @@ export function DeskLadder({
   const { colors } = useTheme()
   const { bar, ladder, hand, view } = model
   const cantus = view.exercise.cantus[hand - 1]
+  const ways = useRungWays(view, model.desk.own, hand, model.pitches)
   const earlier = bar?.kind === 'open' && !bar.notes ? bar.earlier : null
   const earlierPitch = firstPitch(earlier)
   return (
@@ -77,6 +79,7 @@ export function DeskLadder({
           label={words.desk.ladder.label(hand)}
           hint={words.desk.ladder.hint}
           rungs={ladder.rungs}
+          ways={ways}
           chosen={ladder.chosen}
           home={ladder.home}
           bar={hand}

@@ -92,7 +92,7 @@ export function DeskRubric({
         {rubrics.length > 0 ? (
           <>
             {rubrics.map(({ rubric, isHere }) => (
-              <RubricLine key={rubric.id} rubric={rubric} isMendTold={isHere} />
+              <RubricLine key={rubric.id} rubric={rubric} isMendTold={isHere} hasWhy />
             ))}
             {task}
           </>

@@ -18,6 +18,8 @@ export type LadderProps = Readonly<{
   hint: string
   /** From the highest pitch down. */
   rungs: readonly LadderRung[]
+  /** What to say at the end of each rung, in the same order; empty when nothing is said. */
+  ways?: readonly (string | null)[]
   /** The rung that is proposed, or null. */
   chosen: number | null
   /** The rung to show when a bar is taken in hand. */
@@ -135,6 +137,7 @@ export function Ladder(props: LadderProps) {
             interval={rung.interval}
             motion={rung.motion}
             mark={rung.mark}
+            ways={props.ways?.[index] ?? null}
             spoken={rung.spoken}
             isOn={index === chosen}
             isTabStop={index === hand}

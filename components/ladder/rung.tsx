@@ -18,6 +18,8 @@ export type RungProps = Readonly<{
   motion: BarMotion | null
   /** What the rules say of it, where they may be told. */
   mark: 'breach' | 'remark' | null
+  /** In how many ways the line may be finished from here, where that is told. */
+  ways: string | null
   /** Proposed by this student. */
   isOn: boolean
   /** The one rung that the Tab key reaches. */
@@ -30,7 +32,7 @@ export type RungProps = Readonly<{
 
 /** One pitch at hand. Redrawn only when what it says changes. */
 export const Rung = memo(function Rung(props: RungProps) {
-  const { index, name, interval, motion, mark, isOn, isFaint, spoken } = props
+  const { index, name, interval, motion, mark, ways, isOn, isFaint, spoken } = props
   const { colors } = useTheme()
   const styles = useRungStyles()
   const ink = isOn ? styles.inkOn : isFaint ? styles.inkFaint : styles.ink
@@ -40,7 +42,7 @@ export const Rung = memo(function Rung(props: RungProps) {
     <Pressable
       role="radio"
       aria-checked={isOn}
-      aria-label={spoken}
+      aria-label={ways === null ? spoken : `${spoken}; ${ways}`}
       tabIndex={props.isTabStop ? 0 : -1}
       {...({ dataSet: { rung: index } } as object)}
       onPress={() => props.onPress(index)}
@@ -54,6 +56,11 @@ export const Rung = memo(function Rung(props: RungProps) {
         {interval}
       </Text>
       <View style={styles.motion}>{motion ? <MotionGlyph motion={motion} color={strokes} /> : null}</View>
+      {ways === null ? null : (
+        <Text numberOfLines={1} style={[styles.ways, isOn ? styles.inkOn : styles.inkFaint]}>
+          {ways}
+        </Text>
+      )}
       <View style={styles.mark}>
         {mark ? (
           <Lozenge
@@ -97,6 +104,14 @@ const useRungStyles = createStyles((colors) => ({
     userSelect: 'none',
   },
   motion: { width: 40, alignItems: 'center' },
+  ways: {
+    fontFamily: fonts.AlegreyaSans,
+    fontSize: type.note,
+    lineHeight: leading.note,
+    fontVariant: ['tabular-nums'],
+    marginLeft: space.small,
+    userSelect: 'none',
+  },
   mark: { width: 30, alignItems: 'flex-end' },
   ink: { color: colors.lampblack },
   inkOn: { color: colors.vellum },

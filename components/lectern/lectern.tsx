@@ -6,6 +6,7 @@ import type { RoomGroup } from '@/components/lesson/room'
 import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { space, useTheme, useWidth } from '@/components/theme'
 import { Button, EasedStack, Notice, Txt, useTitle } from '@/components/ui'
+import { useLecternWays } from '@/components/ways/use-lectern-ways'
 import { useWords } from '@/components/words'
 import type { Highlight } from '@/components/score'
 import type { Lesson } from '@/shared/api/lessons'
@@ -18,6 +19,7 @@ import { HearingDialog } from './hearing-dialog'
 import { LecternHeader } from './lectern-header'
 import { actsFor, NO_ACTS, readLectern, sortPeople } from './lectern-model'
 import { LineFindings } from './line-findings'
+import { LineWays } from './line-ways'
 import { PeoplePanel } from './people-panel'
 import { RoomList } from './room-list'
 import { SelectableScore } from './selectable-score'
@@ -84,6 +86,7 @@ export function Lectern(props: LecternProps) {
     [selection, view.barCount],
   )
   const reading = useMemo(() => readLectern(view, chorus, judge, selected), [view, chorus, judge, selected])
+  const ways = useLecternWays(view, reading.groups)
   const isReadOnly = lesson.status === 'ended'
   const acts = useMemo(
     () => (isReadOnly ? NO_ACTS : actsFor(view, chorus, selected)),
@@ -222,6 +225,7 @@ export function Lectern(props: LecternProps) {
             key="room"
             reading={reading}
             view={view}
+            ways={ways}
             names={props.names}
             isNamed={isNamed}
             onNamed={setNamed}
@@ -230,6 +234,7 @@ export function Lectern(props: LecternProps) {
             onHear={hearGroup}
             onAdopt={isReadOnly ? null : adopt}
           />
+          <LineWays key="ways" ways={ways('')} />
           <LineFindings
             key="line"
             rubrics={lineRubrics}

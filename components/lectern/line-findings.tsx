@@ -2,6 +2,7 @@ import { View } from 'react-native'
 import type { Selection } from '@/components/lesson/bars'
 import { RubricLine } from '@/components/lesson/rubric-line'
 import type { Rubric } from '@/components/lesson/rubrics'
+import { Why } from '@/components/rules/why'
 import { space } from '@/components/theme'
 import { Heading, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
@@ -24,25 +25,29 @@ export function LineFindings({
       <Heading level={2}>{words.title}</Heading>
       {rubrics.length === 0 ? <Txt tone="lead">{hasLine ? words.none : words.empty}</Txt> : null}
       {rubrics.map((rubric) => (
-        <button
-          key={rubric.id}
-          type="button"
-          onClick={() => onSelect({ anchor: rubric.bars[0] ?? 1, head: rubric.bars.at(-1) ?? 1 })}
-          onPointerEnter={() => onPoint(rubric)}
-          onPointerLeave={() => onPoint(null)}
-          onFocus={() => onPoint(rubric)}
-          onBlur={() => onPoint(null)}
-          style={{
-            background: 'none',
-            border: 0,
-            padding: `${space.small}px 0`,
-            minHeight: 44,
-            textAlign: 'left',
-            cursor: 'pointer',
-          }}
-        >
-          <RubricLine rubric={rubric} kind="note" />
-        </button>
+        <View key={rubric.id} style={{ flexDirection: 'row', alignItems: 'center', gap: space.small }}>
+          <button
+            type="button"
+            onClick={() => onSelect({ anchor: rubric.bars[0] ?? 1, head: rubric.bars.at(-1) ?? 1 })}
+            onPointerEnter={() => onPoint(rubric)}
+            onPointerLeave={() => onPoint(null)}
+            onFocus={() => onPoint(rubric)}
+            onBlur={() => onPoint(null)}
+            style={{
+              background: 'none',
+              border: 0,
+              padding: `${space.small}px 0`,
+              minHeight: 44,
+              textAlign: 'left',
+              cursor: 'pointer',
+              flex: 1,
+              minWidth: 0,
+            }}
+          >
+            <RubricLine rubric={rubric} kind="note" />
+          </button>
+          {rubric.ruleId ? <Why ruleId={rubric.ruleId} /> : null}
+        </View>
       ))}
     </View>
   )

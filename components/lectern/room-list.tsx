@@ -4,6 +4,7 @@ import type { LessonView } from '@/components/lesson/lesson-view'
 import type { RoomGroup } from '@/components/lesson/room'
 import { space, TOUCH_TARGET_PX } from '@/components/theme'
 import { Button, EasedStack, Heading, Txt } from '@/components/ui'
+import type { KnownWays } from '@/components/ways/use-ways'
 import { useWords } from '@/components/words'
 import { MOST_GROUPS, type LecternReading } from './lectern-model'
 import { RoomRow } from './room-row'
@@ -13,6 +14,7 @@ import { useSteadyOrder } from './use-steady-order'
 export function RoomList({
   reading,
   view,
+  ways,
   names,
   isNamed,
   onNamed,
@@ -23,6 +25,7 @@ export function RoomList({
 }: Readonly<{
   reading: LecternReading
   view: LessonView
+  ways: KnownWays
   names: ReadonlyMap<string, string>
   isNamed: boolean
   onNamed: (isNamed: boolean) => void
@@ -84,6 +87,7 @@ export function RoomList({
                 key={group.key}
                 group={group}
                 view={view}
+                ways={ways(group.key)}
                 names={isNamed ? names : null}
                 isWide={isWide}
                 isHeard={heardKey === group.key}

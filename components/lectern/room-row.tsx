@@ -8,6 +8,8 @@ import type { RoomGroup } from '@/components/lesson/room'
 import { Score } from '@/components/score'
 import { space, useTheme } from '@/components/theme'
 import { Button, Name, Txt } from '@/components/ui'
+import { WaysFigure } from '@/components/ways/ways-figure'
+import type { WaysAnswer } from '@/components/ways/ways-messages'
 import { useWords } from '@/components/words'
 
 const MOST_NAMES = 4
@@ -19,6 +21,7 @@ const COUNT_PX = 52
 export const RoomRow = memo(function RoomRow({
   group,
   view,
+  ways,
   names,
   isWide,
   isHeard,
@@ -28,6 +31,8 @@ export const RoomRow = memo(function RoomRow({
 }: Readonly<{
   group: RoomGroup
   view: LessonView
+  /** Null while it is being counted. */
+  ways: WaysAnswer | null
   /** Null while the teacher does not want to see who. */
   names: ReadonlyMap<string, string> | null
   isWide: boolean
@@ -74,7 +79,7 @@ export const RoomRow = memo(function RoomRow({
       <View style={{ flex: isWide ? 1 : undefined, minWidth: 0, gap: 2 }}>
         {shown.length === 0 ? <Txt kind="note">{words.lectern.room.noFinding}</Txt> : null}
         {shown.map((rubric) => (
-          <RubricLine key={rubric.id} rubric={rubric} kind="note" isMendTold={false} />
+          <RubricLine key={rubric.id} rubric={rubric} kind="note" isMendTold={false} hasWhy />
         ))}
         {rubrics.length > shown.length ? (
           <Txt kind="note" tone="lead">
@@ -90,6 +95,7 @@ export const RoomRow = memo(function RoomRow({
           )}
         </Txt>
       </View>
+      <WaysFigure ways={ways} isWide={isWide} />
       <View style={{ flexDirection: 'row', gap: space.small, justifyContent: 'flex-end' }}>
         <Button
           label={isHeard ? words.lectern.stop : words.lectern.room.hear}

@@ -1,9 +1,11 @@
 import { useEffect, useState } from 'react'
 import { View } from 'react-native'
 import { space } from '@/components/theme'
-import { Button, Field, Form, Heading, Toggle, Txt } from '@/components/ui'
+import { Button, Field, Form, Heading, Select, Toggle, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
 import { MAX_PROMPT_CHARACTERS, type StageSettings } from '@/shared/wire/documents'
+
+const WAYS_TOLD_TO = ['nobody', 'wall', 'everyone'] as const satisfies readonly StageSettings['showsWays'][]
 
 /** What the class is to do, and what may be seen. A prompt being written stays when a colleague changes theirs. */
 export function TaskPanel({
@@ -17,6 +19,7 @@ export function TaskPanel({
   onStage: (patch: Partial<StageSettings>) => void
 }>) {
   const words = useWords().lectern.stage
+  const ways = useWords().ways
   const [text, setText] = useState(stage.prompt)
   const [base, setBase] = useState(stage.prompt)
 
@@ -73,6 +76,12 @@ export function TaskPanel({
           label={words.names}
           value={stage.showsNames}
           onChange={(showsNames) => onStage({ showsNames })}
+        />
+        <Select
+          label={ways.title}
+          value={stage.showsWays}
+          options={WAYS_TOLD_TO.map((value) => ({ value, label: ways.toldTo[value] }))}
+          onChange={(showsWays) => onStage({ showsWays })}
         />
       </View>
     </View>

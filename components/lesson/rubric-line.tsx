@@ -1,4 +1,5 @@
 import { View } from 'react-native'
+import { Why } from '@/components/rules/why'
 import { space } from '@/components/theme'
 import { Lozenge, Txt, type TxtKind } from '@/components/ui'
 import type { Rubric } from './rubrics'
@@ -10,7 +11,8 @@ export function RubricLine({
   rubric,
   kind = 'text',
   isMendTold = true,
-}: Readonly<{ rubric: Rubric; kind?: TxtKind; isMendTold?: boolean }>) {
+  hasWhy = false,
+}: Readonly<{ rubric: Rubric; kind?: TxtKind; isMendTold?: boolean; hasWhy?: boolean }>) {
   const tone = TONE[rubric.tone]
   const isLarge = kind === 'large' || kind === 'head'
   return (
@@ -34,6 +36,8 @@ export function RubricLine({
         {isLarge ? '\n' : ' '}
         {rubric.sentence}
         {isMendTold && rubric.mend ? ` ${rubric.mend}` : ''}
+        {hasWhy && rubric.ruleId ? ' ' : ''}
+        {hasWhy && rubric.ruleId ? <Why ruleId={rubric.ruleId} /> : null}
       </Txt>
     </View>
   )

@@ -1,5 +1,5 @@
 import type { Words } from '@/components/words'
-import { describeFinding, type Finding } from '@/shared/rules'
+import { describeFinding, type Finding, type RuleId } from '@/shared/rules'
 import { runsOf } from './bars'
 import type { LessonView } from './lesson-view'
 import type { RoomFinding } from './room'
@@ -7,6 +7,8 @@ import type { RoomFinding } from './room'
 /** A finding in words, as it stands in the margin. */
 export type Rubric = Readonly<{
   id: string
+  /** The rule that speaks, for whoever asks why; null where no rule does. */
+  ruleId: RuleId | null
   tone: 'breach' | 'remark' | 'quiet'
   bars: readonly number[]
   /** `Bars 6–7` */
@@ -32,6 +34,7 @@ export function rubricOf(finding: Finding, words: Words): Rubric {
   const { sentence, mend } = describeFinding(finding)
   return {
     id: idOf(finding),
+    ruleId: finding.ruleId,
     tone: toneOf(finding.level),
     bars: finding.bars,
     heading: words.lesson.barsHeading(finding.bars),
@@ -63,6 +66,7 @@ export function roomRubric({ id, findings, count }: RoomFinding, words: Words): 
 export const setAsideRubrics = (view: LessonView, words: Words): readonly Rubric[] =>
   runsOf([...view.setAside].sort((a, b) => a - b)).map((bars) => ({
     id: `set-aside/${bars.join(',')}`,
+    ruleId: null,
     tone: 'quiet',
     bars,
     heading: words.lesson.barsHeading(bars),

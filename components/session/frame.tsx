@@ -71,6 +71,11 @@ function SiteNav({ me }: Readonly<{ me: Me }>) {
   const places = [
     { href: '/home', label: words.nav.courses, isHere: path === '/home' || path.startsWith('/courses') },
     { href: '/cantus', label: words.nav.cantus, isHere: path.startsWith('/cantus') },
+    {
+      href: '/rule-sets',
+      label: words.nav.rules,
+      isHere: path.startsWith('/rule'),
+    },
     ...(me.isAdministrator
       ? [{ href: '/people', label: words.nav.people, isHere: path.startsWith('/people') }]
       : []),

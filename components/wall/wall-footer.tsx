@@ -1,6 +1,8 @@
 import { View } from 'react-native'
 import { useTheme } from '@/components/theme'
 import { Button, Txt } from '@/components/ui'
+import { formatWays } from '@/components/ways/format-ways'
+import type { WaysAnswer } from '@/components/ways/ways-messages'
 import { useWords } from '@/components/words'
 import type { WallMeasure } from './wall-measure'
 import { promptSizePx } from './wall-model'
@@ -11,6 +13,7 @@ export function WallFooter({
   released,
   offered,
   here,
+  ways,
   notice,
   onLetSound,
   measure,
@@ -19,6 +22,8 @@ export function WallFooter({
   released: readonly number[]
   offered: number
   here: number
+  /** Null where the teacher does not let the wall tell; no answer while it is counted. */
+  ways: Readonly<{ answer: WaysAnswer | null }> | null
   notice: string | null
   onLetSound: (() => void) | null
   measure: WallMeasure
@@ -82,6 +87,29 @@ export function WallFooter({
           <Caption px={px} text={words.wall.nobodyHere} />
         )}
       </View>
+      {ways ? (
+        <View role="status" style={{ minWidth: px(200), alignItems: isStacked ? 'flex-start' : 'flex-end' }}>
+          <Txt
+            kind="head"
+            isStrong
+            isTabular
+            tone={ways.answer?.deadEnd ? 'minium' : 'verdigris'}
+            style={{ fontSize: px(74), lineHeight: px(80) }}
+          >
+            {ways.answer ? formatWays(ways.answer) : ' '}
+          </Txt>
+          <Caption
+            px={px}
+            text={
+              ways.answer === null
+                ? words.ways.counting
+                : ways.answer.deadEnd
+                  ? words.ways.stuckAt(ways.answer.deadEnd.bar)
+                  : words.ways.toFinish(ways.answer.count === '1')
+            }
+          />
+        </View>
+      ) : null}
     </View>
   )
 }

@@ -7,6 +7,7 @@ import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { useWholeWindow } from '@/components/lesson/use-whole-window'
 import { useTheme } from '@/components/theme'
 import { useTitle } from '@/components/ui'
+import { useWays } from '@/components/ways/use-ways'
 import { useWords } from '@/components/words'
 import type { Lesson } from '@/shared/api/lessons'
 import type { BoardState, ChorusState } from '@/shared/board'
@@ -48,6 +49,9 @@ export function Wall(props: WallProps) {
     [view, chorus, judge, words, measure, hasSquare, hasNames],
   )
   const sentences = useMemo(() => speakScore(view, view.line, null, words), [view, words])
+  const isWaysTold = view.stage.showsWays !== 'nobody'
+  const ofLine = useMemo(() => (isWaysTold ? [{ key: '', line: view.line }] : null), [isWaysTold, view.line])
+  const ways = useWays(view, ofLine)('')
   const { isStacked, marginPx } = measure
   return (
     <View
@@ -97,6 +101,7 @@ export function Wall(props: WallProps) {
         released={view.released}
         offered={wall.offered}
         here={Math.max(props.here, wall.offered)}
+        ways={isWaysTold ? { answer: ways } : null}
         notice={props.notice}
         onLetSound={props.onLetSound}
         measure={measure}

@@ -9,10 +9,13 @@ import { errors } from './en/errors'
 import { join } from './en/join'
 import { lectern } from './en/lectern'
 import { lesson } from './en/lesson'
+import { ruleSets } from './en/rule-sets'
+import { rules } from './en/rules'
 import { score } from './en/score'
 import { setup } from './en/setup'
 import { sound } from './en/sound'
 import { wall } from './en/wall'
+import { ways } from './en/ways'
 
 /** Every word of the interface, one typed table an area. */
 const EN = {
@@ -27,10 +30,13 @@ const EN = {
   join,
   lectern,
   lesson,
+  ruleSets,
+  rules,
   score,
   setup,
   sound,
   wall,
+  ways,
 } as const
 
 export type Words = typeof EN

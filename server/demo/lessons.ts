@@ -51,6 +51,7 @@ export const createDemoLessons = (): readonly DemoLesson[] => [
       showsFindings: true,
       showsSpread: false,
       showsNames: false,
+      showsWays: 'wall',
     },
   },
   {
@@ -68,6 +69,7 @@ export const createDemoLessons = (): readonly DemoLesson[] => [
       showsFindings: true,
       showsSpread: true,
       showsNames: false,
+      showsWays: 'nobody',
     },
   },
 ]

@@ -15,6 +15,8 @@ export function securityHeaders({
       directives: {
         defaultSrc: ["'self'"],
         scriptSrc: ["'self'"],
+        // The bundler starts a worker from a blob that loads the served script.
+        workerSrc: ["'self'", 'blob:'],
         // The renderer of React Native's styles writes style elements; styles run nothing.
         styleSrc: ["'self'", "'unsafe-inline'"],
         imgSrc: ["'self'", 'data:'],

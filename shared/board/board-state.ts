@@ -40,6 +40,7 @@ export const INITIAL_STAGE: StageSettings = {
   showsFindings: true,
   showsSpread: false,
   showsNames: false,
+  showsWays: 'nobody',
 }
 
 /** Bar numbers of an exercise, from 1. */

@@ -80,6 +80,8 @@ export const stageSchema = z.strictObject({
   showsSpread: z.boolean(),
   /** Whether the wall names who proposed. */
   showsNames: z.boolean(),
+  /** Who is told how many ways there are to finish; the lectern always is. Boards written before there were any say nobody. */
+  showsWays: z.enum(['nobody', 'wall', 'everyone']).default('nobody'),
 })
 export type StageSettings = z.infer<typeof stageSchema>
 

@@ -19,4 +19,5 @@ export const testStage = (): StageSettings => ({
   showsFindings: true,
   showsSpread: false,
   showsNames: false,
+  showsWays: 'nobody',
 })

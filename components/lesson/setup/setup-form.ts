@@ -1,14 +1,8 @@
+import { changedRules, tidyRules, withRuleLevel, withRuleParam } from '@/components/rule-sets/change-rules'
 import type { Cantus } from '@/shared/api/cantus'
 import { MAX_TITLE_CHARACTERS, titleSchema } from '@/shared/api/fields'
-import {
-  findRule,
-  RULES,
-  type AnyRule,
-  type Level,
-  type Position,
-  type RuleId,
-  type RuleSet,
-} from '@/shared/rules'
+import { findRule, type Level, type Position, type RuleId, type RuleSet } from '@/shared/rules'
+import { settingsOf } from '@/shared/rule-sets/rule-set-file'
 import type { Clef } from '@/shared/theory/clef'
 import { signatureOf } from '@/shared/theory/key'
 import type { Mode } from '@/shared/theory/mode'
@@ -88,17 +82,9 @@ export const withPreset = (form: SetupForm, preset: RuleSet): SetupForm => ({
   ruleSet: preset,
 })
 
-const isSameParams = (a: unknown, b: unknown): boolean => JSON.stringify(a ?? {}) === JSON.stringify(b ?? {})
-
 /** Rules whose level or parameters are not those of the chosen preset. */
-export const changedRules = ({ ruleSet, preset }: SetupForm): readonly RuleId[] =>
-  Object.entries(ruleSet.rules)
-    .filter(([id, setting]) => {
-      const before = preset.rules[id]
-      const level = before?.level ?? 'off'
-      return setting.level !== level || !isSameParams(setting.params, before?.params)
-    })
-    .map(([id]) => id)
+export const changedInForm = ({ ruleSet, preset }: SetupForm): readonly RuleId[] =>
+  changedRules(ruleSet.rules, preset.rules)
 
 /** A changed rule set has a name of its own, so that nobody takes it for the preset. */
 const named = (ruleSet: RuleSet, preset: RuleSet, rules: RuleSet['rules']): RuleSet => ({
@@ -108,25 +94,13 @@ const named = (ruleSet: RuleSet, preset: RuleSet, rules: RuleSet['rules']): Rule
 })
 
 export function withLevel(form: SetupForm, ruleId: RuleId, level: Level): SetupForm {
-  const before = form.ruleSet.rules[ruleId]
-  const rules = { ...form.ruleSet.rules, [ruleId]: { ...before, level } }
+  const rules = withRuleLevel(form.ruleSet.rules, ruleId, level)
   return { ...form, ruleSet: named(form.ruleSet, form.preset, rules) }
 }
 
 export function withParam(form: SetupForm, ruleId: RuleId, name: string, value: unknown): SetupForm {
-  const before = form.ruleSet.rules[ruleId] ?? { level: 'off' as const }
-  const params = { ...before.params, [name]: value }
-  const rules = { ...form.ruleSet.rules, [ruleId]: { ...before, params } }
+  const rules = withRuleParam(form.ruleSet.rules, ruleId, name, value)
   return { ...form, ruleSet: named(form.ruleSet, form.preset, rules) }
-}
-
-/** Rules that govern the species, by what they say; every word typed must be in the title, the statement or the id. */
-export function findRules(search: string, species: 1): readonly AnyRule[] {
-  const wanted = search.toLowerCase().split(/\s+/).filter(Boolean)
-  return RULES.filter((rule) => rule.species.has(species)).filter(({ id, explain }) => {
-    const text = `${id} ${explain.title} ${explain.statement}`.toLowerCase()
-    return wanted.every((word) => text.includes(word))
-  })
 }
 
 export const isParamsSound = ({ ruleSet }: SetupForm): boolean =>
@@ -167,14 +141,7 @@ export function exerciseOf(form: SetupForm): BoardExercise | null {
     signature,
     ruleSet: {
       ...form.ruleSet,
-      rules: Object.fromEntries(
-        Object.entries(form.ruleSet.rules).map(([id, { level, params }]) => [
-          id,
-          params && Object.keys(params).length > 0
-            ? { level, params: params as Record<string, never> }
-            : { level },
-        ]),
-      ),
+      rules: settingsOf(tidyRules(form.ruleSet.rules)),
     },
   }
 }
@@ -184,4 +151,5 @@ export const firstStage = (form: SetupForm): StageSettings => ({
   showsFindings: true,
   showsSpread: true,
   showsNames: false,
+  showsWays: 'nobody',
 })

@@ -55,7 +55,7 @@ export function SetupPreview({
 
 function DoubtLine({ doubt, words }: Readonly<{ doubt: Doubt; words: Words }>) {
   if (doubt.kind === 'finding')
-    return <RubricLine rubric={rubricOf(doubt.finding, words)} kind="note" isMendTold={false} />
+    return <RubricLine rubric={rubricOf(doubt.finding, words)} kind="note" isMendTold={false} hasWhy />
   const print = words.lesson.pitchPrinted
   return (
     <Txt kind="note">

@@ -2,6 +2,8 @@ import { useRouter, type Href } from 'expo-router'
 import { useCallback, useMemo, useState } from 'react'
 import { View } from 'react-native'
 import { Asked, RefusalNotice, useMutation, useQuery } from '@/components/api'
+import { RuleList } from '@/components/rule-sets/rule-list'
+import { RuleSetSelect } from '@/components/rule-sets/rule-set-select'
 import { Frame } from '@/components/session'
 import { space, useTheme, useWidth } from '@/components/theme'
 import { Button, Choice, Field, Form, Heading, Select, Txt } from '@/components/ui'
@@ -15,9 +17,8 @@ import { findPreset, PRESETS, type Position, type RuleSet } from '@/shared/rules
 import { MODES, type Mode } from '@/shared/theory/mode'
 import { MAX_PROMPT_CHARACTERS } from '@/shared/wire/documents'
 import { CantusPicker } from './cantus-picker'
-import { RuleList } from './rule-list'
 import {
-  changedRules,
+  changedInForm,
   exerciseOf,
   firstStage,
   setupProblems,
@@ -81,7 +82,7 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
   }
   const exercise = useMemo(() => exerciseOf(form), [form])
   const doubts = useMemo(() => (exercise ? doubtsOf(exercise) : []), [exercise])
-  const changed = useMemo(() => changedRules(form), [form])
+  const changed = useMemo(() => changedInForm(form), [form])
 
   const submit = async () => {
     setTried(true)
@@ -189,14 +190,10 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
           <Section title={setup.rules}>
             <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: space.one }}>
               <View style={{ minWidth: 240 }}>
-                <Select
+                <RuleSetSelect
                   label={setup.ruleSet}
                   value={form.preset.id}
-                  options={PRESETS.map(({ id, name }) => ({ value: id, label: name }))}
-                  onChange={(id) => {
-                    const preset = findPreset(id)
-                    if (preset) setForm((before) => withPreset(before, preset))
-                  }}
+                  onChoose={(chosen) => setForm((before) => withPreset(before, chosen))}
                 />
               </View>
               <View>
@@ -228,7 +225,10 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
             {isListOpen ? (
               <RuleList
                 key={form.preset.id}
-                ruleSet={form.ruleSet}
+                rules={form.ruleSet.rules}
+                before={form.preset.rules}
+                species={1}
+                widthPx={previewPx}
                 changed={changed}
                 onLevel={(id, level) => setForm((before) => withLevel(before, id, level))}
                 onParam={(id, name, value) => setForm((before) => withParam(before, id, name, value))}

@@ -32,6 +32,13 @@ export const common = {
   goHome: 'Go to the start',
   notFound: 'There is no page at this address.',
   notFoundMore: 'It may have been removed, or the address was copied in part.',
-  nav: { label: 'Main', courses: 'Courses', cantus: 'Cantus', people: 'People', account: 'Account' },
+  nav: {
+    label: 'Main',
+    courses: 'Courses',
+    cantus: 'Cantus',
+    rules: 'Rules',
+    people: 'People',
+    account: 'Account',
+  },
   signIn: 'Sign in',
 } as const

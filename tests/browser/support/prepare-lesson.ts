@@ -23,6 +23,7 @@ export const STAGE: StageSettings = {
   showsFindings: true,
   showsSpread: true,
   showsNames: false,
+  showsWays: 'nobody',
 }
 
 /** Makes a lesson in the demo's course, as the teacher whose cookies `request` carries, and opens it. */

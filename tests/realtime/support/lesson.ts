@@ -21,6 +21,7 @@ export const STAGE: StageSettings = {
   showsFindings: true,
   showsSpread: false,
   showsNames: false,
+  showsWays: 'nobody',
 }
 
 export type TestMember = Readonly<{

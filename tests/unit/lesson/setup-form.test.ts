@@ -1,7 +1,6 @@
 import {
-  changedRules,
+  changedInForm,
   exerciseOf,
-  findRules,
   setupProblems,
   startForm,
   withCantus,
@@ -12,7 +11,7 @@ import {
   withPreset,
 } from '@/components/lesson/setup/setup-form'
 import { doubtsOf } from '@/components/lesson/setup/soundness'
-import { paramFields, parseParam, formatParam } from '@/components/lesson/setup/params-fields'
+import { paramFields, parseParam, formatParam } from '@/components/rule-sets/params-fields'
 import type { Cantus } from '@/shared/api/cantus'
 import { lessons } from '@/shared/api/lessons'
 import { findPreset, PRESETS, RULES, type RuleSet } from '@/shared/rules'
@@ -56,6 +55,7 @@ describe('setting up a lesson', () => {
           showsFindings: true,
           showsSpread: true,
           showsNames: false,
+          showsWays: 'nobody',
         },
       }).success,
     ).toBe(true)
@@ -81,10 +81,10 @@ describe('setting up a lesson', () => {
   test('a rule that was changed is counted, and the set is named apart from its preset', () => {
     const [id] = Object.entries(preset.rules).find(([, { level }]) => level === 'law') ?? ['']
     const changed = withLevel(filled(), id, 'preference')
-    expect(changedRules(changed)).toEqual([id])
+    expect(changedInForm(changed)).toEqual([id])
     expect(exerciseOf(changed)?.ruleSet).toMatchObject({ id: 'fux-mann-changed' })
-    expect(changedRules(withLevel(changed, id, 'law'))).toEqual([])
-    expect(changedRules(withPreset(changed, changed.preset))).toEqual([])
+    expect(changedInForm(withLevel(changed, id, 'law'))).toEqual([])
+    expect(changedInForm(withPreset(changed, changed.preset))).toEqual([])
   })
 
   test('a parameter the rule cannot take stands in the way', () => {
@@ -96,14 +96,6 @@ describe('setting up a lesson', () => {
     const form = withParam(filled(), rule.id, field.name, 'many')
     expect(setupProblems(form)).toEqual(['params'])
     expect(setupProblems(withParam(form, rule.id, field.name, field.fallback))).toEqual([])
-  })
-
-  test('rules are found by every word typed', () => {
-    expect(findRules('', 1).length).toBeGreaterThan(20)
-    const parallel = findRules('parallel', 1)
-    expect(parallel.length).toBeGreaterThan(0)
-    expect(parallel.length).toBeLessThan(findRules('', 1).length)
-    expect(findRules('zzzz', 1)).toEqual([])
   })
 
   test('every parameter of every rule has a control that reads back what it shows', () => {

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { formatParam, paramFields, parseParam } from '@/components/lesson/setup/params-fields'
+import { formatParam, paramFields, parseParam } from '@/components/rule-sets/params-fields'
 
 describe("a rule's parameters become plain controls", () => {
   const params = z.strictObject({

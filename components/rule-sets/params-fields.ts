@@ -31,7 +31,8 @@ type JsonSchema = Readonly<{
   properties?: Readonly<Record<string, JsonSchema>>
 }>
 
-const inWords = (name: string): string =>
+/** A parameter's name in words. */
+export const inWords = (name: string): string =>
   name.replace(/([a-z0-9])([A-Z])/g, (_, before: string, after: string) => `${before} ${after.toLowerCase()}`)
 
 /** The strings a schema allows, or null when it is not a closed choice of strings. */

@@ -1,33 +1,63 @@
-import { memo, useMemo, useState } from 'react'
+import { memo, useDeferredValue, useMemo, useState } from 'react'
 import { View } from 'react-native'
+import { BookAsked } from '@/components/rules/book-asked'
+import { searchPages } from '@/components/rules/sections'
 import { space, useTheme } from '@/components/theme'
-import { Button, Choice, Field, Select, Toggle, Txt } from '@/components/ui'
+import { Button, Choice, Field, LinkText, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
-import type { AnyRule, Level, RuleId, RuleSet, RuleSetting } from '@/shared/rules'
-import { formatParam, paramFields, parseParam, type ParamField } from './params-fields'
-import { findRules } from './setup-form'
+import {
+  findRule,
+  type AnyRule,
+  type Level,
+  type RuleId,
+  type RuleSet,
+  type RuleSetting,
+  type Species,
+} from '@/shared/rules'
+import type { RuleBook, RulePage } from '@/shared/rules/rule-book'
+import { ParamControl } from './param-control'
+import { paramFields } from './params-fields'
+import { RuleTrial } from './rule-trial'
 
 /** Rules drawn at once; a search narrows the rest. */
 const STEP = 12
 
-/** Every rule that governs the species, one by one: what it says, how it counts, and its parameters. */
-export function RuleList({
-  ruleSet,
-  changed,
-  onLevel,
-  onParam,
-}: Readonly<{
-  ruleSet: RuleSet
+type RuleListProps = Readonly<{
+  rules: RuleSet['rules']
+  /** What they were: what a change is told against. */
+  before: RuleSet['rules']
   changed: readonly RuleId[]
+  /** Only rules that govern this species; null for all. */
+  species: Species | null
+  widthPx: number
   onLevel: (ruleId: RuleId, level: Level) => void
   onParam: (ruleId: RuleId, name: string, value: unknown) => void
-}>) {
+}>
+
+/** The rules of a set one by one: what each says, how it counts, its parameters, and what that does to an example. */
+export function RuleList(props: RuleListProps) {
+  return <BookAsked lines={8}>{(book) => <ListOfBook {...props} book={book} />}</BookAsked>
+}
+
+function ListOfBook({
+  book,
+  rules,
+  before,
+  changed,
+  species,
+  widthPx,
+  onLevel,
+  onParam,
+}: RuleListProps & Readonly<{ book: RuleBook }>) {
   const words = useWords()
   const { setup, common } = words
   const [search, setSearch] = useState('')
   const [shownCount, setShownCount] = useState(STEP)
-  const all = useMemo(() => findRules('', 1), [])
-  const found = useMemo(() => findRules(search, 1), [search])
+  const all = useMemo(
+    () => Object.values(book).filter((page) => species === null || page.species.includes(species)),
+    [book, species],
+  )
+  const found = searchPages(useDeferredValue(search), all)
   return (
     <View style={{ gap: space.small }}>
       <Field
@@ -43,16 +73,22 @@ export function RuleList({
         {found.length === 0 ? setup.rulesNone : setup.rulesCount(found.length, all.length)}
       </Txt>
       <View role="list" aria-label={setup.rules}>
-        {found.slice(0, shownCount).map((rule) => (
-          <RuleRow
-            key={rule.id}
-            rule={rule}
-            setting={ruleSet.rules[rule.id]}
-            isChanged={changed.includes(rule.id)}
-            onLevel={onLevel}
-            onParam={onParam}
-          />
-        ))}
+        {found.slice(0, shownCount).map((page) => {
+          const rule = findRule(page.id)
+          return rule ? (
+            <RuleRow
+              key={page.id}
+              rule={rule}
+              page={page}
+              setting={rules[page.id]}
+              before={before[page.id]}
+              isChanged={changed.includes(page.id)}
+              widthPx={widthPx}
+              onLevel={onLevel}
+              onParam={onParam}
+            />
+          ) : null
+        })}
       </View>
       {found.length > shownCount ? (
         <Button
@@ -69,19 +105,26 @@ export function RuleList({
 
 const RuleRow = memo(function RuleRow({
   rule,
+  page,
   setting,
+  before,
   isChanged,
+  widthPx,
   onLevel,
   onParam,
 }: Readonly<{
   rule: AnyRule
+  page: RulePage
   setting: RuleSetting | undefined
+  before: RuleSetting | undefined
   isChanged: boolean
+  widthPx: number
   onLevel: (ruleId: RuleId, level: Level) => void
   onParam: (ruleId: RuleId, name: string, value: unknown) => void
 }>) {
-  const words = useWords().setup
+  const { setup: words, ruleSets: say } = useWords()
   const { colors } = useTheme()
+  const [isTried, setTried] = useState(false)
   const fields = useMemo(() => paramFields(rule.params), [rule])
   const level = setting?.level ?? 'off'
   const problems = useMemo(() => {
@@ -109,11 +152,17 @@ const RuleRow = memo(function RuleRow({
       >
         <View style={{ flexGrow: 1, flexShrink: 1, flexBasis: 280, minWidth: 0 }}>
           <Txt isStrong>
-            {rule.explain.title}
+            <LinkText
+              href={`/rules/${rule.id}`}
+              label={rule.explain.title}
+              tone="lampblack"
+              isStrong
+              style={{ paddingVertical: space.tiny }}
+            />
             {isChanged ? <Txt kind="note" tone="verdigris">{`  ${words.ruleChanged}`}</Txt> : null}
           </Txt>
           <Txt kind="note" tone="lead">
-            {rule.explain.statement}
+            {page.statement}
           </Txt>
         </View>
         <Choice<Level>
@@ -141,50 +190,15 @@ const RuleRow = memo(function RuleRow({
           ))}
         </View>
       ) : null}
+      <View style={{ marginLeft: -space.small }}>
+        <Button
+          kind="quiet"
+          label={isTried ? say.tryItClose : say.tryIt}
+          hint={isTried ? undefined : say.tryItSpoken(rule.explain.title)}
+          onPress={() => setTried(!isTried)}
+        />
+      </View>
+      {isTried ? <RuleTrial rule={rule} page={page} before={before} now={setting} widthPx={widthPx} /> : null}
     </View>
   )
 })
-
-function ParamControl({
-  field,
-  value,
-  hasProblem,
-  onChange,
-}: Readonly<{ field: ParamField; value: unknown; hasProblem: boolean; onChange: (value: unknown) => void }>) {
-  const words = useWords().setup
-  const { control } = field
-  const [text, setText] = useState(() => formatParam(control, value))
-  const [isUnread, setUnread] = useState(false)
-  const hint = field.description ?? undefined
-  if (control.kind === 'switch')
-    return <Toggle label={field.label} value={value === true} onChange={onChange} hint={hint} />
-  if (control.kind === 'choice')
-    return (
-      <View style={{ width: 280, maxWidth: '100%' }}>
-        <Select
-          label={field.label}
-          value={String(value)}
-          options={control.options.map((option) => ({ value: option, label: option.replaceAll('-', ' ') }))}
-          onChange={onChange}
-          hint={hint}
-        />
-      </View>
-    )
-  return (
-    <View style={{ width: control.kind === 'list' || control.kind === 'json' ? 280 : 150, maxWidth: '100%' }}>
-      <Field
-        label={field.label}
-        value={text}
-        isVerbatim
-        hint={control.kind === 'list' && control.options ? words.paramList(control.options) : hint}
-        problem={isUnread || hasProblem ? words.paramProblem : null}
-        onChangeText={(next) => {
-          setText(next)
-          const read = parseParam(control, next)
-          setUnread(read === undefined)
-          if (read !== undefined) onChange(read)
-        }}
-      />
-    </View>
-  )
-}

@@ -1,0 +1,1 @@
+export { useRuleBook, type RuleBookState } from './use-rule-book'
