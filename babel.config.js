@@ -1,4 +1,4 @@
 module.exports = (api) => {
-  api.cache(true)
-  return { presets: ['babel-preset-expo'] }
+  const isWeb = api.caller((caller) => caller?.platform === 'web')
+  return { presets: ['babel-preset-expo'], plugins: isWeb ? ['./bundling/plain-rules.js'] : [] }
 }

@@ -102,6 +102,20 @@ export default tseslint.config(
     },
   },
   {
+    // What a rule tells of itself is not in browsers, but for what words a finding (bundling/plain-rules.js).
+    files: ['app/**/*.tsx', 'components/**/*.{ts,tsx}'],
+    rules: {
+      'no-restricted-syntax': [
+        'error',
+        {
+          selector:
+            'MemberExpression[object.property.name="explain"][property.name=/^(why|sources|right|wrong|disagreement)$/]',
+          message: 'Not in browsers: read it from the rule book, by useRuleBook.',
+        },
+      ],
+    },
+  },
+  {
     // Runs in the page before anything else, as it stands.
     files: ['public/**/*.js'],
     languageOptions: { globals: { document: 'readonly', localStorage: 'readonly' } },

@@ -1,15 +1,23 @@
 const path = require('node:path')
 const { getDefaultConfig } = require('expo/metro-config')
 const { isLeftOut } = require('./bundling/left-out')
+const { makeModulesBeforehand } = require('./bundling/made-beforehand')
+const { shakePackages } = require('./bundling/shaken')
 
-const config = getDefaultConfig(__dirname)
-
-const resolveRequest = config.resolver.resolveRequest
-config.resolver.resolveRequest = (context, moduleName, platform) => {
-  const resolve = resolveRequest ?? context.resolveRequest
-  const resolved = resolve(context, moduleName, platform)
-  if (platform !== 'web' || resolved.type !== 'sourceFile') return resolved
-  return isLeftOut(resolved.filePath.split(path.sep).join('/')) ? { type: 'empty' } : resolved
+module.exports = async () => {
+  const [shaken, made] = await Promise.all([shakePackages(), makeModulesBeforehand()])
+  const config = getDefaultConfig(__dirname)
+  const { resolveRequest } = config.resolver
+  config.resolver.resolveRequest = (context, moduleName, platform) => {
+    const resolve = resolveRequest ?? context.resolveRequest
+    if (platform !== 'web') return resolve(context, moduleName, platform)
+    const filePath = shaken.get(moduleName)
+    if (filePath) return { type: 'sourceFile', filePath }
+    const resolved = resolve(context, moduleName, platform)
+    if (resolved.type !== 'sourceFile') return resolved
+    const madeFilePath = made.get(resolved.filePath)
+    if (madeFilePath) return { type: 'sourceFile', filePath: madeFilePath }
+    return isLeftOut(resolved.filePath.split(path.sep).join('/')) ? { type: 'empty' } : resolved
+  }
+  return config
 }
-
-module.exports = config

@@ -38,11 +38,6 @@ const KEPT_EXPORTS = [
 ]
 
 const LEFT_OUT = [
-  // Messages of validation in fifty languages: ours come from the locale tables, by code.
-  /\/zod\/v4\/locales\/index\.js$/,
-  // Schemas out of JSON Schema, and the compiler of validators, which a content security policy forbids anyway.
-  /\/zod\/v4\/classic\/from-json-schema\.js$/,
-  /\/zod\/v4\/core\/compile\.js$/,
   // Navigators with headers, tabs and cards: here a route is a page, drawn in a `Slot`.
   /\/expo-router\/build\/(stack\/index|layouts\/Tabs|layouts\/experimental-stack\/index(\.web)?)\.js$/,
   /\/react-navigation\/(native-stack\/views|bottom-tabs)\//,
@@ -57,6 +52,8 @@ const LEFT_OUT = [
   /\/expo-router\/build\/react-navigation\/(core\/StaticNavigation|native\/(createStaticNavigation|ServerContainer))\.js$/,
   // Drawings read out of files and addresses, and their style sheets: ours are drawn from elements.
   /\/react-native-svg\/lib\/module\/(xml|deprecated|utils\/fetchData)\.js$/,
+  // Presses on shapes: ours are pressed through the buttons that lie over them.
+  /\/react-native-svg\/lib\/module\/lib\/SvgTouchableMixin\.js$/,
   new RegExp(`/${WITHIN_REACT_NATIVE_WEB}/(?!(?:${KEPT_EXPORTS.join('|')})/)\\w+/index\\.js$`),
 ]
 

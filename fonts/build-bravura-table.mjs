@@ -51,6 +51,8 @@ const DEFAULTS = [
   'barlineSeparation',
   'legerLineThickness',
   'legerLineExtension',
+  'stemThickness',
+  'beamThickness',
 ]
 const defaults = Object.fromEntries(DEFAULTS.map((key) => [key, metadata.engravingDefaults[key]]))
 

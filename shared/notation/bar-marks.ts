@@ -1,4 +1,5 @@
-import { MOTION_HALF_STAFF_SPACES, type MeasuredBar } from '@/shared/notation/bar-measure'
+import { marksAt } from '@/shared/notation/bar-content'
+import { figuresOf, MOTION_HALF_STAFF_SPACES, type MeasuredBar } from '@/shared/notation/bar-measure'
 import {
   barlinePx,
   crispPx,
@@ -13,20 +14,30 @@ import {
 } from '@/shared/notation/mark'
 import { ellipsise, measureTextPx, textHeightPx } from '@/shared/notation/measure-text'
 import type { BarMotion } from '@/shared/notation/score-input'
-import { letteringOf } from '@/shared/notation/sizes'
+import type { BarFrame, Voice } from '@/shared/notation/score-layout'
+import { figurePxOf, letteringOf } from '@/shared/notation/sizes'
 import { frozenLinesPx, HOOK_STAFF_SPACES, type SystemRows } from '@/shared/notation/system-heights'
+import { tieBetween, tieMark, type TieEnd } from '@/shared/notation/ties'
 
 /** A bar in its system: where it is, and how its neighbours stand. */
 export type PlacedBar = Readonly<{
   measured: MeasuredBar
   widthPx: number
   axisPx: number
+  moments: BarFrame['moments']
   isFirstInSystem: boolean
   /** Whether the released bracket runs on from the bar before and into the bar after, on this system or the next. */
   isReleasedBefore: boolean
   isReleasedAfter: boolean
+  /** Where the first note of the next bar on this system stands, from this bar's left edge; null at the system's end. */
+  tieToPx: number | null
+  /** The end of the next bar's first head that a tie comes to. */
+  tieToEnd: TieEnd | null
   isMini: boolean
 }>
+
+const momentPx = ({ moments, axisPx }: PlacedBar, tick: number): number =>
+  moments.find((moment) => moment.tick === tick)?.xPx ?? axisPx
 
 /** Each voice's stroke through the mark, upper then lower: from and to, in halves of the mark's width, y downwards. */
 const MOTION_STROKES: Readonly<Record<BarMotion, readonly (readonly [Point, Point])[]>> = {
@@ -188,13 +199,12 @@ function railMarks(placed: PlacedBar, rows: SystemRows, spacePx: number): readon
   const { bar, isMotionInside } = placed.measured
   if (rows.railPx === null) return []
   const marks: Mark[] = []
-  if (bar.figure) {
-    const sizePx = letteringOf(spacePx).figurePx
+  for (const { tick, text, tone, isWeak } of figuresOf(bar)) {
+    const sizePx = figurePxOf(spacePx, isWeak)
     const baseline = rows.railPx + textHeightPx('8', 'Alegreya', sizePx).above / 2
-    const ink: Ink = bar.figure.tone
     const look = { face: 'Alegreya', sizePx, anchor: 'middle' } as const
-    const name = { role: 'figure', ink, group: `figure ${bar.number}` } as const
-    marks.push(textMark(name, bar.figure.text, placed.axisPx, baseline, look))
+    const name = { role: 'figure', ink: tone, group: `figure ${bar.number} ${tick}` } as const
+    marks.push(textMark(name, text, momentPx(placed, tick), baseline, look))
   }
   if (bar.motion) {
     const x = isMotionInside ? (MOTION_HALF_STAFF_SPACES + 0.3) * spacePx : 0
@@ -217,11 +227,43 @@ function labelMarks(placed: PlacedBar, rows: SystemRows, spacePx: number): reado
   return [textMark(name, text, x, rows.labelBaselinePx, { face, sizePx, anchor: 'middle' })]
 }
 
+function contentMarks(placed: PlacedBar, voice: Voice, spacePx: number): readonly Mark[] {
+  const content = placed.measured.content[voice]
+  const xs = content.columns.map(({ tick }) => momentPx(placed, tick))
+  return [...marksAt(content, xs, spacePx), ...tieMarksOver(placed, voice, spacePx)]
+}
+
+/** The tie over the bar line to the next bar, or to the end of the system; and what of one comes from the system before. */
+function tieMarksOver(placed: PlacedBar, voice: Voice, spacePx: number): readonly Mark[] {
+  const { bar, content } = placed.measured
+  const { columns, tieOver, tieInto } = content[voice]
+  const marks: Mark[] = []
+  const last = columns.at(-1)
+  if (tieOver && last) {
+    const to = placed.tieToPx ?? placed.widthPx
+    marks.push(
+      tieMark(
+        tieBetween(tieOver, placed.tieToEnd),
+        momentPx(placed, last.tick),
+        to,
+        spacePx,
+        `${bar.number} tie over`,
+      ),
+    )
+  }
+  if (tieInto && placed.isFirstInSystem) {
+    const to = momentPx(placed, columns[0]?.tick ?? 0)
+    const from = Math.min(0.3 * spacePx, to - 1.2 * spacePx)
+    marks.push(tieMark(tieInto, from, to, spacePx, `${bar.number} tie into`))
+  }
+  return marks
+}
+
 /** Everything that belongs to one bar, from its own left edge. */
 export function barMarks(placed: PlacedBar, rows: SystemRows, spacePx: number): readonly Mark[] {
   const { measured, isMini } = placed
   const notes = rows.staves.flatMap(({ voice, topPx }) =>
-    measured.content[voice].marks.map((mark) => moveMark(mark, placed.axisPx, topPx)),
+    contentMarks(placed, voice, spacePx).map((mark) => moveMark(mark, 0, topPx)),
   )
   if (isMini) return [...leftBarlineMarks(placed, rows, spacePx, false), ...notes]
   const heads = numberMark(placed, rows, spacePx)

@@ -33,14 +33,15 @@ function layoutAt(setting: Setting): ScoreLayout {
   }
 }
 
-const fitsWidth = ({ measured, options, prefixPx }: Setting): boolean =>
+const fitsWidth = ({ measured, options, prefixPx, metrePx }: Setting): boolean =>
   options.size === 'mini'
-    ? measured.reduce((sum, bar) => sum + bar.leastPx, prefixPx) <= options.widthPx
-    : measured.every((bar) => prefixPx + bar.leastPx <= options.widthPx)
+    ? measured.reduce((sum, bar) => sum + bar.leastPx, prefixPx + metrePx) <= options.widthPx
+    : measured.every((bar, i) => prefixPx + (i === 0 ? metrePx : 0) + bar.leastPx <= options.widthPx)
 
 /** Bars keep at least a tenth of spare width. */
-const isRoomy = ({ measured, options, prefixPx, spacePx }: Setting): boolean =>
-  prefixPx + measured.reduce((sum, bar) => sum + naturalPx(bar, spacePx), 0) <= 0.9 * options.widthPx
+const isRoomy = ({ measured, options, prefixPx, metrePx, spacePx }: Setting): boolean =>
+  prefixPx + metrePx + measured.reduce((sum, bar) => sum + naturalPx(bar, spacePx), 0) <=
+  0.9 * options.widthPx
 
 /** The largest whole number from `least` to `most` that passes, or null; whatever is smaller than one that passes does too. */
 function largestPassing(least: number, most: number, isPassing: (value: number) => boolean): number | null {

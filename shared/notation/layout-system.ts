@@ -1,6 +1,5 @@
 import { barMarks } from '@/shared/notation/bar-marks'
 import type { MeasuredBar } from '@/shared/notation/bar-measure'
-import { uniteBoxes, type Box } from '@/shared/notation/box'
 import type { SystemFrame } from '@/shared/notation/frame-system'
 import { assignLevels } from '@/shared/notation/levels'
 import type { Mark } from '@/shared/notation/mark'
@@ -9,11 +8,30 @@ import { hasClefs, type Setting } from '@/shared/notation/setting'
 import { bracketMarks, findingMarks, segmentOn, type ShownPart } from '@/shared/notation/span-marks'
 import { stripOffsetPx } from '@/shared/notation/strip-offset'
 import { arrangeRows } from '@/shared/notation/system-heights'
-import { endBarlineMarks, prefixMarks, staffLineMarks } from '@/shared/notation/system-marks'
+import {
+  endBarlineMarks,
+  METRE_GAP,
+  metreMarks,
+  PREFIX_GAP,
+  prefixMarks,
+  staffLineMarks,
+} from '@/shared/notation/system-marks'
+import { stoppingShortPx } from '@/shared/notation/ties'
 
-const unite = (boxes: readonly (Box | null)[]): Box | null => {
-  const present = boxes.filter((box) => box !== null)
-  return present.length === 0 ? null : uniteBoxes(present)
+type Reach = Readonly<{ top: number; bottom: number }>
+
+function reachOf(reaches: readonly (Reach | null)[]): Reach | null {
+  const present = reaches.filter((reach) => reach !== null)
+  if (present.length === 0) return null
+  return {
+    top: Math.min(...present.map(({ top }) => top)),
+    bottom: Math.max(...present.map(({ bottom }) => bottom)),
+  }
+}
+
+function tieShortPx(bar: MeasuredBar | undefined, next: MeasuredBar | undefined, spacePx: number): number {
+  const over = bar?.content.line.tieOver
+  return over ? stoppingShortPx(over, next?.content.line.tieInto ?? null, spacePx) : 0
 }
 
 const isReleased = (bar: MeasuredBar | undefined): boolean =>
@@ -43,10 +61,10 @@ export function arrangeSpans({ input }: Setting, frames: readonly SystemFrame[])
 }
 
 /** What of a system is in view: all of it, or the window of a strip around the bar in hand. */
-function shownPart({ options, prefixPx }: Setting, frame: SystemFrame): ShownPart {
+function shownPart({ options }: Setting, frame: SystemFrame): ShownPart {
   if (options.size !== 'strip') return { leftPx: 0, rightPx: frame.widthPx }
   const offsetPx = stripOffsetPx(frame, options.handBar ?? null, options.widthPx)
-  return { leftPx: offsetPx + prefixPx, rightPx: offsetPx + options.widthPx }
+  return { leftPx: offsetPx + frame.prefixPx, rightPx: offsetPx + options.widthPx }
 }
 
 /** Places everything of one system, its top at `yPx`. */
@@ -57,10 +75,11 @@ export function layoutSystem(
   yPx: number,
   spanning: Spans,
 ): SystemLayout {
-  const { input, options, spacePx, prefixPx, measured } = setting
+  const { input, options, spacePx, measured } = setting
   const isMini = options.size === 'mini'
-  const { from, to, widthPx, bars: frames } = frame
+  const { from, to, prefixPx, widthPx, bars: frames } = frame
   const shown = shownPart(setting, frame)
+  const metrePx = from === 0 ? setting.metrePx : 0
   const bars = measured.slice(from, to)
 
   const arcsHere = input.arcs.map((arc) => (isMini ? null : segmentOn(frames, arc)))
@@ -73,7 +92,7 @@ export function layoutSystem(
     staves: setting.staves.map(({ voice, clef }) => ({
       voice,
       clef,
-      box: unite(bars.map((bar) => bar.content[voice].box)),
+      reach: reachOf(bars.map((bar) => bar.content[voice].reach)),
     })),
     signature: hasClefs(input, options) ? input.signature : null,
     hasLabels: !isMini && input.bars.some((bar) => bar.label !== null),
@@ -82,13 +101,17 @@ export function layoutSystem(
   })
 
   const placedBars = frames.map((frame, i): BarLayout => {
+    const next = frames[i + 1]
     const placed = {
       measured: bars[i] as MeasuredBar,
       widthPx: frame.widthPx,
       axisPx: frame.axisPx,
+      moments: frame.moments,
       isFirstInSystem: i === 0,
       isReleasedBefore: isReleased(measured[frame.index - 1]),
       isReleasedAfter: isReleased(measured[frame.index + 1]),
+      tieToPx: next ? next.xPx - frame.xPx + next.axisPx - tieShortPx(bars[i], bars[i + 1], spacePx) : null,
+      tieToEnd: bars[i + 1]?.content.line.tieInto ?? null,
       isMini,
     }
     return { ...frame, marks: barMarks(placed, rows, spacePx) }
@@ -129,7 +152,12 @@ export function layoutSystem(
     stavesBox: { left: 0, right: widthPx, top, bottom },
     railPx: rows.railPx,
     staffLines: staffLineMarks(rows.staves, widthPx, spacePx),
-    prefix: hasClefs(input, options) ? prefixMarks(rows.staves, input.signature, spacePx) : [],
+    prefix: [
+      ...(hasClefs(input, options) ? prefixMarks(rows.staves, input.signature, spacePx) : []),
+      ...(metrePx > 0
+        ? metreMarks(rows.staves, prefixPx - metrePx - PREFIX_GAP * spacePx + METRE_GAP * spacePx, spacePx)
+        : []),
+    ],
     spans,
     bars: placedBars,
   }

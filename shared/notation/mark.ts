@@ -16,6 +16,13 @@ export type MarkRole =
   | 'signature'
   | 'ledger'
   | 'notehead'
+  | 'stem'
+  | 'flag'
+  | 'beam'
+  | 'dot'
+  | 'rest'
+  | 'tie'
+  | 'metre'
   | 'accidental'
   | 'lozenge'
   | 'count'
@@ -41,6 +48,8 @@ type Shape =
   | Readonly<{ kind: 'stroke'; points: readonly Point[]; strokePx: number }>
   /** A quadratic curve. */
   | Readonly<{ kind: 'curve'; from: Point; control: Point; to: Point; strokePx: number; isDashed: boolean }>
+  /** A tie: thin at its ends, thick at its crown; the two controls are those of its outer and its inner edge. */
+  | Readonly<{ kind: 'crescent'; from: Point; outer: Point; inner: Point; to: Point }>
   /** Words or figures: `x` is where the text starts and `y` its baseline. */
   | Readonly<{ kind: 'text'; text: string; face: FaceName; sizePx: number; x: number; y: number }>
 
@@ -117,6 +126,35 @@ export function archMark(
   }
 }
 
+/** A tie from `from` to `to`, bowed upwards by `bowPx` at its crown, or downwards where that is negative. */
+export function crescentMark(
+  name: MarkName,
+  from: Point,
+  to: Point,
+  bowPx: number,
+  thicknessPx: number,
+): Mark {
+  const middle = (from[0] + to[0]) / 2
+  const y = (from[1] + to[1]) / 2
+  const outer: Point = [middle, y - 2 * bowPx]
+  const inner: Point = [middle, y - 2 * bowPx + Math.sign(bowPx) * 2 * thicknessPx]
+  return {
+    ...name,
+    kind: 'crescent',
+    from,
+    outer,
+    inner,
+    to,
+    box: boxAround([from, [middle, y - bowPx], to], 0),
+  }
+}
+
+/** A beam between two points of its outer edge, `thicknessPx` thick towards the heads: downwards where it is positive. */
+export function beamMark(name: MarkName, from: Point, to: Point, thicknessPx: number): Mark {
+  const points: readonly Point[] = [from, to, [to[0], to[1] + thicknessPx], [from[0], from[1] + thicknessPx]]
+  return { ...name, kind: 'polygon', points, isFilled: true, strokePx: 0, box: boxAround(points, 0) }
+}
+
 export type TextLook = Readonly<{ face: FaceName; sizePx: number; anchor: 'start' | 'middle' | 'end' }>
 
 /** A text whose start, middle or end stands at `x`, on the baseline `y`. */
@@ -142,6 +180,15 @@ export function moveMark(mark: Mark, dx: number, dy: number): Mark {
     case 'polygon':
     case 'stroke':
       return { ...mark, points: mark.points.map((point) => movePoint(point, dx, dy)), box }
+    case 'crescent':
+      return {
+        ...mark,
+        from: movePoint(mark.from, dx, dy),
+        outer: movePoint(mark.outer, dx, dy),
+        inner: movePoint(mark.inner, dx, dy),
+        to: movePoint(mark.to, dx, dy),
+        box,
+      }
     case 'curve':
       return {
         ...mark,

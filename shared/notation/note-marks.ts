@@ -7,6 +7,7 @@ import {
   glyphMark,
   lozengeMark,
   LOZENGE_STRETCH,
+  rectangleMark,
   ruleMark,
   textMark,
   type Ink,
@@ -16,11 +17,15 @@ import { textHeightPx } from '@/shared/notation/measure-text'
 import type { ProposalMark } from '@/shared/notation/score-input'
 import { letteringOf } from '@/shared/notation/sizes'
 import { depthStaffSpaces, ledgerPlaces, staffPlaceOf } from '@/shared/notation/staff-place'
+import type { Stem } from '@/shared/notation/stems'
 import type { Clef } from '@/shared/theory/clef'
+import type { NoteValue, WrittenValue } from '@/shared/theory/note-value'
 import type { Alteration, Pitch } from '@/shared/theory/pitch'
 
 /** Where a staff's notes are set: its clef, and px to a staff space. Marks come out with the top staff line at y = 0. */
 export type StaffSetting = Readonly<{ clef: Clef; spacePx: number }>
+
+type Look = Readonly<{ ink: Ink; group: string }>
 
 const ACCIDENTAL_GAP = 0.25
 const COUNT_GAP = 0.25
@@ -46,7 +51,7 @@ function accidentalMark(
   place: number,
   halfWidthPx: number,
   setting: StaffSetting,
-  look: { ink: Ink; group: string },
+  look: Look,
 ): Mark {
   const { spacePx } = setting
   const ledger = ledgerPlaces(place).length > 0 ? ENGRAVING_DEFAULTS.legerLineExtension : 0
@@ -55,35 +60,86 @@ function accidentalMark(
   return glyphMark({ role: 'accidental', ...look }, glyph, x, depthStaffSpaces(place) * spacePx, spacePx)
 }
 
-/** A whole note of the cantus or the agreed line, its head centred on x = 0. */
-export function wholeNoteMarks(
+const HEADS: Readonly<Record<NoteValue, GlyphName>> = {
+  whole: 'noteheadWhole',
+  half: 'noteheadHalf',
+  quarter: 'noteheadBlack',
+  eighth: 'noteheadBlack',
+}
+
+const DOT_GAP = 0.3
+
+/** The dot beside a head reaching `rightPx` right of the axis; by a note on a line it stands in the space above. */
+function dotMark(place: number, rightPx: number, spacePx: number, look: Look): Mark {
+  const ledger = ledgerPlaces(place).length > 0 ? ENGRAVING_DEFAULTS.legerLineExtension : 0
+  const y = depthStaffSpaces(place % 2 === 0 ? place + 1 : place) * spacePx
+  const x = rightPx + (ledger + DOT_GAP) * spacePx
+  return glyphMark({ role: 'dot', ...look }, 'augmentationDot', x, y, spacePx)
+}
+
+/** A stem whose side towards the flag is at `leftPx`, from the head to its tip, and its flag. */
+function stemMarks(stem: Stem, leftPx: number, headPx: number, spacePx: number, look: Look): readonly Mark[] {
+  const tip = stem.tipDepth * spacePx
+  const right = leftPx + stemPx(spacePx)
+  const box = { left: leftPx, right, top: Math.min(tip, headPx), bottom: Math.max(tip, headPx) }
+  const marks = [rectangleMark({ role: 'stem', ...look }, box)]
+  if (!stem.hasFlag) return marks
+  const flag = stem.isUp ? 'flag8thUp' : 'flag8thDown'
+  return [...marks, glyphMark({ role: 'flag', ...look }, flag, leftPx, tip, spacePx)]
+}
+
+export const stemPx = (spacePx: number): number => Math.max(1.2, ENGRAVING_DEFAULTS.stemThickness * spacePx)
+
+/** Left side of the stem of a solid head, from its axis. */
+export function stemLeftPx(isUp: boolean, spacePx: number): number {
+  const half = (BRAVURA.noteheadBlack.right * spacePx) / 2
+  return isUp ? half - stemPx(spacePx) : -half
+}
+
+/** How far above its middle a head meets the right side of its stem, by the font's own anchor. */
+const STEM_ANCHOR = BRAVURA.noteheadBlack.anchors.stemUpSE?.[1] ?? 0
+
+/** A note of the cantus or the agreed line, its head centred on x = 0. */
+export function noteMarks(
   pitch: Pitch,
   standing: Alteration,
+  { value, isDotted }: WrittenValue,
+  stem: Stem | null,
   setting: StaffSetting,
-  look: { ink: Ink; group: string },
+  look: Look,
 ): readonly Mark[] {
   const { spacePx, clef } = setting
   const place = staffPlaceOf(pitch, clef)
-  const half = (BRAVURA.noteheadWhole.right * spacePx) / 2
+  const head = HEADS[value]
+  const half = (BRAVURA[head].right * spacePx) / 2
   const y = depthStaffSpaces(place) * spacePx
   const accidental = accidentalFor(pitch, standing)
+  const meets = stem ? y + (stem.isUp ? -1 : 1) * STEM_ANCHOR * spacePx : y
   return [
     ...ledgerMarks(place, half, setting, look.group),
-    glyphMark({ role: 'notehead', ...look }, 'noteheadWhole', -half, y, spacePx),
+    glyphMark({ role: 'notehead', ...look }, head, -half, y, spacePx),
+    ...(stem ? stemMarks(stem, stemLeftPx(stem.isUp, spacePx), meets, spacePx, look) : []),
+    ...(isDotted ? [dotMark(place, half, spacePx, look)] : []),
     ...(accidental ? [accidentalMark(accidental, place, half, setting, look)] : []),
   ]
 }
 
-/** A rest of a whole bar, hanging from the fourth line. */
-export const wholeRestMarks = (spacePx: number, look: { ink: Ink; group: string }): readonly Mark[] => [
-  glyphMark(
-    { role: 'notehead', ...look },
-    'restWhole',
-    (-BRAVURA.restWhole.right * spacePx) / 2,
-    spacePx,
-    spacePx,
-  ),
-]
+/** Each rest, and the depth of its origin: the whole rest hangs from the fourth line, the others stand on the middle one. */
+const RESTS: Readonly<Record<NoteValue, readonly [glyph: GlyphName, depth: number]>> = {
+  whole: ['restWhole', 1],
+  half: ['restHalf', 2],
+  quarter: ['restQuarter', 2],
+  eighth: ['rest8th', 2],
+}
+
+export function restMarks(written: WrittenValue, spacePx: number, look: Look): readonly Mark[] {
+  const [glyph, depth] = RESTS[written.value]
+  const half = (BRAVURA[glyph].right * spacePx) / 2
+  return [
+    glyphMark({ role: 'rest', ...look }, glyph, -half, depth * spacePx, spacePx),
+    ...(written.isDotted ? [dotMark(5, half, spacePx, look)] : []),
+  ]
+}
 
 const UNCOUNTED_RADIUS = 0.74
 const LEAST_RADIUS = 0.4
@@ -99,32 +155,68 @@ export const lozengeRadiusStaffSpaces = (count: number | null): number =>
     ? UNCOUNTED_RADIUS
     : Math.min(MOST_RADIUS, LEAST_RADIUS + RADIUS_BY_DOUBLING * Math.log2(Math.max(1, count)))
 
+/** How a proposal's lozenge is written where values are: a short note is solid, and its stem grows from its point. */
+export type WrittenLozenge = Readonly<{ written: WrittenValue; stem: Stem | null }>
+
+type ProposalLook = Readonly<{
+  group: string
+  countSide: 'left' | 'right'
+  /** Null where every note is whole, and a solid lozenge can tell of a broken law. */
+  rhythm?: WrittenLozenge | null | undefined
+}>
+
+const isSolid = ({ tone }: Pick<ProposalMark, 'tone'>, rhythm: WrittenLozenge | null): boolean =>
+  rhythm ? rhythm.written.value === 'quarter' || rhythm.written.value === 'eighth' : tone === 'breach'
+
+/** The largest lozenge among notes of several values, so that four stand beside each other. */
+const MOST_RHYTHMIC_RADIUS = 0.74
+
+const lozengeStrokePx = (spacePx: number): number => Math.max(1.5, 0.16 * spacePx)
+
+const radiusPx = (count: number | null, isMeasured: boolean, spacePx: number): number =>
+  Math.min(isMeasured ? MOST_RHYTHMIC_RADIUS : MOST_RADIUS, lozengeRadiusStaffSpaces(count)) * spacePx
+
+/** Half the height of a proposal's lozenge among notes of several values, its outline included. */
+export const lozengeHalfPx = (count: number | null, spacePx: number): number =>
+  radiusPx(count, true, spacePx) + 0.7 * lozengeStrokePx(spacePx)
+
 /** A proposal: its lozenge centred on x = 0, the number on the side asked for, outside any accidental. */
 export function proposalMarks(
   pitch: Pitch,
   standing: Alteration,
   proposal: Pick<ProposalMark, 'tone' | 'count'>,
   setting: StaffSetting,
-  look: Readonly<{ group: string; countSide: 'left' | 'right' }>,
+  look: ProposalLook,
 ): readonly Mark[] {
   const { spacePx, clef } = setting
   const { tone, count } = proposal
-  const { group, countSide } = look
+  const { group, countSide, rhythm = null } = look
   const place = staffPlaceOf(pitch, clef)
   const y = depthStaffSpaces(place) * spacePx
-  const radius = lozengeRadiusStaffSpaces(count) * spacePx
-  const strokePx = Math.max(1.5, 0.16 * spacePx)
+  const radius = radiusPx(count, rhythm !== null, spacePx)
+  const strokePx = lozengeStrokePx(spacePx)
   const half = radius * LOZENGE_STRETCH + strokePx * 0.7
   const accidental = accidentalFor(pitch, standing)
+  const ink = { ink: tone, group }
+  const stem = rhythm?.stem ?? null
+  const stemLook = [-stemPx(spacePx) / 2, y + (stem?.isUp ? -radius : radius), spacePx, ink] as const
   const marks: Mark[] = [
     ...ledgerMarks(place, half, setting, group),
-    lozengeMark({ role: 'lozenge', ink: tone, group }, 0, y, radius, {
-      isFilled: tone === 'breach',
-      strokePx,
-    }),
-    ...(accidental ? [accidentalMark(accidental, place, half, setting, { ink: tone, group })] : []),
+    ...(stem ? stemMarks(stem, ...stemLook) : []),
+    lozengeMark({ role: 'lozenge', ...ink }, 0, y, radius, { isFilled: isSolid(proposal, rhythm), strokePx }),
+    ...(rhythm?.written.isDotted ? [dotMark(place, half, spacePx, ink)] : []),
+    ...(accidental ? [accidentalMark(accidental, place, half, setting, ink)] : []),
   ]
-  if (count === null) return marks
+  return count === null ? marks : [...marks, countMark(marks, y, { count, tone, countSide, group }, spacePx)]
+}
+
+/** The number of those who proposed, beside the marks it belongs to. */
+export function countMark(
+  marks: readonly Mark[],
+  y: number,
+  { count, tone, countSide, group }: { count: number; tone: Ink; countSide: 'left' | 'right'; group: string },
+  spacePx: number,
+): Mark {
   const { left, right } = uniteBoxes(marks.map((mark) => mark.box))
   const { countPx } = letteringOf(spacePx)
   const gap = Math.max(2, COUNT_GAP * spacePx)
@@ -132,8 +224,5 @@ export function proposalMarks(
     countSide === 'right' ? ([right + gap, 'start'] as const) : ([left - gap, 'end'] as const)
   const baseline = y + textHeightPx('8', 'AlegreyaSansMedium', countPx).above / 2
   const name = { role: 'count', ink: tone, group } as const
-  marks.push(
-    textMark(name, String(count), x, baseline, { face: 'AlegreyaSansMedium', sizePx: countPx, anchor }),
-  )
-  return marks
+  return textMark(name, String(count), x, baseline, { face: 'AlegreyaSansMedium', sizePx: countPx, anchor })
 }

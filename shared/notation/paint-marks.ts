@@ -37,9 +37,12 @@ function paintOf(mark: Exclude<Mark, { kind: 'text' }>): Paint {
   switch (mark.kind) {
     case 'rectangle':
       return { ...solid, layer: 0 }
+    case 'crescent':
+      return { ...solid, layer: 3 }
     case 'glyph':
       return { ...solid, layer: 3 }
     case 'polygon':
+      if (mark.strokePx === 0) return { ...solid, layer: 3 }
       return {
         layer: mark.isFilled ? 2 : 1,
         fill: mark.isFilled ? mark.ink : 'ground',
@@ -66,6 +69,8 @@ function pathOf(mark: Exclude<Mark, { kind: 'text' }>): string {
       return `M${mark.points.map(at).join('L')}Z`
     case 'stroke':
       return `M${mark.points.map(at).join('L')}`
+    case 'crescent':
+      return `M${at(mark.from)}Q${at(mark.outer)} ${at(mark.to)}Q${at(mark.inner)} ${at(mark.from)}Z`
     case 'curve':
       return `M${at(mark.from)}Q${at(mark.control)} ${at(mark.to)}`
   }

@@ -1,17 +1,22 @@
 import { growBox, isOverlapping, moveBox, uniteBoxes, type Box } from '@/shared/notation/box'
 import type { Mark, MarkRole } from '@/shared/notation/mark'
 
-const CROSSED_BY_LEDGERS: readonly MarkRole[] = ['ledger', 'notehead', 'lozenge']
+/**
+ * What each role may touch of other groups. Ledger lines may run behind any head or stem of the same column, as in a
+ * chord; words and accidentals they may not. A beam lies on its stems, and a tie goes over bar lines and under beams.
+ */
+const MAY_TOUCH: Partial<Readonly<Record<MarkRole, readonly MarkRole[]>>> = {
+  ledger: ['ledger', 'notehead', 'lozenge', 'stem', 'flag', 'tie'],
+  beam: ['stem'],
+  tie: ['barline'],
+}
 
-/** Ledger lines may run behind any head of the same column, as in a chord; words and accidentals they may not touch. */
 const mayTouch = (a: Mark, b: Mark): boolean =>
-  a.group === b.group ||
-  (a.role === 'ledger' && CROSSED_BY_LEDGERS.includes(b.role)) ||
-  (b.role === 'ledger' && CROSSED_BY_LEDGERS.includes(a.role))
+  a.group === b.group || MAY_TOUCH[a.role]?.includes(b.role) || MAY_TOUCH[b.role]?.includes(a.role) || false
 
 type Lozenge = Extract<Mark, { kind: 'polygon' }>
 
-const isLozenge = (mark: Mark): mark is Lozenge => mark.kind === 'polygon'
+const isLozenge = (mark: Mark): mark is Lozenge => mark.kind === 'polygon' && mark.role !== 'beam'
 
 /**
  * How far to the right the first of two lozenges must go to stand clear of the other. Lozenges of one shape meet where

@@ -25,6 +25,8 @@ export type ScoreBar = Readonly<{
   proposals: readonly ProposalMark[]
   /** Figured interval of the simultaneity, such as `5` or `10`, for the rail. */
   figure: Readonly<{ text: string; tone: Tone }> | null
+  /** Figures of what sounds later in the bar, in order, each at its place in ticks; smaller than the first. */
+  laterFigures?: readonly Readonly<{ tick: number; text: string; tone: Tone }>[] | undefined
   /** Motion into this bar from the one before it in the reading. */
   motion: BarMotion | null
   /** A degree, letter or sight-singing syllable under the cantus. */
@@ -46,4 +48,9 @@ export type ScoreInput = Readonly<{
   bars: readonly ScoreBar[]
   arcs: readonly ScoreArc[]
   brackets: readonly ScoreBracket[]
+  /**
+   * Whether notes of several values are told apart, as from the second species on: bars then begin at their left, there is a
+   * metre, and a solid lozenge is a short note, not a breach. Left out: as the notes are.
+   */
+  isMeasured?: boolean | undefined
 }>

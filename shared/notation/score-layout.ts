@@ -31,8 +31,10 @@ export type BarFrame = Readonly<{
   /** From the left edge of its system. */
   xPx: number
   widthPx: number
-  /** Where its notes stand, from its own left edge. */
+  /** Where its first notes stand, from its own left edge. */
   axisPx: number
+  /** Where each of its moments stands, from its own left edge, by its place in ticks. */
+  moments: readonly Readonly<{ tick: number; xPx: number }>[]
 }>
 
 /** One bar. Its marks are placed from its own left edge, so that a bar which only moves is the same drawing. */

@@ -17,6 +17,12 @@ export const letteringOf = (spacePx: number): Lettering => ({
   bracketPx: Math.max(14, Math.round(1.35 * spacePx)),
 })
 
+/** Figures of later moments in a bar are smaller than those of its first. */
+export const figurePxOf = (spacePx: number, isWeak: boolean): number => {
+  const { figurePx } = letteringOf(spacePx)
+  return isWeak ? Math.max(13, Math.round(0.75 * figurePx)) : figurePx
+}
+
 /** Width a bar asks for, in staff spaces, by how it stands; bars in play are wider than the rest. */
 export type BarWeights = Readonly<{ frozen: number; plain: number; released: number }>
 

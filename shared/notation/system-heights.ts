@@ -1,4 +1,3 @@
-import type { Box } from '@/shared/notation/box'
 import { BRAVURA } from '@/shared/notation/bravura'
 import { signatureMarks } from '@/shared/notation/key-signature'
 import { textHeightPx } from '@/shared/notation/measure-text'
@@ -36,7 +35,11 @@ export type SystemContent = Readonly<{
   size: ScoreSize
   spacePx: number
   /** From the top downwards, with the extent of the notes on each around its own top line. */
-  staves: readonly Readonly<{ voice: Voice; clef: Clef; box: Box | null }>[]
+  staves: readonly Readonly<{
+    voice: Voice
+    clef: Clef
+    reach: Readonly<{ top: number; bottom: number }> | null
+  }>[]
   /** Null where the staves have neither clef nor signature. */
   signature: number | null
   hasLabels: boolean
@@ -62,8 +65,10 @@ export function arrangeRows(content: SystemContent): SystemRows {
   const lettering = letteringOf(spacePx)
   const staffPx = STAFF_HEIGHT * spacePx
   const isMini = size === 'mini'
-  const over = staves.map(({ box }) => Math.max(KEPT_OVER_STAFF * spacePx, -(box?.top ?? 0)))
-  const under = staves.map(({ box }) => Math.max(KEPT_UNDER_STAFF * spacePx, (box?.bottom ?? 0) - staffPx))
+  const over = staves.map(({ reach }) => Math.max(KEPT_OVER_STAFF * spacePx, -(reach?.top ?? 0)))
+  const under = staves.map(({ reach }) =>
+    Math.max(KEPT_UNDER_STAFF * spacePx, (reach?.bottom ?? 0) - staffPx),
+  )
   const clefs = staves.map(({ clef }) =>
     signature === null ? { over: 0, under: 0 } : prefixReach(clef, signature),
   )
@@ -76,8 +81,8 @@ export function arrangeRows(content: SystemContent): SystemRows {
     ? 0
     : headLinePx + Math.max(HOOK_STAFF_SPACES * spacePx, frozenLinesPx(spacePx) + 1) + 0.2 * spacePx
   const arcsPx = isMini ? 0 : Math.max(1, arcLevels) * ARC_LEVEL_STAFF_SPACES * spacePx
-  const arcFootPx = headsPx + arcsPx
-  const firstTop = Math.round(
+  const arcFootPx = Math.round(headsPx + arcsPx)
+  const firstTop = Math.ceil(
     Math.max(arcFootPx + 0.2 * spacePx + (over[0] as number), (clefs[0]?.over ?? 0) * spacePx),
   )
 
@@ -116,7 +121,7 @@ export function arrangeRows(content: SystemContent): SystemRows {
     railPx: railPx === null ? null : Math.round(railPx),
     numberBaselinePx,
     headLinePx,
-    arcFootPx: Math.round(arcFootPx),
+    arcFootPx,
     labelBaselinePx,
     brackets,
   }

@@ -9,7 +9,7 @@ import type { Clef } from '@/shared/theory/clef'
 const CLEF_INSET = 0.7
 const SIGNATURE_GAP = 0.55
 const SIGNATURE_APART = 0.12
-const PREFIX_GAP = 0.75
+export const PREFIX_GAP = 0.75
 
 const clefsWidth = (clefs: readonly Clef[]): number =>
   Math.max(...clefs.map((clef) => BRAVURA[CLEF_PLACES[clef].glyph].right))
@@ -63,6 +63,24 @@ export function prefixMarks(
   const name = { role: 'barline', ink: 'barline', group: 'systemic' } as const
   return [rectangleMark(name, { left: 0, right: thickness, top, bottom }), ...marks]
 }
+
+export const METRE_GAP = 0.5
+
+/** Width of the sign for cut time after the other signs of the first system, in px. */
+export const metreWidthPx = (spacePx: number): number =>
+  Math.ceil((BRAVURA.timeSigCutCommon.right + METRE_GAP) * spacePx)
+
+/** The sign of the metre on every staff, `xPx` from the left. */
+export const metreMarks = (staves: readonly StaffLayout[], xPx: number, spacePx: number): readonly Mark[] =>
+  staves.map(({ topPx, voice }) =>
+    glyphMark(
+      { role: 'metre', ink: 'cantus', group: `metre ${voice}` },
+      'timeSigCutCommon',
+      xPx,
+      topPx + 2 * spacePx,
+      spacePx,
+    ),
+  )
 
 export function staffLineMarks(
   staves: readonly StaffLayout[],

@@ -35,7 +35,7 @@ export function describeFinding(finding: Finding): Description {
     const sentence = `The rule ${finding.ruleId} has something to say here.`
     return { heading, sentence, mend: '', spoken: `${heading}. ${sentence}` }
   }
-  const message = explain.messages[finding.code] ?? explain.statement
+  const message = explain.messages[finding.code] ?? `${explain.title}.`
   const mend = explain.messages[`${finding.code}.mend`] ?? explain.mends
   const spokenParts = [
     nameBars(finding.bars, ' to ', 'and'),

@@ -1,5 +1,5 @@
 import { execFile } from 'node:child_process'
-import { cp, mkdir, mkdtemp, rm, symlink, writeFile } from 'node:fs/promises'
+import { mkdir, mkdtemp, rm, symlink, writeFile } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { promisify } from 'node:util'
@@ -44,7 +44,7 @@ export async function exportBareApp(root: string): Promise<ExportedApp> {
       writeFile(join(home, 'app.json'), JSON.stringify({ expo })),
       writeFile(join(home, 'metro.config.js'), metroConfig(root)),
       writeFile(join(home, 'app', 'index.tsx'), INDEX),
-      cp(join(root, 'babel.config.js'), join(home, 'babel.config.js')),
+      writeFile(join(home, 'babel.config.js'), `module.exports = { presets: ['babel-preset-expo'] }\n`),
       symlink(join(root, 'node_modules'), join(home, 'node_modules')),
     ])
     await run(join(root, 'node_modules/.bin/expo'), ['export', '-p', 'web', '--output-dir', 'dist'], {
