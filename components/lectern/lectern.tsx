@@ -19,7 +19,6 @@ import { HearingDialog } from './hearing-dialog'
 import { LecternHeader } from './lectern-header'
 import { actsFor, NO_ACTS, readLectern, sortPeople } from './lectern-model'
 import { LineFindings } from './line-findings'
-import { LineWays } from './line-ways'
 import { PeoplePanel } from './people-panel'
 import { RoomList } from './room-list'
 import { SelectableScore } from './selectable-score'
@@ -225,9 +224,9 @@ export function Lectern(props: LecternProps) {
           onHear={hearGroup}
           onAdopt={isReadOnly ? null : adopt}
         />
-        <LineWays ways={ways('')} />
         <LineFindings
           rubrics={lineRubrics}
+          ways={ways('')}
           hasLine={Object.keys(view.line).length > 0}
           onPoint={setPointedAt}
           onSelect={setSelection}
