@@ -19,7 +19,6 @@ import { HearingDialog } from './hearing-dialog'
 import { LecternHeader } from './lectern-header'
 import { actsFor, NO_ACTS, readLectern, sortPeople } from './lectern-model'
 import { LineFindings } from './line-findings'
-import { LineWays } from './line-ways'
 import { PeoplePanel } from './people-panel'
 import { RoomList } from './room-list'
 import { SelectableScore } from './selectable-score'
@@ -234,9 +233,9 @@ export function Lectern(props: LecternProps) {
             onHear={hearGroup}
             onAdopt={isReadOnly ? null : adopt}
           />
-          <LineWays key="ways" ways={ways('')} />
           <LineFindings
             key="line"
+            ways={ways('')}
             rubrics={lineRubrics}
             hasLine={Object.keys(view.line).length > 0}
             onPoint={setPointedAt}

@@ -1,4 +1,5 @@
 import { View } from 'react-native'
+import type { WaysAnswer } from '@/components/ways/ways-messages'
 import type { Selection } from '@/components/lesson/bars'
 import { RubricLine } from '@/components/lesson/rubric-line'
 import type { Rubric } from '@/components/lesson/rubrics'
@@ -6,23 +7,30 @@ import { Why } from '@/components/rules/why'
 import { space } from '@/components/theme'
 import { Heading, Txt } from '@/components/ui'
 import { useWords } from '@/components/words'
+import { LineWays } from './line-ways'
 
 /** What is said of the class's own line. Pointing at a finding tints its bars in the score, pressing it selects them. */
 export function LineFindings({
   rubrics,
   hasLine,
+  ways,
   onPoint,
   onSelect,
 }: Readonly<{
   rubrics: readonly Rubric[]
   hasLine: boolean
+  /** Null while it is being counted. */
+  ways: WaysAnswer | null
   onPoint: (rubric: Rubric | null) => void
   onSelect: (selection: Selection) => void
 }>) {
   const words = useWords().lectern.line
   return (
     <View role="region" aria-label={words.title} style={{ gap: space.small }}>
-      <Heading level={2}>{words.title}</Heading>
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'baseline', columnGap: space.one }}>
+        <Heading level={2}>{words.title}</Heading>
+        <LineWays ways={ways} />
+      </View>
       {rubrics.length === 0 ? <Txt tone="lead">{hasLine ? words.none : words.empty}</Txt> : null}
       {rubrics.map((rubric) => (
         <View key={rubric.id} style={{ flexDirection: 'row', alignItems: 'center', gap: space.small }}>

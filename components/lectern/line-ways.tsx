@@ -11,7 +11,7 @@ export function LineWays({ ways }: Readonly<{ ways: WaysAnswer | null }>) {
   const titles = (ways?.deadEnd?.rules ?? []).map((id) => findRule(id)?.explain.title ?? id)
   return (
     <View role="status" style={{ minHeight: 24 }}>
-      <Txt tone={ways?.deadEnd ? 'minium' : 'lead'} isTabular>
+      <Txt kind="note" tone={ways?.deadEnd ? 'minium' : 'lead'} isTabular>
         {ways === null
           ? words.counting
           : ways.deadEnd

@@ -61,7 +61,7 @@ export function TaskPanel({
           <Button kind="quiet" label={words.suggestion} onPress={() => setText(suggestion)} />
         </View>
       ) : null}
-      <View role="group" aria-label={words.shows}>
+      <View role="group" aria-label={words.shows} style={{ gap: space.small }}>
         <Toggle
           label={words.findings}
           value={stage.showsFindings}

@@ -7,6 +7,9 @@ import { useWords } from '@/components/words'
 import type { WallMeasure } from './wall-measure'
 import { promptSizePx } from './wall-model'
 
+/** Lines of like length, so that no word is left alone in the last one. */
+const BALANCED = { textWrap: 'balance' } as object
+
 /** The task, and how much of the room has answered it. */
 export function WallFooter({
   prompt,
@@ -52,7 +55,7 @@ export function WallFooter({
           isStrong
           role="status"
           lines={4}
-          style={{ fontSize: sizePx, lineHeight: Math.round(sizePx * 1.1) }}
+          style={[{ fontSize: sizePx, lineHeight: Math.round(sizePx * 1.1) }, BALANCED]}
         >
           {prompt}
         </Txt>

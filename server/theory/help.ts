@@ -6,7 +6,10 @@ export const HELP = `npm run -s theory -- COMMAND [options] "D4 F4 E4 D4 …"
   alive     for every bar, the notes that still lead to an end, and in how many ways
   solve     whole lines, best first (--order notes: in the order of their notes), --limit 10
   draw      lines drawn evenly from all there are, --seed 1 --times 1
-  generate  cantus | solution | faults
+  generate  cantus    --length 11 --taste (nothing to remark on either) --seed 1 --times 1
+            solution  as draw
+            faults    a line with exactly the faults asked for: --fault par-perfect --fault dir-perfect:2
+                      --apart 2 (bars from the end of one fault to the end of the next) --seed 1 --times 1
 
 The exercise:
   --species 1…5  --position above|below  --mode dorian  --final D

@@ -1,4 +1,5 @@
 import { alive, check, count, draw, solve, type Answer } from '@/server/theory/answers'
+import { generate } from '@/server/theory/generate'
 import { HELP } from '@/server/theory/help'
 import { readAsked } from '@/server/theory/read-exercise'
 import { Refusal } from '@/server/theory/refusal'
@@ -34,6 +35,6 @@ function answer(request: Request, readFile: (path: string) => string): Answer {
     case 'draw':
       return draw(readAsked(request, readFile), values)
     case 'generate':
-      throw new Refusal('Say what to generate: cantus, solution or faults.')
+      return generate(request, readFile)
   }
 }

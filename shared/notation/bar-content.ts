@@ -20,6 +20,7 @@ import { isStemUp, stemsOf, type Stem } from '@/shared/notation/stems'
 import {
   openTieMark,
   stoppingShortPx,
+  tieBetween,
   tieEnd,
   tieMark,
   tieReachPx,

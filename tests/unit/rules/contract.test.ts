@@ -1,6 +1,7 @@
 import { existsSync } from 'node:fs'
 import { join } from 'node:path'
 import { judgeExample, readExample } from '@/shared/rules/example'
+import { FIFTH_SPECIES_RULES } from '@/shared/rules/fifth-species'
 import { FIRST_SPECIES_RULES } from '@/shared/rules/first-species'
 import { FOURTH_SPECIES_RULES } from '@/shared/rules/fourth-species'
 import { MELODY_RULES } from '@/shared/rules/melody'
@@ -15,6 +16,7 @@ const FOLDERS: readonly (readonly [folder: string, rules: readonly AnyRule[], sp
   ['melody', MELODY_RULES, 0],
   ['first-species', FIRST_SPECIES_RULES, 1],
   ['fourth-species', FOURTH_SPECIES_RULES, 4],
+  ['fifth-species', FIFTH_SPECIES_RULES, 5],
 ]
 const folderOf = (rule: AnyRule): string =>
   FOLDERS.find(([, rules]) => rules.includes(rule))?.[0] ?? 'no folder'
