@@ -37,7 +37,9 @@ export function ComparePage({ me, ids }: Readonly<{ me: Me; ids: readonly [a: st
         <View style={{ flex: isWide ? 1 : undefined }}>
           <RuleSetSelect label={say.compared.second} value={b} onChoose={({ id }) => go(a, id)} />
         </View>
-        <Button label={say.compared.swap} onPress={() => go(b, a)} />
+        <View>
+          <Button label={say.compared.swap} onPress={() => go(b, a)} />
+        </View>
       </View>
       <Asked query={one} lines={6}>
         {({ ruleSet: first }) => (
@@ -55,7 +57,7 @@ function Differences({ sets }: Readonly<{ sets: readonly [RuleSet, RuleSet] }>) 
   const rows = compareRuleSets(...sets)
   if (rows.length === 0) return <Empty title={say.same}>{say.sameMore}</Empty>
   return (
-    <View style={{ gap: space.half }}>
+    <View style={{ gap: space.half, maxWidth: 1240 }}>
       <Txt kind="note" tone="lead" role="status">
         {say.count(rows.length, RULES.length)}
       </Txt>

@@ -23,12 +23,16 @@ function conflictInWords(conflict: Conflict, { ruleSets: { conflicts } }: Words)
   }
 }
 
-/** Whether a rule set can be kept at all, while it is being changed. */
-export function ConflictNotice({ rules }: Readonly<{ rules: RuleSet['rules'] }>) {
+/** What a draft contradicts itself in; a moment behind the draft while it is being changed. */
+export function useConflicts(rules: RuleSet['rules']): readonly Conflict[] {
+  const steady = useDeferredValue(rules)
+  return useMemo(() => findConflicts({ id: 'draft', name: 'draft', rules: steady }), [steady])
+}
+
+/** Whether a rule set can be kept by a class at all. */
+export function ConflictNotice({ conflicts }: Readonly<{ conflicts: readonly Conflict[] }>) {
   const words = useWords()
   const say = words.ruleSets.conflicts
-  const steady = useDeferredValue(rules)
-  const conflicts = useMemo(() => findConflicts({ id: 'draft', name: 'draft', rules: steady }), [steady])
   if (conflicts.length === 0) return <Notice kind="good" title={say.sound} />
   return (
     <Notice kind="note" title={say.title}>

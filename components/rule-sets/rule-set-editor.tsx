@@ -1,10 +1,10 @@
 import { useRouter } from 'expo-router'
-import { useCallback, useMemo, useState } from 'react'
+import { useCallback, useMemo, useState, type ReactNode } from 'react'
 import { View } from 'react-native'
 import { callApi, RefusalNotice, useAct, useMutation } from '@/components/api'
 import { ShareSelect } from '@/components/cantus/share-select'
 import { Frame } from '@/components/session'
-import { space, useWidth } from '@/components/theme'
+import { space, useTheme, useWidth } from '@/components/theme'
 import {
   Button,
   Dialog,
@@ -25,7 +25,7 @@ import type { KeptRuleSet, RuleSetBody } from '@/shared/api/rule-sets'
 import { settingsOf } from '@/shared/rule-sets/rule-set-file'
 import { ruleSetProblems, type Level, type RuleId, type RuleSet, type Species } from '@/shared/rules'
 import { changedRules, tidyRules, withRuleLevel, withRuleParam } from './change-rules'
-import { ConflictNotice } from './conflict-notice'
+import { ConflictNotice, useConflicts } from './conflict-notice'
 import { downloadRuleSet } from './download-rule-set'
 import { RuleList } from './rule-list'
 
@@ -74,6 +74,7 @@ export function RuleSetEditor({
     () => ruleSetProblems({ id: 'draft', name: 'draft', rules }).length > 0,
     [rules],
   )
+  const conflicts = useConflicts(rules)
   const isNameEmpty = name.trim() === ''
 
   const keep = async () => {
@@ -146,25 +147,7 @@ export function RuleSetEditor({
           </View>
         </View>
         <View style={{ maxWidth: LIST_PX }}>
-          <ConflictNotice rules={rules} />
-        </View>
-        <View style={{ maxWidth: LIST_PX, gap: space.small }}>
-          {isKept ? <Notice kind="good" title={say.kept} /> : null}
-          <RefusalNotice refusal={save.refusal} />
-          {hasTried && hasBadParams ? (
-            <Txt kind="note" tone="minium" role="alert">
-              {words.errors.field('bad-params')}
-            </Txt>
-          ) : null}
-          <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: space.one }}>
-            <Button kind="go" label={keptAs ? say.keepChanges : say.keep} isSubmit isBusy={save.isBusy} />
-            <Txt kind="note" tone={changed.length > 0 ? 'verdigris' : 'lead'} role="status">
-              {say.changes(changed.length)}
-            </Txt>
-            {changed.length > 0 ? (
-              <Button kind="quiet" label={say.undo} onPress={() => setRules(before)} />
-            ) : null}
-          </View>
+          <ConflictNotice conflicts={conflicts} />
         </View>
       </Form>
       <View style={{ gap: space.half, maxWidth: LIST_PX }}>
@@ -193,6 +176,42 @@ export function RuleSetEditor({
           onParam={onParam}
         />
       </View>
+      <KeepBar>
+        {isKept ? <Notice kind="good" title={say.kept} /> : null}
+        <RefusalNotice refusal={save.refusal} />
+        {hasTried && hasBadParams ? (
+          <Txt kind="note" tone="minium" role="alert">
+            {words.errors.field('bad-params')}
+          </Txt>
+        ) : null}
+        <View
+          style={{
+            flexDirection: 'row',
+            flexWrap: 'wrap',
+            alignItems: 'center',
+            columnGap: space.one,
+            rowGap: space.tiny,
+          }}
+        >
+          <Button
+            kind="go"
+            label={keptAs ? say.keepChanges : say.keep}
+            isBusy={save.isBusy}
+            onPress={() => void keep()}
+          />
+          {changed.length > 0 ? (
+            <Button kind="quiet" label={say.undo} onPress={() => setRules(before)} />
+          ) : null}
+          <Txt kind="note" tone={changed.length > 0 ? 'verdigris' : 'lead'} role="status">
+            {say.changes(changed.length)}
+          </Txt>
+          {conflicts.length > 0 ? (
+            <Txt kind="note" tone="orpiment" role="status">
+              {`${say.conflicts.title}.`}
+            </Txt>
+          ) : null}
+        </View>
+      </KeepBar>
       <Dialog
         title={say.removeTitle}
         isOpen={isRemoving}
@@ -208,5 +227,27 @@ export function RuleSetEditor({
         <Txt>{say.removeMore}</Txt>
       </Dialog>
     </Frame>
+  )
+}
+
+/** What is to be kept stays in reach at the foot of the window, however long the list of rules. */
+function KeepBar({ children }: Readonly<{ children: ReactNode }>) {
+  const { colors } = useTheme()
+  return (
+    <div
+      style={{
+        position: 'sticky',
+        bottom: 0,
+        display: 'flex',
+        flexDirection: 'column',
+        gap: space.small,
+        padding: `${space.half}px 0`,
+        background: colors.vellum,
+        borderTop: `1px solid ${colors.hairline}`,
+        zIndex: 2,
+      }}
+    >
+      {children}
+    </div>
   )
 }

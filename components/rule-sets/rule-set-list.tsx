@@ -33,7 +33,7 @@ export function RuleSetList({ me }: Readonly<{ me: Me }>) {
         </>
       }
     >
-      <View style={{ gap: space.double }}>
+      <View style={{ gap: space.double, maxWidth: 980 }}>
         <Asked query={query} lines={3}>
           {({ ruleSets }) => {
             const shared = ruleSets.filter(({ isMine }) => !isMine)

@@ -40,7 +40,7 @@ export function RuleSetView({
     >
       <BookAsked lines={8}>
         {(book) => (
-          <View style={{ gap: space.double }}>
+          <View style={{ gap: space.double, maxWidth: 980 }}>
             {bySection(
               Object.values(book).filter(({ id }) => (ruleSet.rules[id]?.level ?? 'off') !== 'off'),
             ).map(({ section, pages }) => (

@@ -35,20 +35,26 @@ export function RuleArticle({ page, widthPx }: Readonly<{ page: RulePage; widthP
         ))}
       </View>
       <VolumeControl />
-      <Part title={say.reason}>
-        <Txt>{page.why}</Txt>
-      </Part>
-      <Part title={say.mends}>
-        <Txt>{page.mends}</Txt>
-      </Part>
-      {page.disagreement ? (
-        <Part title={say.disagreement}>
-          <Txt>{page.disagreement}</Txt>
-        </Part>
-      ) : null}
-      {rule ? <Params rule={rule} /> : null}
-      {rule ? <InPresets rule={rule} /> : null}
-      <Sources page={page} />
+      <View style={{ flexDirection: isPaired ? 'row' : 'column', gap: isPaired ? space.double : space.wide }}>
+        <View style={{ width: examplePx, gap: space.wide }}>
+          <Part title={say.reason}>
+            <Txt>{page.why}</Txt>
+          </Part>
+          <Part title={say.mends}>
+            <Txt>{page.mends}</Txt>
+          </Part>
+          {page.disagreement ? (
+            <Part title={say.disagreement}>
+              <Txt>{page.disagreement}</Txt>
+            </Part>
+          ) : null}
+          <Sources page={page} />
+        </View>
+        <View style={{ width: examplePx, gap: space.wide }}>
+          {rule ? <Params rule={rule} /> : null}
+          {rule ? <InPresets rule={rule} /> : null}
+        </View>
+      </View>
     </View>
   )
 }

@@ -8,20 +8,22 @@ import { sectionOf } from './sections'
 
 /** The page of one rule, for anybody. */
 export function RulePageScreen({ ruleId }: Readonly<{ ruleId: string }>) {
-  const say = useWords().rules
+  const words = useWords()
+  const say = words.rules
   const { me } = useSession()
   const { contentPx } = usePageMeasure()
   const rule = findRule(ruleId)
+  const section = rule && sectionOf({ scope: rule.scope, species: [...rule.species] })
+  const place =
+    rule && section === 'several-species'
+      ? say.inSpecies([...rule.species].map((species) => words.lesson.species[species]))
+      : section && say.section[section]
   return (
     <Frame
       me={me && !me.isGuest ? me : null}
       title={rule?.explain.title ?? say.title}
       up={{ href: '/rules', label: say.up }}
-      lede={
-        rule ? (
-          <Txt tone="lead">{say.section[sectionOf({ scope: rule.scope, species: [...rule.species] })]}</Txt>
-        ) : undefined
-      }
+      lede={place ? <Txt tone="lead">{place}</Txt> : undefined}
     >
       {rule ? (
         <BookAsked lines={8}>

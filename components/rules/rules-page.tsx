@@ -25,7 +25,7 @@ function Book({ book }: Readonly<{ book: RuleBook }>) {
   const all = Object.values(book)
   const found = searchPages(useDeferredValue(search), all)
   return (
-    <View style={{ gap: space.wide }}>
+    <View style={{ gap: space.wide, maxWidth: 980 }}>
       <View style={{ gap: space.small, maxWidth: 420 }}>
         <Field kind="search" label={say.search} value={search} maxLength={100} onChangeText={setSearch} />
         <Txt kind="note" tone="lead" role="status">

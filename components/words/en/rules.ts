@@ -1,3 +1,5 @@
+import { formatList } from '../format'
+
 /** The rule book. */
 export const rules = {
   title: 'The rules',
@@ -18,10 +20,9 @@ export const rules = {
     5: 'Fifth species: florid',
     'several-species': 'In several species',
   },
-  contents: 'Sections',
+  inSpecies: (names: readonly string[]) => `In ${formatList(names)}`,
   why: 'Why?',
   whySpoken: (title: string) => `Why? ${title}`,
-  whyTitle: 'Why this is a rule',
   onItsPage: 'Open its page in another tab',
   failed: 'The rule book did not come.',
   failedMore: 'Check the connection and try again.',

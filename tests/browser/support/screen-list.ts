@@ -2,6 +2,9 @@ import type { BrowserContext } from 'playwright-core'
 import { cantus } from '@/shared/api/cantus'
 import { courses } from '@/shared/api/courses'
 import { lessons } from '@/shared/api/lessons'
+import { ruleSets } from '@/shared/api/rule-sets'
+import { settingsOf } from '@/shared/rule-sets/rule-set-file'
+import { findPreset } from '@/shared/rules'
 import { ask } from './ask'
 
 /** Every screen of the product, with whose eyes it is looked at. `null`: nobody is signed in. */
@@ -20,6 +23,14 @@ export async function listScreens(
   const { courses: own } = await ask(teacher.request, origin, courses.list)
   const courseId = own.find(({ myRole }) => myRole === 'teacher')?.id ?? ''
   const { cantus: library } = await ask(teacher.request, origin, cantus.list)
+  const starter = findPreset('starter')?.rules ?? {}
+  const { ruleSet } = await ask(teacher.request, origin, ruleSets.create, {
+    body: {
+      name: 'The first term',
+      basedOn: 'starter',
+      rules: settingsOf({ ...starter, 'voice-overlap': { level: 'law' } }),
+    },
+  })
   const link = await ask(teacher.request, origin, courses.createLink, {
     params: { courseId },
     body: { role: 'student' },
@@ -44,6 +55,14 @@ export async function listScreens(
     { name: 'cantus-library', who: 'teacher', path: '/cantus' },
     { name: 'cantus-new', who: 'teacher', path: '/cantus/new' },
     { name: 'cantus', who: 'teacher', path: `/cantus/${library[0]?.id}` },
+    { name: 'rules', who: null, path: '/rules' },
+    { name: 'rule', who: null, path: '/rules/dir-perfect' },
+    { name: 'rule-unknown', who: null, path: '/rules/no-such-rule' },
+    { name: 'rule-sets', who: 'teacher', path: '/rule-sets' },
+    { name: 'rule-set', who: 'teacher', path: `/rule-sets/${ruleSet.id}` },
+    { name: 'rule-set-offered', who: 'teacher', path: '/rule-sets/fux-mann' },
+    { name: 'rule-set-new', who: 'teacher', path: '/rule-sets/new?from=starter' },
+    { name: 'rule-sets-compared', who: 'teacher', path: `/rule-sets/compare?a=${ruleSet.id}&b=starter` },
     { name: 'lectern', who: 'teacher', path: `/lessons/${lessonId}/lectern` },
     { name: 'desk', who: 'student', path: `/lessons/${lessonId}/desk` },
     { name: 'refused', who: 'student', path: `/lessons/${lessonId}/lectern` },
