@@ -109,7 +109,7 @@ export default tseslint.config(
         'error',
         {
           selector:
-            'MemberExpression[object.property.name="explain"][property.name=/^(why|sources|right|wrong|disagreement)$/]',
+            'MemberExpression[object.property.name="explain"][property.name=/^(statement|why|sources|right|wrong|disagreement)$/]',
           message: 'Not in browsers: read it from the rule book, by useRuleBook.',
         },
       ],

@@ -1,12 +1,21 @@
+const { createHash } = require('node:crypto')
+const fs = require('node:fs')
 const path = require('node:path')
 const { getDefaultConfig } = require('expo/metro-config')
 const { isLeftOut } = require('./bundling/left-out')
 const { makeModulesBeforehand } = require('./bundling/made-beforehand')
 const { shakePackages } = require('./bundling/shaken')
 
+/** What files are turned into depends on these, which the bundler's cache does not know of. */
+const hashOfPlugins = () =>
+  ['babel.config.js', 'bundling/plain-rules.js']
+    .reduce((hash, file) => hash.update(fs.readFileSync(path.join(__dirname, file))), createHash('sha256'))
+    .digest('hex')
+
 module.exports = async () => {
   const [shaken, made] = await Promise.all([shakePackages(), makeModulesBeforehand()])
   const config = getDefaultConfig(__dirname)
+  config.cacheVersion = hashOfPlugins()
   const { resolveRequest } = config.resolver
   config.resolver.resolveRequest = (context, moduleName, platform) => {
     const resolve = resolveRequest ?? context.resolveRequest

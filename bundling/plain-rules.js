@@ -3,7 +3,7 @@
  * judges notes and says what mends them; examples, sources and reasons are a chunk of their own, the rule book, which is
  * made of the whole registry (`made-beforehand.js`) and asked for by `useRuleBook`.
  */
-const LIFTED = new Set(['why', 'sources', 'right', 'wrong', 'disagreement'])
+const LIFTED = new Set(['statement', 'why', 'sources', 'right', 'wrong', 'disagreement'])
 const RULE_FILE = /[\\/]shared[\\/]rules[\\/].+\.ts$/
 
 const nameOf = ({ node }) =>
