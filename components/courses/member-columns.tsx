@@ -72,7 +72,6 @@ export function memberColumns({
       label: words.act,
       onPhone: 'foot',
       width: '110px',
-      align: 'right',
       cell: (member) =>
         member.userId === myId ? null : (
           <Button

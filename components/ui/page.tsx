@@ -4,6 +4,7 @@ import { MEASURE_PX, space, useWidth } from '@/components/theme'
 import { Heading } from './heading'
 import { LinkText } from './link-text'
 import { Txt } from './txt'
+import { StaffFoot } from './staff-foot'
 import { useArrival } from './use-arrival'
 import { usePageMeasure, WIDEST_PX } from './use-page-measure'
 import { useTitle } from './use-title'
@@ -103,6 +104,7 @@ export function Page({
         </View>
       </View>
       {children}
+      {width === 'text' && isWide ? <StaffFoot /> : null}
     </View>
   )
 }

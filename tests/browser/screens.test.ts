@@ -8,7 +8,7 @@ import { openLesson } from './support/prepare-lesson'
 import { openSchool, type School } from './support/school'
 import { listScreens, type Screen } from './support/screen-list'
 import { GROUNDS, openDevice } from './support/screens'
-import { settled } from './support/settled'
+import { inked, settled } from './support/settled'
 import { findPerson, signIn } from './support/sign-in'
 
 jest.setTimeout(120_000)
@@ -83,6 +83,7 @@ test('no screen has a barrier that axe-core finds, on either ground', async () =
     const found: string[] = []
     for (const ground of GROUNDS) {
       await page.emulateMedia({ colorScheme: ground })
+      await inked(page)
       found.push(...(await findBarriers(page)).map((barrier) => `${screen.name}, ${ground}: ${barrier}`))
     }
     return found
