@@ -12,6 +12,7 @@ import {
 import path from 'node:path'
 import { promisify } from 'node:util'
 import { brotliCompress, constants, gzip } from 'node:zlib'
+import { loadAhead } from './load-ahead.mjs'
 import { partCommon } from './part-common.mjs'
 import { runProgram } from './run-program.mjs'
 
@@ -81,6 +82,7 @@ export async function buildWeb() {
       env: { CI: '1', EXPO_NO_TELEMETRY: '1', NODE_ENV: 'production' },
     })
     partCommon(made)
+    loadAhead(made)
     await compressAll(made)
     writeFileSync(path.join(made, '.stamp'), stamp)
     if (existsSync(OUTPUT)) renameSync(OUTPUT, old)
