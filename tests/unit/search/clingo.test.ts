@@ -60,11 +60,13 @@ const readModel = (atoms: readonly string[]): string =>
 
 const describeHere = isThere ? describe : describe.skip
 describeHere(`core-1, Fux's canti firmi and 24 more from seed ${SEED}`, () => {
+  const counts: number[] = []
   test.each(CASES.map((given) => ({ ...given, name: given.cantus.join(' ') })))(
     '$position $name: the same solutions and alive notes',
     (given) => {
       const { cantus, mode, final, position, lo, hi } = given
       const { count, models } = runClingo('core-1', given)
+      counts.push(count)
       const exercise = exerciseOf(cantus.join(' '), mode, final, position)
       const ways = createSearch(exercise, createCore1({ lowest: lo, highest: hi })).find()
       const lines = models.map(readModel)
@@ -87,7 +89,6 @@ describeHere(`core-1, Fux's canti firmi and 24 more from seed ${SEED}`, () => {
   )
 
   test('the cases have solutions to find, and some have none', () => {
-    const counts = CASES.map((given) => runClingo('core-1', given, 'count').count)
     expect(counts.filter((count) => count > 0).length).toBeGreaterThan(12)
     expect(counts.filter((count) => count === 0).length).toBeGreaterThan(0)
   })

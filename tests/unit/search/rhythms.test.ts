@@ -97,7 +97,7 @@ function change(line: Line, dice: (count: number) => number, pitches: readonly P
   const notes = line[bar] as BarNotes
   const at = dice(notes.length)
   const { pitch, ticks } = notes[at] as Note
-  const changed = notes.map((note, index) =>
+  const changed = notes.map((note, index): Note =>
     index === at ? { pitch: pitches[dice(pitches.length)] as string, ticks } : note,
   )
   return pitch === null || changed.some(({ tied }) => tied) ? line : { ...line, [bar]: changed }
