@@ -78,6 +78,19 @@ test('below, with another compass, 55', () => {
   expect(json('count', ...below, DORIAN).count).toBe('55')
 })
 
+test('second species by core-2, with rests, wholes and beats in the alive notes', () => {
+  const core2 = ['--species', '2', '--rules', 'core-2', '--low', 'D4', '--high', 'D6']
+  const { count, alive } = json('count', ...core2, DORIAN)
+  expect(count).toBe('51164')
+  expect(alive[0]).toMatchObject({ bar: 1, beat: 1, notes: { R: '13439' } })
+  expect(alive[1]).toMatchObject({ bar: 1, beat: 3 })
+  // Bar 10 is a whole note or two halves: what does not begin a second half is a whole.
+  const second = alive.find(({ bar, beat }: { bar: number; beat: number }) => bar === 10 && beat === 3)
+  const sum = Object.values<string>(second.notes).reduce((total, ways) => total + BigInt(ways), 0n)
+  expect(sum).toBe(51164n)
+  expect(second.notes['-']).toBeDefined()
+})
+
 test('notes may be given as words of their own, and the cantus as an option', () => {
   expect(json('count', ...CORE_1, ...DORIAN.split(' ')).count).toBe('118')
   expect(json('count', ...CORE_1, '--cantus', DORIAN).count).toBe('118')
