@@ -1,10 +1,13 @@
 import { View } from 'react-native'
+import { rhythmChoices } from '@/components/ladder/bar-draft'
 import { Ladder } from '@/components/ladder/ladder'
+import { RhythmRow } from '@/components/ladder/rhythm-row'
 import { firstPitch } from '@/components/lesson/spoken'
 import { space, TOUCH_TARGET_PX, useTheme } from '@/components/theme'
 import { Button, Txt } from '@/components/ui'
 import { useRungWays } from '@/components/ways/use-rung-ways'
 import { useWords } from '@/components/words'
+import { pitchOf } from '@/shared/theory/pitch'
 import { ClosedBar } from './closed-bar'
 import type { DeskModel } from './use-desk'
 
@@ -43,7 +46,7 @@ export function DeskLadder({
               kind="quiet"
               label={words.desk.ladder.eraseShort}
               hint={words.desk.ladder.erase}
-              isDisabled={ladder.chosen === null}
+              isDisabled={ladder.chosen === null && !model.draft?.pitches.some((pitch) => pitch !== null)}
               onPress={model.erase}
             />
           </View>
@@ -73,6 +76,15 @@ export function DeskLadder({
             onPress={() => model.offerAgain(hand, earlier)}
           />
         </View>
+      ) : null}
+      {ladder && model.draft ? (
+        <RhythmRow
+          draft={model.draft}
+          choices={rhythmChoices(view.exercise.species, hand, view.barCount)}
+          names={model.draft.pitches.map((name) => (name ? words.lesson.pitchPrinted(pitchOf(name)) : null))}
+          onRhythm={model.chooseRhythm}
+          onPlace={model.choosePlace}
+        />
       ) : null}
       {ladder ? (
         <Ladder

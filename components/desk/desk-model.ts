@@ -14,14 +14,23 @@ export type DeskReading = Readonly<{
   findings: readonly Finding[] | null
 }>
 
-export function readDesk(view: LessonView, sheet: SheetState, judge: Judge): DeskReading {
+/** `unfinished` is what of a bar is written on this device only, to the first gap. */
+export function readDesk(
+  view: LessonView,
+  sheet: SheetState,
+  judge: Judge,
+  unfinished: Line = {},
+): DeskReading {
   const bars = view.exercise.cantus.map((_, index): DeskBar => {
     const number = index + 1
     const state = view.bars[number] ?? { state: 'frozen', setAside: false, round: 1 }
     return readDeskBar(number, state, view.line[number] ?? null, sheet.notes[number] ?? null)
   })
   const own: Record<number, BarNotes> = {}
-  for (const bar of bars) if (bar.kind === 'open' && bar.notes) own[bar.number] = bar.notes
+  for (const bar of bars) {
+    const notes = bar.kind === 'open' ? (bar.notes ?? unfinished[bar.number]) : undefined
+    if (notes) own[bar.number] = notes
+  }
   return { bars, own, findings: view.stage.showsFindings ? judge.ofNotes(own) : null }
 }
 

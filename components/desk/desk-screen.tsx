@@ -1,5 +1,5 @@
 import { Redirect, type Href } from 'expo-router'
-import { useCallback, useEffect, useMemo, useState } from 'react'
+import { useCallback, useMemo, useState } from 'react'
 import { BoardDoor, ClosedDoor, EntryDoor } from '@/components/lesson/lesson-door'
 import { useEntry } from '@/components/lesson/use-entry'
 import { useLessonRoom } from '@/components/lesson/use-lesson-room'
@@ -25,7 +25,7 @@ export function DeskScreen({ lessonId }: Readonly<{ lessonId: string }>) {
     }),
     [sheetDoc],
   )
-  const hand = useHand(room.send, view.presence.hands)
+  const hand = useHand(room.send, view.isHandUp)
 
   if (!entry) return <EntryDoor state={state} onRetry={reload} />
   const { lesson, role } = entry
@@ -57,24 +57,14 @@ export function DeskScreen({ lessonId }: Readonly<{ lessonId: string }>) {
   )
 }
 
-/** One's own hand. When no hand is up in the room any more, the teacher has lowered it. */
-function useHand(send: ReturnType<typeof useLessonRoom>['room']['send'], hands: number) {
-  const [isUp, setUp] = useState(false)
-  const [wasSeen, setSeen] = useState(false)
-  useEffect(() => {
-    if (isUp && hands > 0) setSeen(true)
-    if (isUp && wasSeen && hands === 0) {
-      setUp(false)
-      setSeen(false)
-    }
-  }, [isUp, wasSeen, hands])
+/** One's own hand: as the server has it, and as it was just turned until the server has answered. */
+function useHand(send: ReturnType<typeof useLessonRoom>['room']['send'], isHandUp: boolean) {
+  const [turned, setTurned] = useState<boolean | null>(null)
+  const isUp = turned ?? isHandUp
   const turn = useCallback(() => {
-    const next = !isUp
-    setUp(next)
-    setSeen(false)
-    void send('hand', { up: next }).then((reply) => {
-      if (!reply.ok) setUp(!next)
-    })
+    setTurned(!isUp)
+    // The server tells the hand before it answers; refused or out of touch, it is as it was.
+    void send('hand', { up: !isUp }).then(() => setTurned(null))
   }, [isUp, send])
   return { isUp, turn }
 }

@@ -10,6 +10,7 @@ import type { Words } from '@/components/words'
 import type { Finding } from '@/shared/rules'
 import { WHOLE_TICKS } from '@/shared/theory/duration'
 import type { BarNotes, Line } from '@/shared/theory/note'
+import { motionBetween } from '@/shared/theory/motion'
 import { comparePitches, formatPitch, type Pitch } from '@/shared/theory/pitch'
 import { alterationInMode, degreeOf } from '@/shared/theory/scale'
 
@@ -42,20 +43,27 @@ export type LadderQuestion = Readonly<{
   naming: Naming
   /** Whether findings may be told. */
   isTold: boolean
+  /** The bar with a pitch at the value in hand, and the pitch before it in the bar; left out where the bar is one whole note. */
+  inHand?: Readonly<{ notesWith: (pitch: Pitch) => BarNotes; before: Pitch | null }> | undefined
 }>
 
 /** Every rung for a bar: what the pitch would be against the cantus, how it is come to, and what the rules say. */
 export function readRungs(
-  { view, elsewhere, bar, pitches, judge, naming, isTold }: LadderQuestion,
+  { view, elsewhere, bar, pitches, judge, naming, isTold, inHand }: LadderQuestion,
   words: Words,
 ): readonly LadderRung[] {
   const cantus = view.exercise.cantus[bar - 1] as Pitch
   const read = lineWith(view.line, elsewhere)
-  const tries = pitches.map((pitch): Line => ({ ...elsewhere, [bar]: wholeNote(pitch) }))
+  const tries = pitches.map((pitch): Line => ({
+    ...elsewhere,
+    [bar]: inHand?.notesWith(pitch) ?? wholeNote(pitch),
+  }))
   if (isTold) judge.ofAll(tries)
   return pitches.map((pitch, index): LadderRung => {
     const tried = tries[index] as Line
-    const motion = motionInto(view.exercise, read, view.setAside, bar, pitch)
+    const motion = inHand?.before
+      ? motionBetween(cantus, cantus, inHand.before, pitch)
+      : motionInto(view.exercise, read, view.setAside, bar, pitch)
     const findings = isTold
       ? judge.ofNotes(tried).filter((finding) => completedAt(finding, tried) === bar)
       : null
@@ -88,11 +96,13 @@ export function placeOnLadder(
   own: Line,
   bar: number,
   pitches: readonly Pitch[],
+  inHand?: Readonly<{ written: Pitch | null; before: Pitch | null }>,
 ): LadderPlaces {
-  const written = firstPitch(own[bar])
+  const written = inHand ? inHand.written : firstPitch(own[bar])
   const chosen = written ? pitches.findIndex((pitch) => comparePitches(pitch, written) === 0) : -1
   const before = barReadBefore(bar, view.setAside)
-  const near = written ?? firstPitch(before === null ? null : (own[before] ?? view.line[before]))
+  const near =
+    written ?? inHand?.before ?? firstPitch(before === null ? null : (own[before] ?? view.line[before]))
   return {
     chosen: chosen < 0 ? null : chosen,
     home: homeRung(pitches, near, view.exercise.cantus[bar - 1] as Pitch, view.exercise.position),

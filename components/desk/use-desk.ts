@@ -1,4 +1,13 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
+import {
+  eraseInDraft,
+  isComplete,
+  notesOfDraft,
+  withRhythm,
+  writeInDraft,
+  type BarDraft,
+  type RhythmChoice,
+} from '@/components/ladder/bar-draft'
 import { ladderPitches, rungOfLetter } from '@/components/ladder/rungs'
 import { nextReadBar } from '@/components/lesson/desk-bars'
 import { identityOfLine, lineWithout } from '@/components/lesson/line-with'
@@ -9,8 +18,16 @@ import { useLessonView } from '@/components/lesson/use-lesson-view'
 import { useWords } from '@/components/words'
 import type { BoardState, SheetState } from '@/shared/board'
 import type { BarNotes, Line } from '@/shared/theory/note'
-import { comparePitches, parsePitch, type PitchName } from '@/shared/theory/pitch'
+import {
+  comparePitches,
+  formatPitch,
+  parsePitch,
+  pitchOf,
+  type Pitch,
+  type PitchName,
+} from '@/shared/theory/pitch'
 import { barInHand, readDesk } from './desk-model'
+import { useBarDrafts } from './use-bar-drafts'
 import { placeOnLadder, readRungs, wholeNote, type Naming } from './ladder-model'
 
 /** How the desk writes on the student's own sheet. */
@@ -29,7 +46,8 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
   const [naming, setNaming] = useState<Naming>('letters')
   const [isChromatic, setChromatic] = useState(false)
 
-  const desk = useMemo(() => readDesk(view, sheet, judge), [view, sheet, judge])
+  const { unfinished, draftAt, keep } = useBarDrafts(view)
+  const desk = useMemo(() => readDesk(view, sheet, judge, unfinished), [view, sheet, judge, unfinished])
   const hand = barInHand(desk.bars, chosen)
   const bar = desk.bars[hand - 1]
 
@@ -50,40 +68,68 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     [view, desk, hand],
   )
 
-  const written = firstPitch(desk.own[hand])
+  // From the second species on a bar is written note by note.
+  const isMeasured = view.exercise.species > 1
+  const isOpen = bar?.kind === 'open'
+  const draft = useMemo(
+    () => (isMeasured && isOpen ? draftAt(hand, bar, desk.own) : null),
+    [isMeasured, isOpen, draftAt, hand, bar, desk.own],
+  )
+  const inHand = useMemo(() => draft && pitchesInHand(draft), [draft])
+  const written = inHand ? inHand.written : firstPitch(desk.own[hand])
   const pitches = useMemo(() => {
     const ladder = ladderPitches(view.exercise, isChromatic)
     // A note written on the staff, or with accidentals, keeps its rung.
     const isMissing = written && !ladder.some((pitch) => comparePitches(pitch, written) === 0)
     return isMissing ? [...ladder, written].sort((a, b) => comparePitches(b, a)) : ladder
   }, [view.exercise, isChromatic, written])
-  const isOpen = bar?.kind === 'open'
   const { isTold, elsewhere } = useSteady(view, desk.own, hand)
   const rungs = useMemo(
-    () => (isOpen ? readRungs({ view, elsewhere, bar: hand, pitches, judge, naming, isTold }, words) : null),
-    [isOpen, view, elsewhere, hand, pitches, judge, naming, isTold, words],
+    () =>
+      isOpen
+        ? readRungs(
+            { view, elsewhere, bar: hand, pitches, judge, naming, isTold, inHand: inHand ?? undefined },
+            words,
+          )
+        : null,
+    [isOpen, view, elsewhere, hand, pitches, judge, naming, isTold, inHand, words],
   )
-  const places = useMemo(() => placeOnLadder(view, desk.own, hand, pitches), [view, desk.own, hand, pitches])
+  const places = useMemo(
+    () => placeOnLadder(view, desk.own, hand, pitches, inHand ?? undefined),
+    [view, desk.own, hand, pitches, inHand],
+  )
   const ladder = useMemo(() => rungs && { rungs, ...places }, [rungs, places])
 
+  /** A bar goes to the sheet when it is whole, and comes off it when it no longer is. */
+  const putDraft = useCallback(
+    (at: number, next: BarDraft) => {
+      const state = view.bars[at]
+      if (!state) return
+      keep(at, next)
+      if (isComplete(next)) pen.write(at, notesOfDraft(next), state.round)
+      else if (sheet.notes[at]) pen.erase(at)
+    },
+    [view, keep, pen, sheet],
+  )
   const propose = useCallback(
     (at: number, name: PitchName) => {
       const pitch = parsePitch(name)
       const state = view.bars[at]
-      if (pitch.ok && state) pen.write(at, wholeNote(pitch.value), state.round)
+      if (!pitch.ok || !state) return
+      if (isMeasured) putDraft(at, writeInDraft(draftAt(at, desk.bars[at - 1], desk.own), name))
+      else pen.write(at, wholeNote(pitch.value), state.round)
     },
-    [view, pen],
+    [view, isMeasured, putDraft, draftAt, desk, pen],
   )
   const proposeRung = useCallback(
     (index: number) => {
       const pitch = pitches[index]
-      const state = view.bars[hand]
-      if (!pitch || !state) return
+      if (!pitch) return
       // A bar that was written in stays in hand when it freezes, or the desk would leave it for the first bar.
       setChosen(hand)
-      pen.write(hand, wholeNote(pitch), state.round)
+      propose(hand, formatPitch(pitch))
     },
-    [pitches, view, hand, pen],
+    [pitches, hand, propose],
   )
   const offerAgain = useCallback(
     (at: number, notes: BarNotes) => {
@@ -92,7 +138,22 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     },
     [view, pen],
   )
-  const erase = useCallback(() => pen.erase(hand), [pen, hand])
+  const erase = useCallback(() => {
+    if (draft) putDraft(hand, eraseInDraft(draft))
+    else pen.erase(hand)
+  }, [draft, putDraft, pen, hand])
+  const chooseRhythm = useCallback(
+    (rhythm: RhythmChoice) => {
+      if (draft) putDraft(hand, withRhythm(draft, rhythm))
+    },
+    [draft, putDraft, hand],
+  )
+  const choosePlace = useCallback(
+    (place: number) => {
+      if (draft) keep(hand, { ...draft, place })
+    },
+    [draft, keep, hand],
+  )
   const step = useCallback(
     (by: 1 | -1) => {
       const next = nextReadBar(latest.current.bars, hand, by)
@@ -118,6 +179,9 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     after: nextReadBar(desk.bars, hand, 1),
     pitches,
     ladder,
+    draft,
+    chooseRhythm,
+    choosePlace,
     letterRung,
     propose,
     proposeRung,
@@ -127,6 +191,16 @@ export function useDesk(board: BoardState, sheet: SheetState, pen: SheetPen) {
     setNaming,
     isChromatic,
     setChromatic,
+  }
+}
+
+/** The value in hand as the ladder sees it: what stands there, what stands before it in the bar, and the bar with another pitch. */
+function pitchesInHand(draft: BarDraft) {
+  const named = (name: PitchName | null | undefined): Pitch | null => (name ? pitchOf(name) : null)
+  return {
+    written: named(draft.pitches[draft.place]),
+    before: named(draft.pitches.slice(0, draft.place).findLast((pitch) => pitch !== null)),
+    notesWith: (pitch: Pitch): BarNotes => notesOfDraft(writeInDraft(draft, formatPitch(pitch))),
   }
 }
 

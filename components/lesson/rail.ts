@@ -1,5 +1,6 @@
 import type { BarMotion } from '@/shared/notation/score-input'
 import type { Exercise } from '@/shared/rules'
+import { QUARTER_TICKS } from '@/shared/theory/duration'
 import { figureOf, intervalBetween, type Interval } from '@/shared/theory/interval'
 import { motionBetween } from '@/shared/theory/motion'
 import type { BarNotes, Line } from '@/shared/theory/note'
@@ -11,6 +12,8 @@ export type RailEntry = Readonly<{
   figure: string | null
   /** Into this bar from the one read before it, across bars set aside. */
   motion: BarMotion | null
+  /** Figures of what is struck later in the bar, by its place in ticks. */
+  later: readonly Readonly<{ tick: number; text: string }>[]
 }>
 
 const pitchAt = (notes: BarNotes | undefined, place: 'first' | 'last'): Pitch | null => {
@@ -31,9 +34,23 @@ export function railOf(exercise: Exercise, line: Line, setAside: ReadonlySet<num
   return exercise.cantus.map((cantus, index) => {
     const bar = index + 1
     const note = setAside.has(bar) ? null : pitchAt(line[bar], 'first')
-    if (!note) return { interval: null, figure: null, motion: null }
+    const later = setAside.has(bar) ? [] : laterFigures(cantus, line[bar] ?? [])
+    if (!note) return { interval: null, figure: null, motion: null, later }
     const interval = intervalBetween(cantus, note)
-    return { interval, figure: figureOf(interval), motion: motionInto(exercise, line, setAside, bar, note) }
+    const motion = motionInto(exercise, line, setAside, bar, note)
+    return { interval, figure: figureOf(interval), motion, later }
+  })
+}
+
+/** A figure for every note after the first; eighth notes are too quick for one of their own. */
+function laterFigures(cantus: Pitch, notes: BarNotes): RailEntry['later'] {
+  let tick = 0
+  return notes.flatMap(({ pitch, ticks }) => {
+    const at = tick
+    tick += ticks
+    if (at === 0 || pitch === null || ticks < QUARTER_TICKS) return []
+    const parsed = parsePitch(pitch)
+    return parsed.ok ? [{ tick: at, text: figureOf(intervalBetween(cantus, parsed.value)) }] : []
   })
 }
 

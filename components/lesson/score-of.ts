@@ -18,6 +18,13 @@ const NO_MARKS: readonly ProposalMark[] = []
 
 const toneOf = (level: Finding['level']): 'breach' | 'remark' => (level === 'law' ? 'breach' : 'remark')
 
+/** From the second species on values are told apart, and a solid lozenge is a short note. */
+const isMeasured = (view: LessonView): boolean => view.exercise.species > 1
+
+/** What is bowed over: where a solid lozenge cannot tell of a breach, findings of a single bar have a mark of their own. */
+const told = (view: LessonView, findings: readonly Finding[]): readonly Finding[] =>
+  isMeasured(view) ? findings : spanning(findings)
+
 /** Findings of two bars or more: on a proposal, a finding of its own bar is told by the lozenge itself. */
 const spanning = (findings: readonly Finding[]): readonly Finding[] =>
   findings.filter(({ bars }) => bars.length > 1)
@@ -36,15 +43,19 @@ export function arcsOf(findings: readonly Finding[]): readonly ScoreArc[] {
   return [...arcs.values()]
 }
 
+const isOneBar = ({ bars }: Finding): boolean => bars.length === 1
+
 const overlaps = (a: Finding, b: Finding): boolean =>
-  (a.bars[0] ?? 0) < (b.bars.at(-1) ?? 0) && (b.bars[0] ?? 0) < (a.bars.at(-1) ?? 0)
+  isOneBar(a) || isOneBar(b)
+    ? (a.bars[0] ?? 0) <= (b.bars.at(-1) ?? 0) && (b.bars[0] ?? 0) <= (a.bars.at(-1) ?? 0)
+    : (a.bars[0] ?? 0) < (b.bars.at(-1) ?? 0) && (b.bars[0] ?? 0) < (a.bars.at(-1) ?? 0)
 
 /**
  * As many findings as fit on one level of arcs, those of the bar in hand first, then breaches. A strip that grew with every
  * arc would push the rungs from under the finger.
  */
 export function oneLevel(findings: readonly Finding[], hand: number): readonly Finding[] {
-  const ranked = [...spanning(findings)].sort(
+  const ranked = [...findings].sort(
     (a, b) =>
       Number(b.bars.includes(hand)) - Number(a.bars.includes(hand)) ||
       Number(b.level === 'law') - Number(a.level === 'law'),
@@ -93,6 +104,7 @@ function compose(view: LessonView, { read, proposalsOf, findings, arcs }: Layers
       line: view.line[number] ?? null,
       proposals: isSetAside ? NO_MARKS : proposalsOf(number),
       figure: entry?.figure ? { text: entry.figure, tone: tones.get(number) ?? 'cantus' } : null,
+      laterFigures: entry?.later.map((figure) => ({ ...figure, tone: 'cantus' as const })) ?? [],
       motion: entry?.motion ?? null,
       label: null,
     }
@@ -104,6 +116,7 @@ function compose(view: LessonView, { read, proposalsOf, findings, arcs }: Layers
     bars,
     arcs: arcsOf(arcs),
     brackets: bracketsOf(view),
+    isMeasured: isMeasured(view),
   }
 }
 
@@ -124,7 +137,7 @@ export function roomScoreOf(
     read: view.line,
     proposalsOf: (bar) => byBar.get(bar) ?? NO_MARKS,
     findings,
-    arcs: [...spanning(arcs.ofRoom), ...arcs.ofLine],
+    arcs: [...told(view, arcs.ofRoom), ...arcs.ofLine],
   })
 }
 
@@ -145,7 +158,7 @@ export function deskScoreOf(
       return [{ notes, count: null, tone: tone === 'breach' || tone === 'remark' ? tone : 'line' }]
     },
     findings,
-    arcs: oneLevel(findings, hand),
+    arcs: oneLevel(told(view, findings), hand),
   })
 }
 
@@ -181,5 +194,6 @@ export function miniScoreOf(view: LessonView, notes: Line, findings: readonly Fi
     }),
     arcs: [],
     brackets: [],
+    isMeasured: isMeasured(view),
   }
 }

@@ -206,6 +206,7 @@ export class LiveRoom {
       const presence = { here, hands, members: members ?? null }
       this.#change({ presence: shareParts(this.#view.presence, presence) })
     })
+    channel.on('ownHand', ({ up }) => this.#change({ isHandUp: up }))
     channel.on('kept', ({ room, clocks }) => {
       this.#clocks.get(room)?.acknowledge(clocks)
       if (this.docs.sheet) this.#holdDrafts(this.docs.sheet)

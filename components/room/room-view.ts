@@ -13,6 +13,8 @@ export type RoomView = Readonly<{
   /** Empty for those who may not see it. */
   chorus: ChorusState
   presence: Readonly<{ here: number; hands: number; members: readonly PresentMember[] | null }>
+  /** Whether one's own hand is up, as the server has it: a teacher may lower it. */
+  isHandUp: boolean
   /** `connecting`: never been in. `offline`: was in, and is trying to come back. `closed`: will not come back by itself. */
   connection: 'connecting' | 'live' | 'offline' | 'closed'
   closedBecause: ClosedReason | null
@@ -27,6 +29,7 @@ export const EMPTY_VIEW: RoomView = {
   sheet: { notes: {}, marks: [] },
   chorus: {},
   presence: { here: 0, hands: 0, members: null },
+  isHandUp: false,
   connection: 'connecting',
   closedBecause: null,
   kept: 'kept',

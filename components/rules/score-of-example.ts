@@ -51,6 +51,15 @@ const isInWholes = (example: ReadExample): boolean =>
   barsOf(example).every((bar) => (example.cantusLine[bar]?.length ?? 0) === 1)
 
 /**
+ * An example of three voices as two of two: each added line over the same cantus, as a score of two staves can show it.
+ * An example of two voices is itself.
+ */
+export const pairsOfExample = (example: ReadExample): readonly ReadExample[] =>
+  Object.keys(example.second).length === 0
+    ? [example]
+    : [example, { ...example, line: example.second, second: {} }]
+
+/**
  * A rule's small example as a score, what the rule says of it inked in. A level of `off` inks nothing; without a line the
  * cantus stands alone.
  */

@@ -2,7 +2,7 @@ import type { RulePage } from '@/shared/rules/rule-book'
 import type { Species } from '@/shared/rules'
 
 /** A chapter of the rule book: what a rule judges, and in which species. */
-export type Section = 'cantus' | 'melody' | 'every-species' | 'several-species' | Species
+export type Section = 'cantus' | 'melody' | 'every-species' | 'several-species' | 'three-voices' | Species
 
 export const SECTIONS: readonly Section[] = [
   'cantus',
@@ -14,6 +14,7 @@ export const SECTIONS: readonly Section[] = [
   4,
   5,
   'several-species',
+  'three-voices',
 ]
 
 const ALL_SPECIES_COUNT = 5
@@ -21,6 +22,7 @@ const ALL_SPECIES_COUNT = 5
 /** Where a rule stands in the book. */
 export function sectionOf({ scope, species }: Pick<RulePage, 'scope' | 'species'>): Section {
   if (scope === 'cantus') return 'cantus'
+  if (scope === 'trio') return 'three-voices'
   if (species.length === ALL_SPECIES_COUNT) return scope === 'pair' ? 'every-species' : 'melody'
   const [only] = species
   return species.length === 1 && only !== undefined ? only : 'several-species'

@@ -107,7 +107,11 @@ export class ClassChannel {
       lead ? GROUP.leaders(lessonId) : role === 'wall' ? GROUP.wall(lessonId) : GROUP.pupils(lessonId),
       ...(memberId === null ? [] : [GROUP.member(lessonId, memberId)]),
     ])
-    this.presenceOf(lessonId).arrive(identity)
+    const presence = this.presenceOf(lessonId)
+    presence.arrive(identity)
+    // A screen that comes back may have missed that its hand was lowered.
+    if (memberId !== null && can(role, 'raise hand'))
+      socket.emit('ownHand', { up: presence.isHandUp(memberId) })
     this.tellPresence(lessonId)
     this.#listen(socket)
     const entering = this.#enterRoom(socket)
@@ -163,7 +167,8 @@ export class ClassChannel {
     switch (outcome.kind) {
       case 'refused':
         return { ok: false, error: outcome.error }
-      case 'hands':
+      case 'hand':
+        this.#io.to(GROUP.member(lessonId, outcome.memberId)).emit('ownHand', { up: outcome.isUp })
         this.tellPresence(lessonId)
         return { ok: true }
       case 'cue':

@@ -32,6 +32,10 @@ export class Presence {
     return true
   }
 
+  isHandUp(memberId: string): boolean {
+    return this.#members.get(memberId)?.hand === true
+  }
+
   has(memberId: string): boolean {
     return this.#members.has(memberId)
   }

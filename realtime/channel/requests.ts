@@ -9,8 +9,8 @@ type Cue = z.infer<(typeof CHANNEL_REQUESTS)['cue']>
 /** What is to follow from a request on the class channel. */
 export type RequestOutcome =
   | Readonly<{ kind: 'refused'; error: 'bad-request' | 'forbidden' | 'not-found' }>
-  /** Hands changed: everybody is told. */
-  | Readonly<{ kind: 'hands' }>
+  /** A hand went up or down: its owner is told, and everybody how many are up. */
+  | Readonly<{ kind: 'hand'; memberId: string; isUp: boolean }>
   | Readonly<{ kind: 'cue'; cue: Cue }>
   | Readonly<{ kind: 'remove'; memberId: string }>
   | Readonly<{ kind: 'done' }>
@@ -33,6 +33,9 @@ function parsePayload<Name extends ChannelRequest>(
   }
 }
 
+const turnHand = (presence: Presence, memberId: string, isUp: boolean): RequestOutcome =>
+  presence.setHand(memberId, isUp) ? { kind: 'hand', memberId, isUp } : { kind: 'done' }
+
 /** Judges a request by the table of who may do what, and does to the presence what it asks. */
 export function answerRequest(
   { role, memberId }: LessonIdentity,
@@ -45,14 +48,14 @@ export function answerRequest(
       if (!can(role, 'raise hand') || memberId === null) return refused('forbidden')
       const hand = parsePayload('hand', payload)
       if (!hand) return refused('bad-request')
-      return { kind: presence.setHand(memberId, hand.up) ? 'hands' : 'done' }
+      return turnHand(presence, memberId, hand.up)
     }
     case 'lowerHand': {
       if (!can(role, 'lower any hand')) return refused('forbidden')
       const target = parsePayload('lowerHand', payload)
       if (!target) return refused('bad-request')
       if (!presence.has(target.memberId)) return refused('not-found')
-      return { kind: presence.setHand(target.memberId, false) ? 'hands' : 'done' }
+      return turnHand(presence, target.memberId, false)
     }
     case 'cue': {
       if (!can(role, 'cue wall')) return refused('forbidden')

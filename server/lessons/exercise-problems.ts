@@ -4,9 +4,9 @@ import { isComfortable } from '@/shared/theory/clef'
 import { formatPitchClass, pitchOf } from '@/shared/theory/pitch'
 import type { BoardExercise } from '@/shared/wire/documents'
 
-/** What keeps an exercise from being one, beyond its shape: its clef, its final, its species, its rule set. */
+/** What keeps an exercise from being one, beyond its shape: its clef, its final, its rule set. */
 export function exerciseProblems(exercise: BoardExercise): readonly FieldProblem[] {
-  const { cantus, final, clefs, species, ruleSet } = exercise
+  const { cantus, final, clefs, ruleSet } = exercise
   const pitches = cantus.map(pitchOf)
   const last = pitches.at(-1)
   const outside = pitches.flatMap((pitch, index): readonly FieldProblem[] =>
@@ -16,11 +16,9 @@ export function exerciseProblems(exercise: BoardExercise): readonly FieldProblem
   )
   const wrongFinal: readonly FieldProblem[] =
     last && formatPitchClass(last) === final ? [] : [{ path: 'exercise.final', code: 'wrong-final' }]
-  const otherSpecies: readonly FieldProblem[] =
-    species === 1 ? [] : [{ path: 'exercise.species', code: 'not-an-option' }]
   const rules = ruleSetProblems(ruleSet).map((problem): FieldProblem => ({
     path: `exercise.ruleSet.rules.${problem.ruleId}`,
     code: problem.code,
   }))
-  return [...outside, ...wrongFinal, ...otherSpecies, ...rules]
+  return [...outside, ...wrongFinal, ...rules]
 }

@@ -12,6 +12,7 @@ import {
 import path from 'node:path'
 import { promisify } from 'node:util'
 import { brotliCompress, constants, gzip } from 'node:zlib'
+import { loadAhead } from './load-ahead.mjs'
 import { runProgram } from './run-program.mjs'
 
 const OUTPUT = 'dist/web'
@@ -79,6 +80,7 @@ export async function buildWeb() {
     await runProgram(path.resolve('node_modules/.bin/expo'), ['export', '-p', 'web', '--output-dir', made], {
       env: { CI: '1', EXPO_NO_TELEMETRY: '1', NODE_ENV: 'production' },
     })
+    loadAhead(made)
     await compressAll(made)
     writeFileSync(path.join(made, '.stamp'), stamp)
     if (existsSync(OUTPUT)) renameSync(OUTPUT, old)

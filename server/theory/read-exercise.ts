@@ -1,11 +1,17 @@
 import { readRuleSet, USUAL_RULES } from '@/server/theory/read-rule-set'
 import { accept, Refusal } from '@/server/theory/refusal'
 import { readChoice, readNumber, type Request } from '@/server/theory/request'
-import { lastBarOf, parseCantusWords, parseLineText } from '@/shared/interchange'
+import {
+  lastBarOf,
+  parseCantusWords,
+  parseLineText,
+  parseMusicXml,
+  type MusicXmlScore,
+} from '@/shared/interchange'
 import type { Exercise, RuleSet, SetAside, Species } from '@/shared/rules'
 import type { Compass } from '@/shared/search'
 import { analyseCantus } from '@/shared/theory/analyse-cantus'
-import { MODES } from '@/shared/theory/mode'
+import { MODES, type Mode } from '@/shared/theory/mode'
 import type { Line } from '@/shared/theory/note'
 import { comparePitches, formatPitch, parsePitch, parsePitchClass, type Pitch } from '@/shared/theory/pitch'
 import { scaleOf } from '@/shared/theory/scale'
@@ -27,24 +33,23 @@ type ReadFile = (path: string) => string
 /** Reads the exercise options of a request. */
 export function readAsked({ words, values }: Request, readFile: ReadFile): Asked {
   const compass = readCompass(values)
-  const { cantus, lineText } = readMelodies(words, values, readFile)
-  const { mode, final } = readTonality(values, cantus)
+  const { cantus, line, position, mode: named } = readMelodies(words, values, readFile)
+  const { mode, final } = readTonality({ ...values, mode: values.mode ?? named }, cantus)
   const exercise: Exercise = {
     cantus,
     mode,
     final,
     species: readNumber('species', values.species, { least: 1, most: 5, usual: 1 }) as Species,
-    position: readChoice('position', values.position, ['above', 'below'], 'above'),
+    position: readChoice('position', values.position, ['above', 'below'], position),
   }
-  const line = lineText === undefined ? {} : accept(parseLineText(lineText))
-  if (lastBarOf(line) > cantus.length) {
+  if (line !== null && lastBarOf(line) > cantus.length) {
     throw new Refusal(`The line has ${lastBarOf(line)} bars and its cantus ${cantus.length}.`)
   }
   return {
     exercise,
     ruleSet: readRuleSet(values.rules ?? USUAL_RULES, compass, readFile),
-    line,
-    hasLine: lineText !== undefined,
+    line: line ?? {},
+    hasLine: line !== null,
     setAside: readAside(values.aside, cantus.length),
     compass,
   }
@@ -85,21 +90,41 @@ export function readTonality(
   return { mode: named, final: noteOfFinal }
 }
 
+type Melodies = Readonly<{
+  cantus: readonly Pitch[]
+  /** `null` where none was given. */
+  line: Line | null
+  position: Exercise['position']
+  mode: Mode | undefined
+}>
+
+/** The cantus in words or from a file; a line from the same file, from `--line`, or none. */
 function readMelodies(
   words: readonly string[],
-  { cantus, line }: Request['values'],
-  _readFile: ReadFile,
-): Readonly<{ cantus: readonly Pitch[]; lineText: string | undefined }> {
-  if (cantus !== undefined && words.length > 0) {
+  { cantus: option, line: lineOption }: Request['values'],
+  readFile: ReadFile,
+): Melodies {
+  if (option !== undefined && words.length > 0) {
     throw new Refusal('Give the cantus once: after the options, or with --cantus.')
   }
-  const text = cantus ?? words.join(' ')
-  if (text.trim() === '') throw new Refusal('Give a cantus, such as "D4 F4 E4 D4".')
-  const pitches = accept(parseCantusWords(text))
-  if (pitches.length < MIN_BARS || pitches.length > MAX_BARS) {
-    throw new Refusal(`A cantus has from ${MIN_BARS} to ${MAX_BARS} notes; this one has ${pitches.length}.`)
+  const text = (option ?? words.join(' ')).trim()
+  if (text === '') throw new Refusal('Give a cantus, such as "D4 F4 E4 D4".')
+  const file = isScoreFile(text) ? readScore(text, readFile) : null
+  const cantus = file?.cantus ?? accept(parseCantusWords(text))
+  if (cantus.length < MIN_BARS || cantus.length > MAX_BARS) {
+    throw new Refusal(`A cantus has from ${MIN_BARS} to ${MAX_BARS} notes; this one has ${cantus.length}.`)
   }
-  return { cantus: pitches, lineText: line }
+  const line = lineOption === undefined ? (file?.line ?? null) : accept(parseLineText(lineOption))
+  return { cantus, line, position: file?.position ?? 'above', mode: file?.mode ?? undefined }
+}
+
+const isScoreFile = (text: string): boolean => /\.(?:musicxml|xml|mxl)$/i.test(text)
+
+function readScore(path: string, readFile: ReadFile): MusicXmlScore {
+  if (/\.mxl$/i.test(path)) throw new Refusal(`${path} is compressed; export it as .musicxml.`)
+  const score = parseMusicXml(readFile(path))
+  if (!score.ok) throw new Refusal(`${path}: ${score.reason.message}`)
+  return score.value
 }
 
 function readAside(text: string | undefined, barCount: number): SetAside {

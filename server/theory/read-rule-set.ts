@@ -1,12 +1,15 @@
 import type { z } from 'zod'
 import { Refusal } from '@/server/theory/refusal'
-import { createCore1, findPreset, PRESETS, ruleSetProblems, type RuleSet } from '@/shared/rules'
+import { createCore1, createCore2, findPreset, PRESETS, ruleSetProblems, type RuleSet } from '@/shared/rules'
 import type { Compass } from '@/shared/search'
 import { ruleSetFileSchema } from '@/shared/rule-sets/rule-set-file'
 import { ruleSetSchema } from '@/shared/wire/documents'
 
 /** Exact rule sets for checking engines against each other; each is made for one compass. */
-const CORES: Readonly<Record<string, (pool: Compass) => RuleSet>> = { 'core-1': createCore1 }
+const CORES: Readonly<Record<string, (pool: Compass) => RuleSet>> = {
+  'core-1': createCore1,
+  'core-2': createCore2,
+}
 
 export const USUAL_RULES = 'open-undergrad'
 

@@ -1,4 +1,4 @@
-import { readMoments, readVoice } from '@/shared/rules/reading'
+import { readMoments, readTrio, readVoice } from '@/shared/rules/reading'
 import type { AnyRule, Breach, Example, Exercise, Moment } from '@/shared/rules/rule'
 import { QUARTER_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
 import type { BarNotes, Line, Note } from '@/shared/theory/note'
@@ -11,6 +11,7 @@ export type ReadExample = Readonly<{
   exercise: Exercise
   cantusLine: Line
   line: Line
+  second: Line
   barCount: number
 }>
 
@@ -29,13 +30,17 @@ export function readExample(example: Example): ReadExample {
     },
     cantusLine,
     line: example.line === undefined ? {} : readLine(example.line),
+    second: example.second === undefined ? {} : readLine(example.second),
     barCount,
   }
 }
 
 /** All that one rule has to say of an example, with the parameters the example asks for. */
 export function judgeExample(rule: AnyRule, example: Example): readonly Breach[] {
-  const { exercise, cantusLine, line, barCount } = readExample(example)
+  const { exercise, cantusLine, line, second, barCount } = readExample(example)
+  if (rule.scope === 'trio') {
+    return runRule(rule, exercise, readTrio(exercise, [line, second]), example.params ?? {}, 'line')
+  }
   const judgesCantus = rule.scope === 'cantus' || (rule.scope === 'melody' && example.line === undefined)
   const moments = judgesCantus
     ? readVoice(barCount, cantusLine)

@@ -28,6 +28,29 @@ export function readMoments(
   return momentsOf(onsets, (bar) => exercise.cantus[bar - 1] as Pitch)
 }
 
+/**
+ * Reads two added lines with the cantus, note against note: one moment a bar, with the note that each line begins it
+ * with. That each bar holds one note is the matter of the rhythm's own rule.
+ */
+export function readTrio(
+  exercise: Exercise,
+  [line, second]: readonly [Line, Line],
+  setAside: SetAside = NONE_SET_ASIDE,
+): readonly Moment[] {
+  const others = readMoments(exercise, firstNotes(second), setAside)
+  return readMoments(exercise, firstNotes(line), setAside).map((moment, index) => ({
+    ...moment,
+    third: (others[index] as Moment).note,
+  }))
+}
+
+const firstNotes = (line: Line): Line =>
+  Object.fromEntries(
+    Object.entries(line as Record<string, BarNotes>)
+      .filter(([, notes]) => notes.length > 0)
+      .map(([bar, [first]]) => [bar, [{ pitch: (first as BarNotes[number]).pitch, ticks: WHOLE_TICKS }]]),
+  )
+
 /** Reads one voice alone: its own notes, rests and gaps, a tied note counting once with its whole length. */
 export function readVoice(
   barCount: number,

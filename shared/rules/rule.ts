@@ -22,9 +22,9 @@ export type Exercise = Readonly<{
 
 /**
  * Which reading a rule folds over. `melody`: one voice alone, the cantus or the added line. `cantus`: the cantus alone.
- * `line`: the added line alone. `pair`: both voices together.
+ * `line`: the added line alone. `pair`: both voices together. `trio`: two added lines with the cantus, note against note.
  */
-export type Scope = 'melody' | 'cantus' | 'line' | 'pair'
+export type Scope = 'melody' | 'cantus' | 'line' | 'pair' | 'trio'
 
 /** What stands in the judged voice at a moment: a pitch, a rest, or `null` when nothing has been written yet. */
 export type Sounding = Pitch | 'rest' | null
@@ -44,6 +44,8 @@ export type Moment = Readonly<{
   note: Sounding
   /** The cantus under or over it, in a reading of both voices. */
   other: Pitch | null
+  /** The second added line, in a reading of three voices. */
+  third?: Sounding
   /**
    * The interval between the voices, whichever is the higher, in letters and semitones, and again without its octaves.
    * Worked out once, as most rules of two voices ask for it; 0 where they do not both sound.
@@ -61,7 +63,8 @@ export type Moment = Readonly<{
   isLast: boolean
 }>
 
-export type Voice = 'cantus' | 'line'
+/** `second`: the other added line, where there are three voices. */
+export type Voice = 'cantus' | 'line' | 'second'
 
 /** What a rule has to say: which message, where, and the facts that the words are filled with. */
 export type Breach = Readonly<{
@@ -95,6 +98,8 @@ export type Citation = Readonly<{ source: string; place?: string; fromMemory?: t
 export type Example = Readonly<{
   cantus: string
   line?: string
+  /** The other added line, for a rule of three voices. */
+  second?: string
   position?: Position
   /** First species when left out. */
   species?: Species

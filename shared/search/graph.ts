@@ -3,6 +3,11 @@ import { createOrder } from '@/shared/search/group'
 import type { Places } from '@/shared/search/place'
 import { createTupleTable, internTuple, truncateTuples, type TupleTable } from '@/shared/search/tuple-table'
 
+// Read once: bundlers turn what is imported into look-ups, which the innermost loop would feel.
+const refused = DEAD
+const notAsked = UNKNOWN
+const intern = internTuple
+
 /** The edges out of one place: node by node, and a node's in the order of its choices. */
 export type Layer = {
   /** Where the edges of each node begin; one more than there are nodes. */
@@ -110,8 +115,8 @@ export function createGraph(members: readonly Automaton[], places: Places, limit
         const field = fields[rank] as number
         const from = values[base + field] as number
         let to = (tables[field] as Int32Array)[from * size + choice] as number
-        if (to === UNKNOWN) to = (members[field] as Automaton).advance(place, from, choice)
-        if (to === DEAD) {
+        if (to === notAsked) to = (members[field] as Automaton).advance(place, from, choice)
+        if (to === refused) {
           order.count(field)
           continue next
         }
@@ -119,7 +124,7 @@ export function createGraph(members: readonly Automaton[], places: Places, limit
       }
       const target = (choices[choice] as Places[number]['choices'][number]).next
       layer.choices[edgeCount] = choice
-      layer.targets[edgeCount] = internTuple(tuplesAt[target] as TupleTable, scratch, width)
+      layer.targets[edgeCount] = intern(tuplesAt[target] as TupleTable, scratch, width)
       edgeCount += 1
     }
     layer.edgeCount = edgeCount

@@ -2,6 +2,11 @@ import { DEAD, growTable, UNKNOWN, type Automaton } from '@/shared/search/automa
 import type { Place, Places } from '@/shared/search/place'
 import { createTupleTable, internTuple, type TupleTable } from '@/shared/search/tuple-table'
 
+// Read once: bundlers turn what is imported into look-ups, which the innermost loop would feel.
+const refused = DEAD
+const notAsked = UNKNOWN
+const intern = internTuple
+
 /**
  * Several automata as one: its states are the tuples of theirs that occur. Laws that look back one note have a state a
  * note when taken together, so that a search of all the laws has a few fields to compare instead of dozens.
@@ -42,15 +47,15 @@ export function createGroup(members: readonly Automaton[], places: Places): Auto
         const field = order.fields[turn] as number
         const from = values[state * width + field] as number
         let next = (memberTables[field] as Int32Array)[from * choices.length + choice] as number
-        if (next === UNKNOWN) next = (members[field] as Automaton).advance(place, from, choice)
-        if (next === DEAD) {
+        if (next === notAsked) next = (members[field] as Automaton).advance(place, from, choice)
+        if (next === refused) {
           order.count(field)
-          return (target[at] = DEAD)
+          return (target[at] = refused)
         }
         scratch[field] = next
       }
       const { next } = choices[choice] as Place['choices'][number]
-      return (target[at] = internTuple(tuplesAt[next] as TupleTable, scratch, width))
+      return (target[at] = intern(tuplesAt[next] as TupleTable, scratch, width))
     },
     accepts: (state) => {
       const { values } = tuplesAt[places.length - 1] as TupleTable

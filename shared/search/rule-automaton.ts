@@ -3,6 +3,9 @@ import type { Choice, Places } from '@/shared/search/place'
 import type { ActiveRule } from '@/shared/rules/rule-set'
 import type { Exercise, Moment, Step } from '@/shared/rules/rule'
 
+// Read once: bundlers turn what is imported into look-ups, which the innermost loop would feel.
+const refused = DEAD
+
 /** One law as an automaton. */
 export type RuleAutomaton = Automaton &
   Readonly<{
@@ -51,7 +54,7 @@ export function createRuleAutomaton(active: ActiveRule, exercise: Exercise, plac
     if (!readsPair) {
       const { state, breach } = rule.step(from, choice.solo, params) as Step<unknown>
       if (breach === null) return state
-      if (!breach.isRemark) return DEAD
+      if (!breach.isRemark) return refused
       hasRemarked = true
       return state
     }
@@ -59,7 +62,7 @@ export function createRuleAutomaton(active: ActiveRule, exercise: Exercise, plac
     for (const moment of choice.pair) {
       const { state, breach } = rule.step(now, moment, params) as Step<unknown>
       if (breach !== null) {
-        if (!breach.isRemark) return DEAD
+        if (!breach.isRemark) return refused
         hasRemarked = true
       }
       now = state
@@ -80,8 +83,8 @@ export function createRuleAutomaton(active: ActiveRule, exercise: Exercise, plac
     reach: rule.reach ?? Infinity,
     permits: (choice) => {
       const after = read(startState, choice)
-      if (after !== DEAD && rule.key(after) !== startKey) isStateless = false
-      return after !== DEAD
+      if (after !== refused && rule.key(after) !== startKey) isStateless = false
+      return after !== refused
     },
     isStateless: () => isStateless,
     hasRemarked: () => hasRemarked,
@@ -95,7 +98,7 @@ export function createRuleAutomaton(active: ActiveRule, exercise: Exercise, plac
       const { choices } = places[place] as Places[number]
       const taken = choices[choice] as Choice
       const after = read((statesAt[place] as unknown[])[state], taken)
-      const next = after === DEAD ? DEAD : intern(taken.next, after)
+      const next = after === refused ? refused : intern(taken.next, after)
       ;(tables[place] as Int32Array)[state * choices.length + choice] = next
       return next
     },
@@ -106,7 +109,7 @@ export function createRuleAutomaton(active: ActiveRule, exercise: Exercise, plac
         return
       }
       const taken = (places[place] as Places[number]).choices[choice] as Choice
-      if (read((statesAt[place] as unknown[])[state], taken) === DEAD) say(rule.id)
+      if (read((statesAt[place] as unknown[])[state], taken) === refused) say(rule.id)
     },
   }
 }

@@ -87,6 +87,8 @@ export type ChannelRequest = keyof typeof CHANNEL_REQUESTS
 export type ChannelEvents = Readonly<{
   /** `members` only to teacher and assistants (and to the wall while names are shown). */
   presence: (state: Readonly<{ here: number; hands: number; members?: readonly PresentMember[] }>) => void
+  /** To one member alone, on each of their screens: whether their own hand is up. Told on arrival and at every change. */
+  ownHand: (state: Readonly<{ up: boolean }>) => void
   /**
    * Everything up to `clock` of Yjs client `client` in `room` is in the journal. A client shows "kept" when all that it
    * wrote is covered.

@@ -157,7 +157,6 @@ describe('a lesson', () => {
     ['a wrong final', { final: 'G' }],
     ['a note its clef does not carry', { cantus: ['D4', 'D8', 'D4'] }],
     ['no notes', { cantus: ['x', 'y', 'z'] }],
-    ['a species that is not taught yet', { species: 3 }],
     ['a species there is none of', { species: 6 }],
     ['a rule nobody knows', { ruleSet: { id: 'x', name: 'X', rules: { 'no-such-rule': { level: 'law' } } } }],
     ['a level that is none', { ruleSet: { id: 'x', name: 'X', rules: { 'cf-range': { level: 'maybe' } } } }],

@@ -7,6 +7,8 @@ import type { BenchGroup, BenchRow } from './row'
 
 const GROUPS: Readonly<Record<string, () => Promise<{ runBench: BenchGroup }>>> = {
   engine: () => import('./engine'),
+  search: () => import('./search'),
+  generate: () => import('./generate'),
   lesson: () => import('./lesson'),
   client: () => import('./client'),
   startup: () => import('./startup'),

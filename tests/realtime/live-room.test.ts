@@ -182,6 +182,22 @@ describe('the live room of a screen', () => {
     expect(cues).toEqual(['wall stop'])
   })
 
+  it('tells each member of their own hand alone, whoever turned it, and again when they come back', async () => {
+    const neighbour = lesson.students[1] as TestMember
+    const [lectern, desk, other] = [enter(lesson.teacher), enter(student()), enter(neighbour)]
+    await until(() => [lectern, desk, other].every(isLive))
+    const second = enter(student())
+    await until(() => isLive(second))
+    for (const room of [desk, other]) expect(await room.send('hand', { up: true })).toEqual({ ok: true })
+    await until(() => desk.getView().isHandUp && second.getView().isHandUp && other.getView().isHandUp)
+    // Another hand is still up: the count alone would not tell.
+    expect(await lectern.send('lowerHand', { memberId: student().memberId })).toEqual({ ok: true })
+    await until(() => !desk.getView().isHandUp && !second.getView().isHandUp)
+    expect(other.getView().isHandUp).toBe(true)
+    const back = enter(neighbour)
+    await until(() => isLive(back) && back.getView().isHandUp)
+  })
+
   it('tells the lectern of newcomers gathered, and the class nothing', async () => {
     const [lectern, desk] = [enter(lesson.teacher), enter(student())]
     await until(() => isLive(lectern) && isLive(desk))

@@ -1,7 +1,7 @@
 import { changedRules, tidyRules, withRuleLevel, withRuleParam } from '@/components/rule-sets/change-rules'
 import type { Cantus } from '@/shared/api/cantus'
 import { MAX_TITLE_CHARACTERS, titleSchema } from '@/shared/api/fields'
-import { findRule, type Level, type Position, type RuleId, type RuleSet } from '@/shared/rules'
+import { findRule, type Level, type Position, type RuleId, type RuleSet, type Species } from '@/shared/rules'
 import { settingsOf } from '@/shared/rule-sets/rule-set-file'
 import type { Clef } from '@/shared/theory/clef'
 import { signatureOf } from '@/shared/theory/key'
@@ -14,6 +14,7 @@ import { suggestClefs } from './suggest-clefs'
 export type SetupForm = Readonly<{
   cantus: Cantus | null
   position: Position
+  species: Species
   mode: Mode
   final: string
   clefs: Readonly<{ cantus: Clef; line: Clef }>
@@ -44,6 +45,7 @@ const pitchesOf = (cantus: Cantus) =>
 export const startForm = (preset: RuleSet, prompt: string): SetupForm => ({
   cantus: null,
   position: 'above',
+  species: 1,
   mode: 'dorian',
   final: 'D',
   clefs: { cantus: 'treble', line: 'treble' },
@@ -135,7 +137,7 @@ export function exerciseOf(form: SetupForm): BoardExercise | null {
     cantus: [...form.cantus.notes],
     mode: form.mode,
     final: formatPitchClass(final),
-    species: 1,
+    species: form.species,
     position: form.position,
     clefs: form.clefs,
     signature,

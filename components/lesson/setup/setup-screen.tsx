@@ -13,7 +13,7 @@ import { api } from '@/shared/api'
 import type { Cantus } from '@/shared/api/cantus'
 import { MAX_TITLE_CHARACTERS } from '@/shared/api/fields'
 import type { Me } from '@/shared/api/people'
-import { findPreset, PRESETS, type Position, type RuleSet } from '@/shared/rules'
+import { findPreset, PRESETS, type Position, type RuleSet, type Species } from '@/shared/rules'
 import { MODES, type Mode } from '@/shared/theory/mode'
 import { MAX_PROMPT_CHARACTERS } from '@/shared/wire/documents'
 import { CantusPicker } from './cantus-picker'
@@ -39,6 +39,8 @@ import { CLEF_CHOICES } from './suggest-clefs'
 /** Width of the column in which the melody is chosen. */
 const PICKER_PX = 440
 const FIRST_PRESET = 'open-undergrad'
+const SPECIES = ['1', '2', '3', '4', '5'] as const
+type SpeciesValue = (typeof SPECIES)[number]
 const FINALS = ['C', 'C#', 'Db', 'D', 'Eb', 'E', 'F', 'F#', 'G', 'Ab', 'A', 'Bb', 'B'] as const
 
 /** Setting up a lesson: the melody, what is done with it, by which rules, and the first task. */
@@ -119,9 +121,12 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
               ]}
               onChange={(position) => setForm((before) => withPosition(before, position, titleOf))}
             />
-            <Txt kind="note" tone="lead">
-              {`${setup.species}: ${setup.first}`}
-            </Txt>
+            <Select<SpeciesValue>
+              label={setup.species}
+              value={`${form.species}`}
+              options={SPECIES.map((value) => ({ value, label: lesson.species[Number(value) as Species] }))}
+              onChange={(value) => setForm((before) => ({ ...before, species: Number(value) as Species }))}
+            />
             <Pair>
               <Select<Mode>
                 label={setup.mode}
@@ -227,7 +232,7 @@ function Setup({ courseId, library }: Readonly<{ courseId: string; library: read
                 key={form.preset.id}
                 rules={form.ruleSet.rules}
                 before={form.preset.rules}
-                species={1}
+                species={form.species}
                 widthPx={previewPx}
                 changed={changed}
                 onLevel={(id, level) => setForm((before) => withLevel(before, id, level))}

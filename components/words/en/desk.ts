@@ -1,4 +1,12 @@
+import { valueOf } from '@/shared/theory/note-value'
 import { lesson } from './lesson'
+
+type Value = Readonly<{ ticks: number; isRest: boolean }>
+
+function valueSpoken({ ticks, isRest }: Value): string {
+  const { value, isDotted } = valueOf(ticks)
+  return `${isDotted ? 'dotted ' : ''}${value} ${isRest ? 'rest' : 'note'}`
+}
 
 /** The student's desk. */
 export const desk = {
@@ -54,6 +62,21 @@ export const desk = {
           : `degree ${degree}, lowered`,
     proposed: 'proposed',
     crossing: 'voices cross',
+  },
+  rhythm: {
+    label: 'Rhythm of the bar',
+    places: 'Notes of the bar',
+    /** `half note, half note held over` */
+    rhythmSpoken: (values: readonly Value[], isTiedOver: boolean) =>
+      values
+        .map((value, i) => valueSpoken(value) + (isTiedOver && i === values.length - 1 ? ' held over' : ''))
+        .join(', '),
+    placeSpoken: (value: Value, place: number, pitch: string | null) =>
+      value.isRest
+        ? `${place + 1}: ${valueSpoken(value)}`
+        : `${place + 1}: ${valueSpoken(value)}, ${pitch ?? 'not written yet'}`,
+    restPrinted: 'rest',
+    unwritten: '…',
   },
   rubric: {
     label: 'Findings and the task',

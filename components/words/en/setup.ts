@@ -12,7 +12,6 @@ export const setup = {
   above: 'above',
   below: 'below',
   species: 'Species',
-  first: 'first: note against note',
   mode: 'Mode',
   final: 'Final',
   signature: 'At the clef',

@@ -6,8 +6,7 @@ export const ways = {
   left: (isOne: boolean) => (isOne ? 'way left' : 'ways left'),
   toFinish: (isOne: boolean) => (isOne ? 'way to finish from here' : 'ways to finish from here'),
   /** In a line of words. */
-  ofLine: (figure: string, isOne: boolean) =>
-    `${figure} ${isOne ? 'way' : 'ways'} to finish the line as it stands`,
+  ofLine: (figure: string, isOne: boolean) => `${figure} ${isOne ? 'way' : 'ways'} to finish`,
   onRung: (figure: string, isOne: boolean) => `${figure} ${isOne ? 'way' : 'ways'}`,
   none: 'none left',
   stuckAt: (bar: number) => `stuck at ${lesson.barsInSentence([bar])}`,

@@ -1,7 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
-import { breachAt, foldNotes, type Frame } from '@/shared/rules/fold'
+import { ALL_SPECIES, breachAt, foldNotes, type Frame } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { formatPitch } from '@/shared/theory/pitch'
 import { alterationInMode, degreeOf, isRaisedSeventh } from '@/shared/theory/scale'
@@ -20,7 +19,7 @@ export const accOther: Rule<Frame, Params> = {
   id: 'acc-other',
   level: 'preference',
   scope: 'line',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   ...foldNotes<Params>((now, params, { exercise: { mode, final } }) => {
     const alteration = alterationInMode(now.note, mode, final)

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
+import { neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   isContrary,
@@ -9,6 +9,7 @@ import {
   sizeOf,
   upperOf,
 } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { stepsFrom } from '@/shared/theory/interval'
 
@@ -29,7 +30,7 @@ export const battutaOctave: Rule<NeighbourState, Params> = {
   id: 'battuta-octave',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   ...neighbours<Params>((before, now, { exercise: { position }, params, moment }) => {
     const kind = perfectKindOf(now)

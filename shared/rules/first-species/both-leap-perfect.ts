@@ -1,19 +1,14 @@
 import { cite } from '@/shared/rules/cite'
-import {
-  FIRST_SPECIES,
-  neighbours,
-  NO_PARAMS,
-  type NeighbourState,
-  type NoParams,
-} from '@/shared/rules/first-species/folds'
+import { neighbours, NO_PARAMS, type NeighbourState, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, cantusSpan, lineSpan, perfectKindOf, sizeOf } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 
 export const bothLeapPerfect: Rule<NeighbourState, NoParams> = {
   id: 'both-leap-perfect',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
   ...neighbours((before, now) =>
     perfectKindOf(now) !== null && lineSpan(before, now) >= 2 && cantusSpan(before, now) >= 2

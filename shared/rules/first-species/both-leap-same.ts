@@ -1,7 +1,8 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
+import { neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
 import { breachAt, cantusSpan, lineSpan, sharedDirection } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { nameSize } from '@/shared/theory/interval-name'
 
@@ -24,7 +25,7 @@ export const bothLeapSame: Rule<NeighbourState, Params> = {
   id: 'both-leap-same',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   ...neighbours<Params>((before, now, { params: { from, max } }) => {
     if (sharedDirection(before, now) === 0) return null

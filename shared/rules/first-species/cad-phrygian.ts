@@ -1,6 +1,7 @@
 import { cite } from '@/shared/rules/cite'
-import { eachSonority, FIRST_SPECIES, NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
+import { eachSonority, NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
 import { alterationIn, breachAt, degreeIn } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Exercise, Rule } from '@/shared/rules/rule'
 import { formatPitch } from '@/shared/theory/pitch'
 
@@ -8,7 +9,7 @@ export const cadPhrygian: Rule<Exercise, NoParams> = {
   id: 'cad-phrygian',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
   ...eachSonority((now, { exercise, moment }) => {
     if (!moment.isPenultimate || exercise.mode !== 'phrygian') return null

@@ -1,12 +1,7 @@
 import { cite } from '@/shared/rules/cite'
-import {
-  FIRST_SPECIES,
-  neighbours,
-  NO_PARAMS,
-  type NeighbourState,
-  type NoParams,
-} from '@/shared/rules/first-species/folds'
+import { neighbours, NO_PARAMS, type NeighbourState, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, degreeIn, lineMove, lineSpan } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { chromaticNumber, formatPitch } from '@/shared/theory/pitch'
 import { isLeadingTone } from '@/shared/theory/scale'
@@ -15,7 +10,7 @@ export const cadRaiseSixth: Rule<NeighbourState, NoParams> = {
   id: 'cad-raise-sixth',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
   ...neighbours((before, now, { exercise, moment }) => {
     if (!moment.isPenultimate || !isLeadingTone(now.note, exercise.mode, exercise.final)) return null

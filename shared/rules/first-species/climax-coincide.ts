@@ -1,7 +1,7 @@
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
+import { NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
-import { goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
+import { ALL_SPECIES, goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { comparePitches, type Pitch } from '@/shared/theory/pitch'
 
@@ -20,7 +20,7 @@ export const climaxCoincide: Rule<State, NoParams> = {
   id: 'climax-coincide',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
   start: () => ({ lineTop: null, cantusTop: null, shared: NONE }),
   // The cantus is read on where the line is not written, so that its top is known from the place in the reading.

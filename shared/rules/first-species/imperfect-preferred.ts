@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { STRUCK_SPECIES } from '@/shared/rules/first-species/folds'
 import { breachAt, perfectKindOf, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
 import { goOn, pack } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
@@ -21,12 +21,12 @@ export const imperfectPreferred: Rule<State, Params> = {
   id: 'imperfect-preferred',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: STRUCK_SPECIES,
   params: PARAMS,
   start: () => ({ inner: 0, perfects: [] }),
   step: (state, moment) => {
     const now = sonorityOf(moment)
-    if (now === null || moment.isFirst || moment.isLast) return goOn(state)
+    if (now === null || moment.place !== 0 || moment.isFirst || moment.isLast) return goOn(state)
     const isPerfect = perfectKindOf(now) !== null
     return goOn({
       inner: state.inner + 1,

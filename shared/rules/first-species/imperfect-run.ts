@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { HEARD_ON_DOWNBEATS } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   isSixth,
@@ -29,10 +29,12 @@ export const imperfectRun: Rule<State, Params> = {
   id: 'imperfect-run',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: HEARD_ON_DOWNBEATS,
   params: PARAMS,
   start: (_exercise, { counting }) => ({ run: NONE, isPlaceNeeded: counting === 'parallel' }),
   step: (state, moment, { max, counting }) => {
+    // What sounds off the downbeat neither makes a run nor breaks it.
+    if (moment.place !== 0) return goOn(state)
     const now = sonorityOf(moment)
     if (now === null || !(isThird(now) || isSixth(now)))
       return goOn({ run: NONE, isPlaceNeeded: state.isPlaceNeeded })

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { STRUCK_SPECIES } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   isSixth,
@@ -35,12 +35,12 @@ export const intervalVariety: Rule<State, Params> = {
   id: 'interval-variety',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: STRUCK_SPECIES,
   params: PARAMS,
   start: () => ({ inner: 0, found: KINDS.map(() => []) }),
   step: (state, moment) => {
     const now = sonorityOf(moment)
-    if (now === null || moment.isFirst || moment.isLast) return goOn(state)
+    if (now === null || moment.place !== 0 || moment.isFirst || moment.isLast) return goOn(state)
     const kind = kindOf(now)
     return goOn({
       inner: state.inner + 1,

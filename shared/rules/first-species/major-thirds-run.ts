@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
+import { STRUCK_SPECIES, downbeats, type NeighbourState } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   cantusMove,
@@ -27,9 +27,9 @@ export const majorThirdsRun: Rule<NeighbourState, Params> = {
   id: 'major-thirds-run',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: STRUCK_SPECIES,
   params: PARAMS,
-  ...neighbours<Params>((before, now, { exercise, params: { scope } }) => {
+  ...downbeats<Params>((before, now, { exercise, params: { scope } }) => {
     if (!isMajorThird(before) || !isMajorThird(now)) return null
     // A third held, or one that only changes its octave, makes no new pair.
     if (lineMove(before, now) === 0 || cantusMove(before, now) === 0) return null

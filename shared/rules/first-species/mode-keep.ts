@@ -1,7 +1,16 @@
 import { cite } from '@/shared/rules/cite'
-import { eachSonority, FIRST_SPECIES, NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
-import { alterationIn, breachAt, degreeIn, perfectKindOf } from '@/shared/rules/first-species/sonority'
-import type { Exercise, Rule } from '@/shared/rules/rule'
+import { NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
+import { isOpening, waitsAfter, type OpeningState } from '@/shared/rules/first-species/opening'
+import {
+  alterationIn,
+  breachAt,
+  degreeIn,
+  perfectKindOf,
+  sonorityOf,
+  type Sonority,
+} from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
+import type { Breach, Exercise, Rule } from '@/shared/rules/rule'
 import { formatPitch } from '@/shared/theory/pitch'
 import { isFinal } from '@/shared/theory/scale'
 
@@ -9,20 +18,24 @@ import { isFinal } from '@/shared/theory/scale'
  * Speaks where the interval is right and the note is wrong: an opening that is no perfect consonance is the matter of
  * the opening rules.
  */
-export const modeKeep: Rule<Exercise, NoParams> = {
+export const modeKeep: Rule<OpeningState, NoParams> = {
   id: 'mode-keep',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
-  ...eachSonority((now, { exercise, moment }) => {
-    if (!(moment.isFirst || moment.isLast) || perfectKindOf(now) === null) return null
-    if (isFinal(now.note, exercise.final)) return null
-    const args = { note: formatPitch(now.note) }
-    if (moment.isLast) return breachAt('closes-elsewhere', [now], args)
-    const isFifthDegree = degreeIn(now.note, exercise) === 5 && alterationIn(now.note, exercise) === 0
-    return isFifthDegree && exercise.position === 'above' ? null : breachAt('opens-elsewhere', [now], args)
-  }),
+  start: (exercise) => ({ exercise, waitsIn: 0 }),
+  step: ({ exercise, waitsIn }, moment) => {
+    const now = sonorityOf(moment)
+    return {
+      state: { exercise, waitsIn: waitsAfter(moment, waitsIn) },
+      breach: now && judge(now, isOpening(now, waitsIn), exercise),
+    }
+  },
+  finish: () => null,
+  key: ({ waitsIn }) => waitsIn,
+  // Where nothing rests, none but the first note opens.
+  reach: 0,
   explain: {
     title: 'Keep the mode',
     statement:
@@ -52,4 +65,12 @@ export const modeKeep: Rule<Exercise, NoParams> = {
       'closes-elsewhere': 'The line ends on {note}, not on the final.',
     },
   },
+}
+
+function judge(now: Sonority, opens: boolean, exercise: Exercise): Breach | null {
+  if (!(opens || now.isLast) || perfectKindOf(now) === null || isFinal(now.note, exercise.final)) return null
+  const args = { note: formatPitch(now.note) }
+  if (now.isLast) return breachAt('closes-elsewhere', [now], args)
+  const isFifthDegree = degreeIn(now.note, exercise) === 5 && alterationIn(now.note, exercise) === 0
+  return isFifthDegree && exercise.position === 'above' ? null : breachAt('opens-elsewhere', [now], args)
 }

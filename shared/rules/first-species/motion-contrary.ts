@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { STRUCK_SPECIES } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   isContrary,
@@ -32,13 +32,14 @@ export const motionContrary: Rule<State, Params> = {
   id: 'motion-contrary',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: STRUCK_SPECIES,
   params: PARAMS,
   start: () => ({ before: null, contrary: 0, moves: 0, together: [] }),
   step: (state, moment) => {
     const now = sonorityOf(moment)
     const { before } = state
-    if (now === null || before === null) return goOn({ ...state, before: now })
+    // Inside a bar the cantus stands still.
+    if (now === null || before === null || before.bar === now.bar) return goOn({ ...state, before: now })
     return goOn({
       before: now,
       contrary: state.contrary + (isContrary(before, now) ? 1 : 0),

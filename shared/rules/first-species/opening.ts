@@ -1,7 +1,14 @@
 import { z } from 'zod'
-import { breachAt, perfectKindOf, sizeOf, type Sonority } from '@/shared/rules/first-species/sonority'
-import { asRemark } from '@/shared/rules/fold'
-import type { Breach } from '@/shared/rules/rule'
+import type { Given } from '@/shared/rules/first-species/folds'
+import {
+  breachAt,
+  perfectKindOf,
+  sizeOf,
+  sonorityOf,
+  type Sonority,
+} from '@/shared/rules/first-species/sonority'
+import { asRemark, goOn } from '@/shared/rules/fold'
+import type { Breach, Exercise, Moment, Rule } from '@/shared/rules/rule'
 
 /** Intervals with which a line may begin or end. A fifth stands for the twelfth too, an octave for the fifteenth. */
 export const OPENINGS = ['unison', 'fifth', 'octave'] as const
@@ -34,3 +41,30 @@ export function judgeOpening(
   }
   return breachAt(opening === null ? 'not-perfect' : 'not-allowed', [now], args)
 }
+
+/** `waitsIn` is the bar whose first note is still to come; 0 once the line has begun, or could not be read. */
+export type OpeningState = Readonly<{ exercise: Exercise; waitsIn: number }>
+
+/** True of the first note that sounds: the first of all, or one in the first bar with only rests before it. */
+export const isOpening = ({ isFirst, bar }: Sonority, waitsIn: number): boolean => isFirst || bar === waitsIn
+
+/** The bar that waits for its first note after a moment. */
+export const waitsAfter = ({ note, isFirst, bar }: Moment, waitsIn: number): number =>
+  note === 'rest' && (isFirst || bar === waitsIn) ? bar : 0
+
+/** Folds a rule of the first sonority, whether or not a rest comes before it. */
+export const openings = <Params>(
+  judge: (now: Sonority, given: Given<Params>) => Breach | null,
+): Pick<Rule<OpeningState, Params>, 'start' | 'step' | 'finish' | 'key' | 'reach'> => ({
+  start: (exercise) => ({ exercise, waitsIn: 0 }),
+  step: ({ exercise, waitsIn }, moment, params) => {
+    const state = { exercise, waitsIn: waitsAfter(moment, waitsIn) }
+    const now = sonorityOf(moment)
+    if (now === null || !isOpening(now, waitsIn)) return goOn(state)
+    return { state, breach: judge(now, { exercise, params, moment }) }
+  },
+  finish: () => null,
+  key: ({ waitsIn }) => waitsIn,
+  // Where nothing rests, none but the first note opens.
+  reach: 0,
+})

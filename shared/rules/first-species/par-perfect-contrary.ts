@@ -1,19 +1,14 @@
 import { cite } from '@/shared/rules/cite'
-import {
-  FIRST_SPECIES,
-  neighbours,
-  NO_PARAMS,
-  type NeighbourState,
-  type NoParams,
-} from '@/shared/rules/first-species/folds'
+import { neighbours, NO_PARAMS, type NeighbourState, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, isContrary, perfectKindOf } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 
 export const parPerfectContrary: Rule<NeighbourState, NoParams> = {
   id: 'par-perfect-contrary',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
   ...neighbours((before, now) => {
     const kind = perfectKindOf(now)

@@ -1,26 +1,21 @@
 import { cite } from '@/shared/rules/cite'
 import {
-  FIRST_SPECIES,
+  BARE_SPECIES,
   neighbours,
   NO_PARAMS,
   type NeighbourState,
   type NoParams,
 } from '@/shared/rules/first-species/folds'
-import { breachAt, isUnison, perfectKindOf, sharedDirection } from '@/shared/rules/first-species/sonority'
+import { judgeParallel } from '@/shared/rules/first-species/perfect-entry'
 import type { Rule } from '@/shared/rules/rule'
 
 export const parPerfect: Rule<NeighbourState, NoParams> = {
   id: 'par-perfect',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: BARE_SPECIES,
   params: NO_PARAMS,
-  ...neighbours((before, now) => {
-    const kind = perfectKindOf(now)
-    if (kind === null || kind !== perfectKindOf(before) || sharedDirection(before, now) === 0) return null
-    if (kind === 'fifth') return breachAt('fifths', [before, now])
-    return breachAt(isUnison(before) && isUnison(now) ? 'unisons' : 'octaves', [before, now])
-  }),
+  ...neighbours(judgeParallel),
   explain: {
     title: 'No parallel fifths or octaves',
     statement:

@@ -1,12 +1,7 @@
 import { cite } from '@/shared/rules/cite'
-import {
-  FIRST_SPECIES,
-  neighbours,
-  NO_PARAMS,
-  type NeighbourState,
-  type NoParams,
-} from '@/shared/rules/first-species/folds'
+import { acrossBars, NO_PARAMS, type NeighbourState, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { formatPitchClass, type Pitch } from '@/shared/theory/pitch'
 
@@ -16,9 +11,9 @@ export const relChromatic: Rule<NeighbourState, NoParams> = {
   id: 'rel-chromatic',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
-  ...neighbours((before, now) => {
+  ...acrossBars((before, now) => {
     const pair = isAltered(before.note, now.other)
       ? [before.note, now.other]
       : isAltered(before.other, now.note)

@@ -1,8 +1,8 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
+import { acrossBars, type NeighbourState } from '@/shared/rules/first-species/folds'
 import { breachAt, cantusSpan, isSixth, lineSpan, type Sonority } from '@/shared/rules/first-species/sonority'
-import { asRemark } from '@/shared/rules/fold'
+import { ALL_SPECIES, asRemark } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { intervalBetween, simpleInterval } from '@/shared/theory/interval'
 import { formatPitchClass, type Pitch } from '@/shared/theory/pitch'
@@ -23,9 +23,9 @@ export const relTritone: Rule<NeighbourState, Params> = {
   id: 'rel-tritone',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
-  ...neighbours<Params>((before, now, { params }) => {
+  ...acrossBars<Params>((before, now, { params }) => {
     const pair = findTritone(before, now)
     if (pair === null) return null
     if (params.sonorities === 'without-sixths' && (isSixth(before) || isSixth(now))) return null

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
+import { neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   cantusMove,
@@ -11,6 +11,7 @@ import {
   lineSpan,
   type Sonority,
 } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Exercise, Rule } from '@/shared/rules/rule'
 import { isFinal, isLeadingTone } from '@/shared/theory/scale'
 
@@ -32,7 +33,7 @@ export const s1CadenceMotion: Rule<NeighbourState, Params> = {
   id: 's1-cadence-motion',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   ...neighbours<Params>((before, now, { exercise, params, moment }) => {
     if (!moment.isLast) return null

@@ -1,8 +1,9 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { eachSonority, FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { eachSonority } from '@/shared/rules/first-species/folds'
 import { openingList, openingOf } from '@/shared/rules/first-species/opening'
 import { breachAt, sizeOf } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Exercise, Rule } from '@/shared/rules/rule'
 import { isFinal } from '@/shared/theory/scale'
 
@@ -16,7 +17,7 @@ export const s1Close: Rule<Exercise, Params> = {
   id: 's1-close',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   ...eachSonority<Params>((now, { exercise, params, moment }) => {
     if (!moment.isLast) return null

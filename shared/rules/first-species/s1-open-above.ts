@@ -1,8 +1,8 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { eachSonority, FIRST_SPECIES } from '@/shared/rules/first-species/folds'
-import { judgeOpening, openingList } from '@/shared/rules/first-species/opening'
-import type { Exercise, Rule } from '@/shared/rules/rule'
+import { OPENED_AS_FIRST } from '@/shared/rules/first-species/folds'
+import { judgeOpening, openingList, openings, type OpeningState } from '@/shared/rules/first-species/opening'
+import type { Rule } from '@/shared/rules/rule'
 
 const PARAMS = z.strictObject({
   set: openingList(['unison', 'fifth', 'octave'], 'Intervals to open with; twelfths count as fifths.'),
@@ -10,14 +10,14 @@ const PARAMS = z.strictObject({
 })
 type Params = z.infer<typeof PARAMS>
 
-export const s1OpenAbove: Rule<Exercise, Params> = {
+export const s1OpenAbove: Rule<OpeningState, Params> = {
   id: 's1-open-above',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: OPENED_AS_FIRST,
   params: PARAMS,
-  ...eachSonority<Params>((now, { exercise, params, moment }) =>
-    moment.isFirst && exercise.position === 'above' ? judgeOpening(now, params.set, params.secondBest) : null,
+  ...openings<Params>((now, { exercise, params }) =>
+    exercise.position === 'above' ? judgeOpening(now, params.set, params.secondBest) : null,
   ),
   explain: {
     title: 'Opening above',

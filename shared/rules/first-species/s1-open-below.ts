@@ -1,8 +1,8 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { eachSonority, FIRST_SPECIES } from '@/shared/rules/first-species/folds'
-import { judgeOpening, openingList } from '@/shared/rules/first-species/opening'
-import type { Exercise, Rule } from '@/shared/rules/rule'
+import { OPENED_AS_FIRST } from '@/shared/rules/first-species/folds'
+import { judgeOpening, openingList, openings, type OpeningState } from '@/shared/rules/first-species/opening'
+import type { Rule } from '@/shared/rules/rule'
 
 const PARAMS = z.strictObject({
   set: openingList(['unison', 'octave'], 'Intervals to open with; fifteenths count as octaves.'),
@@ -10,14 +10,14 @@ const PARAMS = z.strictObject({
 })
 type Params = z.infer<typeof PARAMS>
 
-export const s1OpenBelow: Rule<Exercise, Params> = {
+export const s1OpenBelow: Rule<OpeningState, Params> = {
   id: 's1-open-below',
   level: 'law',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: OPENED_AS_FIRST,
   params: PARAMS,
-  ...eachSonority<Params>((now, { exercise, params, moment }) =>
-    moment.isFirst && exercise.position === 'below' ? judgeOpening(now, params.set, params.secondBest) : null,
+  ...openings<Params>((now, { exercise, params }) =>
+    exercise.position === 'below' ? judgeOpening(now, params.set, params.secondBest) : null,
   ),
   explain: {
     title: 'Opening below',

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
+import { REPEATING_SPECIES } from '@/shared/rules/first-species/folds'
 import { breachAt, goOn, isNoted, pack, packPitch, PITCH_ROOM, type Noted } from '@/shared/rules/fold'
 import type { Breach, Exercise, Moment, Rule, Step } from '@/shared/rules/rule'
 import { formatPitch, isSamePitch } from '@/shared/theory/pitch'
@@ -24,7 +24,7 @@ export const s1Repeat: Rule<State, Params> = {
   id: 's1-repeat',
   level: 'preference',
   scope: 'line',
-  species: FIRST_SPECIES,
+  species: REPEATING_SPECIES,
   params: PARAMS,
   start: (exercise) => ({ exercise, before: null, repeats: 0, inRow: 0 }),
   step: (state, moment, params) => {

@@ -1,7 +1,8 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES, neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
+import { neighbours, type NeighbourState } from '@/shared/rules/first-species/folds'
 import { breachAt, lineSpan, sharedDirection } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { nameSize } from '@/shared/theory/interval-name'
 
@@ -19,7 +20,7 @@ export const similarLeap: Rule<NeighbourState, Params> = {
   id: 'similar-leap',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   ...neighbours<Params>((before, now, { params }) => {
     const span = lineSpan(before, now)

@@ -1,5 +1,5 @@
 import type { Breach, Exercise, Moment, Position, Voice } from '@/shared/rules/rule'
-import { directionFrom, stepsFrom, type Direction } from '@/shared/theory/interval'
+import { directionFrom, isConsonant, stepsFrom, type Direction } from '@/shared/theory/interval'
 import { nameInterval, nameSize } from '@/shared/theory/interval-name'
 import type { Pitch } from '@/shared/theory/pitch'
 import { alterationInMode, degreeOf, type Degree } from '@/shared/theory/scale'
@@ -20,6 +20,10 @@ export function perfectKindOf({ simpleSteps, simpleSemitones }: Sonority): Perfe
   if (simpleSteps === 0) return simpleSemitones === 0 ? 'octave' : null
   return simpleSteps === 4 && simpleSemitones === 7 ? 'fifth' : null
 }
+
+/** Neither a perfect consonance nor a third or a sixth; between two voices the fourth is a dissonance. */
+export const isDissonance = ({ simpleSteps, simpleSemitones }: Sonority): boolean =>
+  !isConsonant({ steps: simpleSteps, semitones: simpleSemitones })
 
 /** The same spelled pitch in both voices. */
 export const isUnison = ({ steps, semitones }: Sonority): boolean => steps === 0 && semitones === 0

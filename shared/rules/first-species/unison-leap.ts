@@ -1,6 +1,5 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
-import { FIRST_SPECIES } from '@/shared/rules/first-species/folds'
 import {
   breachAt,
   cantusMove,
@@ -10,7 +9,7 @@ import {
   sonorityOf,
   type Sonority,
 } from '@/shared/rules/first-species/sonority'
-import { goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
+import { ALL_SPECIES, goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
 import type { Breach, Rule } from '@/shared/rules/rule'
 import type { Direction } from '@/shared/theory/interval'
 
@@ -32,7 +31,7 @@ export const unisonLeap: Rule<State, Params> = {
   id: 'unison-leap',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: PARAMS,
   start: () => NONE,
   step: (state, moment, params) => {

@@ -1,12 +1,7 @@
 import { cite } from '@/shared/rules/cite'
-import {
-  FIRST_SPECIES,
-  neighbours,
-  NO_PARAMS,
-  type NeighbourState,
-  type NoParams,
-} from '@/shared/rules/first-species/folds'
+import { acrossBars, NO_PARAMS, type NeighbourState, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, lowerOf, upperOf } from '@/shared/rules/first-species/sonority'
+import { ALL_SPECIES } from '@/shared/rules/fold'
 import type { Rule } from '@/shared/rules/rule'
 import { comparePitches } from '@/shared/theory/pitch'
 
@@ -14,9 +9,9 @@ export const voiceOverlap: Rule<NeighbourState, NoParams> = {
   id: 'voice-overlap',
   level: 'preference',
   scope: 'pair',
-  species: FIRST_SPECIES,
+  species: ALL_SPECIES,
   params: NO_PARAMS,
-  ...neighbours((before, now, { exercise: { position } }) => {
+  ...acrossBars((before, now, { exercise: { position } }) => {
     if (comparePitches(upperOf(now, position), lowerOf(before, position)) < 0) {
       return breachAt('upper-below', [before, now])
     }

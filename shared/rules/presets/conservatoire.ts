@@ -1,5 +1,7 @@
 import { FOURTH_FIFTH } from '@/shared/rules/presets/fourth-fifth'
+import { SECOND_THIRD } from '@/shared/rules/presets/second-third'
 import { ANY_VOICE, law, OFF, taste } from '@/shared/rules/presets/setting'
+import { THREE_VOICES } from '@/shared/rules/presets/three-voices'
 import type { RuleSet } from '@/shared/rules/rule'
 
 /**
@@ -83,7 +85,11 @@ export const conservatoire: RuleSet = {
     's1-repeat': taste({ maxRepeats: 99, maxInRow: 3, lowerMayRepeat: false }),
     'rel-tritone': taste(),
     'rel-chromatic': law(),
+    // Two voices, second and third species.
+    ...SECOND_THIRD.conservatoire,
     // Two voices, fourth and fifth species.
     ...FOURTH_FIFTH.conservatoire,
+    // Three voices, note against note.
+    ...THREE_VOICES.conservatoire,
   },
 }

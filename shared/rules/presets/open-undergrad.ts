@@ -1,5 +1,7 @@
 import { FOURTH_FIFTH } from '@/shared/rules/presets/fourth-fifth'
+import { SECOND_THIRD } from '@/shared/rules/presets/second-third'
 import { law, OFF, taste } from '@/shared/rules/presets/setting'
+import { THREE_VOICES } from '@/shared/rules/presets/three-voices'
 import type { RuleSet } from '@/shared/rules/rule'
 
 /**
@@ -82,7 +84,11 @@ export const openUndergrad: RuleSet = {
     's1-repeat': law({ maxRepeats: 1 }),
     'rel-tritone': OFF,
     'rel-chromatic': law(),
+    // Two voices, second and third species.
+    ...SECOND_THIRD['open-undergrad'],
     // Two voices, fourth and fifth species.
     ...FOURTH_FIFTH['open-undergrad'],
+    // Three voices, note against note.
+    ...THREE_VOICES['open-undergrad'],
   },
 }

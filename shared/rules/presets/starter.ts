@@ -1,5 +1,7 @@
 import { FOURTH_FIFTH } from '@/shared/rules/presets/fourth-fifth'
+import { SECOND_THIRD } from '@/shared/rules/presets/second-third'
 import { ANY_VOICE, law, OFF, taste } from '@/shared/rules/presets/setting'
+import { THREE_VOICES } from '@/shared/rules/presets/three-voices'
 import type { RuleSet } from '@/shared/rules/rule'
 
 /**
@@ -82,7 +84,11 @@ export const starter: RuleSet = {
     's1-repeat': taste({ maxRepeats: 2 }),
     'rel-tritone': OFF,
     'rel-chromatic': OFF,
+    // Two voices, second and third species.
+    ...SECOND_THIRD.starter,
     // Two voices, fourth and fifth species.
     ...FOURTH_FIFTH.starter,
+    // Three voices, note against note.
+    ...THREE_VOICES.starter,
   },
 }

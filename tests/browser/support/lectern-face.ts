@@ -4,10 +4,9 @@ import { lesson } from '@/components/words/en/lesson'
 
 /** The teacher's lectern, found as a person finds it: by roles and names. */
 export function lecternFace(page: Page) {
+  const score = page.getByRole('listbox', { name: words.scoreLabel })
   const bar = (number: number): Locator =>
-    page
-      .getByRole('listbox', { name: words.scoreLabel })
-      .getByRole('option', { name: new RegExp(`^bar ${number}\\b`) })
+    score.getByRole('option', { name: new RegExp(`^bar ${number}\\b`) })
   const button = (name: string): Locator => page.getByRole('button', { name, exact: true })
 
   return {
@@ -18,11 +17,11 @@ export function lecternFace(page: Page) {
     async select(from: number, to = from): Promise<void> {
       await bar(from).click()
       if (to !== from) await bar(to).click({ modifiers: ['Shift'] })
-      await page
+      await score
         .getByRole('option', { selected: true })
         .nth(to - from)
         .waitFor()
-      const last = page.getByRole('option', { name: new RegExp(`^bar ${to}\\b`), selected: true })
+      const last = score.getByRole('option', { name: new RegExp(`^bar ${to}\\b`), selected: true })
       await last.waitFor()
     },
     async release(from: number, to = from): Promise<void> {

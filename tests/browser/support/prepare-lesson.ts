@@ -6,7 +6,7 @@ import type { BoardExercise, StageSettings } from '@/shared/wire/documents'
 import { ask } from './ask'
 
 /** Fux's dorian cantus, eleven bars, with the counterpoint above. Over it he writes A A G A B C C B D C♯ D. */
-const EXERCISE: BoardExercise = {
+export const EXERCISE: BoardExercise = {
   title: 'Cantus in D',
   cantus: ['D4', 'F4', 'E4', 'D4', 'G4', 'F4', 'A4', 'G4', 'F4', 'E4', 'D4'],
   mode: 'dorian',

@@ -48,6 +48,7 @@ describe('the rail between the staves', () => {
       interval: null,
       figure: null,
       motion: null,
+      later: [],
     })
     expect(railOf(exercise, written, new Set())[3]).toMatchObject({ motion: 'parallel' })
     expect(barReadBefore(4, new Set([2, 3]))).toBe(1)
@@ -56,5 +57,14 @@ describe('the rail between the staves', () => {
 
   test('a tenth keeps its own figure', () => {
     expect(railOf(exercise, line({ 6: 'A5' }), new Set())[5]?.figure).toBe('10')
+  })
+
+  test('later notes have figures of their own, eighth notes and rests none', () => {
+    const note = (pitch: string | null, ticks: number) => ({ pitch, ticks })
+    const bar = [note('A4', 480), note('B4', 240), note('C5', 240), note(null, 480), note('D5', 480)]
+    expect(railOf(exercise, { 1: bar }, new Set())[0]).toMatchObject({
+      figure: '5',
+      later: [{ tick: 1440, text: '8' }],
+    })
   })
 })

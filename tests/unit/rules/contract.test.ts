@@ -7,16 +7,20 @@ import { FOURTH_SPECIES_RULES } from '@/shared/rules/fourth-species'
 import { MELODY_RULES } from '@/shared/rules/melody'
 import { RULES } from '@/shared/rules/registry'
 import type { AnyRule } from '@/shared/rules/rule'
+import { SECOND_SPECIES_RULES } from '@/shared/rules/second-species'
 import { ruleSetProblems } from '@/shared/rules/rule-set'
 import { findSource } from '@/shared/rules/sources'
+import { THREE_VOICE_RULES } from '@/shared/rules/three-voices'
 import { CATALOGUE } from './catalogue'
 
 /** Folders of rules, with the part of the catalogue that each holds. */
 const FOLDERS: readonly (readonly [folder: string, rules: readonly AnyRule[], species: number])[] = [
   ['melody', MELODY_RULES, 0],
   ['first-species', FIRST_SPECIES_RULES, 1],
+  ['second-species', SECOND_SPECIES_RULES, 2],
   ['fourth-species', FOURTH_SPECIES_RULES, 4],
   ['fifth-species', FIFTH_SPECIES_RULES, 5],
+  ['three-voices', THREE_VOICE_RULES, 6],
 ]
 const folderOf = (rule: AnyRule): string =>
   FOLDERS.find(([, rules]) => rules.includes(rule))?.[0] ?? 'no folder'

@@ -1,0 +1,107 @@
+/** E3 to E5: what finding every way to finish costs, beside an answer-set solver's own reckoning of its time. */
+import { createCore1, PRESETS, readExercise, type Exercise, type Species } from '@/shared/rules'
+import { createSearch } from '@/shared/search'
+import { FUX_CANTI } from '@/tests/fixtures/canti-firmi'
+import { CLINGO_MISSING, hasClingo, runClingo } from '@/tests/support/clingo'
+import type { BenchGroup, BenchRow } from './row'
+
+const RUNS = 25
+const WARM_UPS = 10
+
+const POSITIONS = [
+  { position: 'above', lo: 'C4', hi: 'C6' },
+  { position: 'below', lo: 'F2', hi: 'G4' },
+] as const
+
+const CASES = FUX_CANTI.flatMap(({ notes, mode, final }) =>
+  POSITIONS.map((where) => ({ cantus: notes.split(' '), mode, final, ...where })),
+)
+type Case = (typeof CASES)[number]
+
+const exerciseOf = ({ cantus, mode, final, position }: Case, species: Species): Exercise =>
+  readExercise({ cantus, mode, final, position, species })
+
+/** Milliseconds of processor time: the work is arithmetic alone, and the machine may be doing something else. */
+function timeOf(work: () => void): number {
+  const startedAt = process.cpuUsage()
+  work()
+  const { user, system } = process.cpuUsage(startedAt)
+  return (user + system) / 1000
+}
+
+/** From nothing to the number and all alive notes: rules read, automata begun, graph built. */
+function findCore1(given: Case): void {
+  const ruleSet = createCore1({ lowest: given.lo, highest: given.hi })
+  createSearch(exerciseOf(given, 1), ruleSet).find().alive()
+}
+
+function measureCore1(tell: (progress: string) => void): readonly BenchRow[] {
+  tell("core-1 over Fux's six canti firmi, above and below")
+  for (let warmUp = 0; warmUp < WARM_UPS; warmUp += 1) CASES.forEach(findCore1)
+  const byCase = CASES.map((given) => Array.from({ length: RUNS }, () => timeOf(() => findCore1(given))))
+  const sums = Array.from({ length: RUNS }, (_, run) =>
+    byCase.reduce((sum, times) => sum + (times[run] ?? 0), 0),
+  )
+  const slowest = [...byCase].sort((a, b) => medianOf(b) - medianOf(a))[0] ?? []
+  const rows: BenchRow[] = [
+    {
+      line: 'E3',
+      work: 'count and alive notes, core-1, the slowest of 12 cases (CPU time)',
+      samples: slowest,
+      unit: 'ms',
+      goal: 'under 3 ms',
+    },
+  ]
+  if (!hasClingo()) {
+    tell(CLINGO_MISSING)
+    return rows
+  }
+  tell('the same by clingo')
+  const clingo = CASES.map((given) => runClingo('core-1', given, 'count').seconds * 1000)
+  const clingoSum = clingo.reduce((sum, time) => sum + time, 0)
+  return [
+    ...rows,
+    {
+      line: 'E3',
+      work: 'all 12 by clingo, its own time',
+      samples: [clingoSum],
+      unit: 'ms',
+      goal: 'the peer',
+    },
+    {
+      line: 'E3',
+      work: 'all 12, how many times faster than clingo',
+      samples: sums.map((sum) => clingoSum / sum),
+      unit: '×',
+      goal: '20 times',
+    },
+  ]
+}
+
+const GOALS_MS: Readonly<Record<Species, number>> = { 1: 10, 2: 100, 3: 800, 4: 50, 5: 1500 }
+
+function measurePresets(species: Species, tell: (progress: string) => void): readonly BenchRow[] {
+  tell(`full presets, species ${species}`)
+  return PRESETS.map((ruleSet): BenchRow => {
+    const find = (given: Case) => createSearch(exerciseOf(given, species), ruleSet).find()
+    const cases = CASES.slice(0, 2)
+    cases.forEach(find)
+    const samples = cases.flatMap((given) => [0, 1, 2].map(() => timeOf(() => find(given))))
+    return {
+      line: 'E5',
+      work: `count, ${ruleSet.id}, species ${species}, eleven bars above and below (CPU time)`,
+      samples,
+      unit: 'ms',
+      goal: `under ${GOALS_MS[species]} ms`,
+    }
+  })
+}
+
+const medianOf = (samples: readonly number[]): number =>
+  [...samples].sort((a, b) => a - b)[samples.length >> 1] ?? 0
+
+export const runBench: BenchGroup = (tell) =>
+  Promise.resolve([
+    ...measureCore1(tell),
+    ...([1, 2, 3, 4, 5] as const).flatMap((species) => measurePresets(species, tell)),
+  ])
