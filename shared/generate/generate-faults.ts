@@ -1,12 +1,13 @@
 import { createFaultAutomaton, type WantedFault } from '@/shared/generate/fault-automaton'
 import type { GenerationProblem } from '@/shared/generate/generation-problem'
-import { walkAll, type Walk } from '@/shared/generate/walk'
+import { SHORT_LIMITS, walkAll, type Walk } from '@/shared/generate/walk'
 import { fail, ok, type Result } from '@/shared/result'
 import { createChecker, type Checker } from '@/shared/rules/checker'
 import { findRule } from '@/shared/rules/registry'
 import type { ActiveRule } from '@/shared/rules/rule-set'
 import type { Exercise, Finding, RuleId, RuleSet } from '@/shared/rules/rule'
 import { lineOf } from '@/shared/search/paths'
+import type { Limits } from '@/shared/search/graph'
 import type { Places } from '@/shared/search/place'
 import { createPlaces } from '@/shared/search/places'
 import { poolOf, type Compass } from '@/shared/search/pool'
@@ -134,7 +135,7 @@ function walkWith(
   wanted: readonly WantedFault[],
   apart: number,
   stray = 0,
-  without?: RuleId,
+  { without, limits }: Readonly<{ without?: RuleId; limits?: Limits }> = {},
 ): Walk {
   const { exercise, ruleSet } = request
   const active = rulesOfLine(exercise, ruleSet)
@@ -142,7 +143,7 @@ function walkWith(
   const laws = active.filter(({ rule }) => !asked.has(rule.id) && rule.id !== without)
   const places = placesOf(request, active, stray)
   const world = createWorld(exercise, laws, places)
-  return walkAll(world, [createFaultAutomaton(wanted, apart, exercise, places)])
+  return walkAll(world, [createFaultAutomaton(wanted, apart, exercise, places)], limits)
 }
 
 /** The places of a whole line, with notes a little outside the compass where the line has to go astray. */
@@ -213,8 +214,10 @@ function explain(
   }
   for (const fault of wanted) {
     const alone = { ...fault, times: 1 }
-    if (walkWith(request, [alone], 0, STRAY_STEPS).count > 0n) continue
-    return explainAlone(request, alone)
+    const { count, isExact } = walkWith(request, [alone], 0, STRAY_STEPS)
+    if (count > 0n) continue
+    if (isExact) return explainAlone(request, alone)
+    return problem('not-found', `No line with ${list(titles)} broken was found in the time given.`, rules)
   }
   const times = wanted.reduce((sum, fault) => sum + fault.times, 0)
   const message = `${list(titles)} cannot be broken ${times} times in ${request.exercise.cantus.length} bars, ${apart} bars apart, without another breach.`
@@ -225,7 +228,10 @@ function explainAlone(request: FaultRequest, fault: WantedFault): Result<never, 
   const { rule } = fault.active
   const companions = rulesOfLine(request.exercise, request.ruleSet)
     .filter(({ level, rule: other }) => level === 'law' && other.id !== rule.id)
-    .filter(({ rule: other }) => walkWith(request, [fault], 0, STRAY_STEPS, other.id).count > 0n)
+    .filter(({ rule: other }) => {
+      const short = { without: other.id, limits: SHORT_LIMITS }
+      return walkWith(request, [fault], 0, STRAY_STEPS, short).count > 0n
+    })
   const others = companions.map((companion) => `“${companion.rule.explain.title}”`)
   const reason =
     others.length > 0

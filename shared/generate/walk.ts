@@ -1,7 +1,6 @@
 import { countWaysOn } from '@/shared/search/counts'
 import { createGraph, type Limits } from '@/shared/search/graph'
 import { pathAt, type Path } from '@/shared/search/paths'
-import type { Places } from '@/shared/search/place'
 import type { Seeded } from '@/shared/search/seeded'
 import type { World } from '@/shared/search/world'
 import type { Automaton } from '@/shared/search/automaton'
@@ -19,13 +18,13 @@ export type Walk = Readonly<{
 export const LIMITS: Limits = { nodes: 200_000, beam: 400 }
 const TRIES_AT_ONCE = 1_000_000
 
+/** For asking why there is nothing: many walks, each short. What they find is there; what they do not may be. */
+export const SHORT_LIMITS: Limits = { nodes: 15_000, beam: 100 }
+
 /** Walks all ways through some places that the laws of a world, and further automata, let pass. */
-export function walkAll(
-  world: World,
-  further: readonly Automaton[] = [],
-  places: Places = world.places,
-): Walk {
-  const graph = createGraph([...world.members, ...further], places, LIMITS)
+export function walkAll(world: World, further: readonly Automaton[] = [], limits: Limits = LIMITS): Walk {
+  const { places } = world
+  const graph = createGraph([...world.members, ...further], places, limits)
   graph.restart(world.tried)
   while (!graph.advance(TRIES_AT_ONCE));
   const waysOn = countWaysOn(graph, places)

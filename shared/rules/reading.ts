@@ -86,8 +86,9 @@ function readOnsets(
   const onsets: Onset[] = []
   for (let bar = 1; bar <= barCount; bar += 1) {
     if (setAside.has(bar)) continue
-    let place = 0
-    for (const written of notesOf(bar) ?? []) {
+    const notes = notesOf(bar) ?? []
+    let place = notes.length === 0 ? holdOver(onsets, bar) : 0
+    for (const written of notes) {
       const note = written.pitch === null ? 'rest' : pitchNamed(written.pitch)
       const before = onsets.at(-1)
       // A tie out of a bar that is set aside is not read: its note then counts as struck.
@@ -101,6 +102,20 @@ function readOnsets(
     }
   }
   return onsets
+}
+
+/**
+ * Where a note is longer than its bar has room and the next bar is empty, it sounds on there: the cantus moves under it,
+ * and rules have to see that. Returns the ticks that it fills.
+ */
+function holdOver(onsets: Onset[], bar: number): number {
+  const last = onsets.at(-1)
+  if (last === undefined || last.bar !== bar - 1 || last.note === null || last.note === 'rest') return 0
+  const beyond = last.place + last.ticks - WHOLE_TICKS
+  if (beyond <= 0 || last.place >= WHOLE_TICKS) return 0
+  last.ticks -= beyond
+  onsets.push({ bar, place: 0, note: last.note, ticks: beyond, isHeld: true, isTied: false })
+  return beyond
 }
 
 function momentsOf(onsets: readonly Onset[], otherAt: (bar: number) => Pitch | null): Moment[] {

@@ -77,7 +77,7 @@ it('opens the rule book to anybody, and finds a rule in it', async () => {
   await visitor.close()
 })
 
-it('shows what a change does, tells a contradiction, and keeps what was made', async () => {
+it('shows what a change does on an example, and keeps what was made', async () => {
   await page.goto('/rule-sets/new?from=starter')
   const tries = page.getByRole('button', { name: /^See what/ })
   await page.getByLabel('Find a rule').fill('no overlap')

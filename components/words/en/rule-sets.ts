@@ -49,7 +49,7 @@ export const ruleSets = {
   rules: 'The rules',
   tryIt: 'See what it does',
   tryItClose: 'Close the example',
-  tryItSpoken: (rule: string) => `See what “${rule}” does`,
+  tryItSpoken: (rule: string) => `See what it does: ${rule}`,
   before: 'Before',
   now: 'As set now',
   same: 'As set now, the same as before',

@@ -47,7 +47,7 @@ export const rules = {
   exampleSpoken: (which: string, title: string) => `${which}: an example of “${title}”`,
   hear: 'Hear it',
   stop: 'Stop',
-  hearSpoken: (which: string) => `Hear the ${which.toLowerCase()} example`,
+  hearSpoken: (which: string) => `Hear it: ${which}`,
   params: 'What can be set',
   noParams: 'Nothing: the rule is the same for everyone.',
   byDefault: (value: string) => `${value}, unless set otherwise`,

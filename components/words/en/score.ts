@@ -1,3 +1,4 @@
+import { valueOf } from '@/shared/theory/note-value'
 import { lesson } from './lesson'
 
 type BarFacts = Readonly<{
@@ -19,6 +20,12 @@ const proposalSpoken = ({ notes, count }: BarFacts['proposals'][number]): string
 /** What a screen reader says of an engraved score. */
 export const score = {
   score: 'Score',
+  /** `half A held over`, `quarter rest`: among notes of several values. */
+  note: (pitch: string | null, ticks: number, isTied: boolean): string => {
+    const { value, isDotted } = valueOf(ticks)
+    const length = isDotted ? `dotted ${value}` : value
+    return pitch === null ? `${length} rest` : `${length} ${pitch}${isTied ? ' held over' : ''}`
+  },
   setAside: (bar: number) => `bar ${bar}, set aside`,
   /** `bar 4, cantus F, line A, tenth, contrary motion, released` */
   bar: ({ number, state, cantus, line, interval, motion, proposals }: BarFacts): string =>

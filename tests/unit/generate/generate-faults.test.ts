@@ -79,6 +79,20 @@ const CASES: readonly Case[] = [
     ],
     2,
   ],
+  [
+    'two leaps without an answer, in halves',
+    { ...overFux('dorian'), species: 2 },
+    preset('open-undergrad'),
+    [{ rule: 'mel-leap-recovery', times: 2 }],
+    2,
+  ],
+  [
+    'a parallel among suspensions',
+    { ...overFux('dorian'), species: 4 },
+    preset('open-undergrad'),
+    [{ rule: 'par-perfect', times: 1 }],
+    2,
+  ],
 ]
 
 describe.each(CASES)('%s', (_name, exercise, ruleSet, faults, apart) => {

@@ -27,4 +27,15 @@ describe('a bar as a screen reader tells it', () => {
   test('says only that a bar is set aside', () => {
     expect(describeBar(barOf(3, { isSetAside: true }), words)).toBe('bar 3, set aside')
   })
+
+  test('tells lengths where notes have several, and rests and ties', () => {
+    const line = [
+      { pitch: null, ticks: 960 },
+      { pitch: 'A4', ticks: 720 },
+      { pitch: 'C#5', ticks: 240, tied: true as const },
+    ]
+    expect(describeBar(barOf(1, { line }), words)).toBe(
+      'bar 1, cantus D, line half rest dotted quarter A eighth C sharp held over, frozen',
+    )
+  })
 })

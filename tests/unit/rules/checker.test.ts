@@ -67,8 +67,8 @@ test('rules that do not govern the exercise’s species are silent on the line',
   const fifth: Exercise = { ...exercise, species: 5 }
   const names = (findings: readonly Finding[]) => new Set(findings.map(({ ruleId }) => ruleId))
   const openUndergrad = findPreset('open-undergrad') as RuleSet
-  expect(names(checkLine(exercise, line, openUndergrad))).toContain('s1-close')
-  expect(names(checkLine(fifth, line, openUndergrad))).not.toContain('s1-close')
+  expect(names(checkLine(exercise, line, openUndergrad))).toContain('vert-consonance-set')
+  expect(names(checkLine(fifth, line, openUndergrad))).not.toContain('vert-consonance-set')
 })
 
 test('unknown rules and bad parameters are left out, and the rest is judged', () => {

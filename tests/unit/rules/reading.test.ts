@@ -53,6 +53,28 @@ test('a bar that is not filled up ends in an unwritten moment', () => {
   expect(pair.map(short)).toEqual(['1.0 A4:2', '1.2 ?:0', '2.0 A4:4', '3.0 D5:4'])
 })
 
+test('a note longer than its bar is heard in the empty bars after it, as far as it reaches', () => {
+  const { exercise } = readExample({ cantus: 'D4 F4 E4 D4', mode: 'dorian', final: 'D', breaches: [] })
+  const long = {
+    1: [
+      { pitch: null, ticks: 960 },
+      { pitch: 'A4', ticks: 3840 },
+    ],
+    4: [{ pitch: 'D5', ticks: 1920 }],
+  }
+  expect(readMoments(exercise, long).map(short)).toEqual([
+    '1.0 r:2',
+    '1.2 A4:8',
+    '2.0 A4:6~',
+    '3.0 A4:2~',
+    '3.2 ?:0',
+    '4.0 D5:4',
+  ])
+  expect(readVoice(4, long).map(short)).toEqual(['1.0 r:2', '1.2 A4:8', '3.2 ?:0', '4.0 D5:4'])
+  const kept = readMoments(exercise, { ...long, 2: [{ pitch: 'B4', ticks: 1920 }] })
+  expect(kept.map(short).slice(0, 4)).toEqual(['1.0 r:2', '1.2 A4:8', '2.0 B4:4', '3.0 ?:0'])
+})
+
 test('bars set aside are not read, and a tie out of one is not heard', () => {
   const { pair, solo } = score('D4 F4 E4 D4', 'A4 D5:2,A4:2~ A4:2,G4:2 D4', [2])
   expect(pair.map(short)).toEqual(['1.0 A4:4', '3.0 A4:2', '3.2 G4:2', '4.0 D4:4'])
