@@ -4,7 +4,7 @@ import type { BarMotion } from '@/shared/notation/score-input'
 import { intervalBetween, qualityOf } from '@/shared/theory/interval'
 import { nameInterval, nameSize } from '@/shared/theory/interval-name'
 import type { BarNotes, Line } from '@/shared/theory/note'
-import { comparePitches, parsePitch, type Pitch } from '@/shared/theory/pitch'
+import { comparePitches, parsePitch, pitchOf, type Pitch } from '@/shared/theory/pitch'
 import type { LessonView } from './lesson-view'
 import { railOf } from './rail'
 
@@ -69,6 +69,26 @@ export function speakScore(
     const pitch = firstPitch(read[bar])
     if (!pitch) return { bar, sentence: words.lesson.unwrittenSpoken(bar, words.lesson.pitchSpoken(cantus)) }
     const here = findings?.filter(({ bars }) => bars.at(-1) === bar) ?? null
+    if (view.exercise.species > 1) {
+      const notes = (read[bar] ?? []).map(({ pitch: name, ticks, tied }) =>
+        words.score.note(
+          name === null ? null : words.lesson.pitchSpoken(pitchOf(name)),
+          ticks,
+          tied === true,
+        ),
+      )
+      const told = words.score.bar({
+        number: bar,
+        state: 'plain',
+        cantus: words.lesson.pitchSpoken(cantus),
+        line: notes.join(' '),
+        interval: null,
+        motion: rail[index]?.motion ?? null,
+        proposals: [],
+      })
+      const spoken = here?.map((finding) => describeFinding(finding).spoken) ?? []
+      return { bar, sentence: [told, ...spoken].join('; ') }
+    }
     return {
       bar,
       sentence: speakSounding(
