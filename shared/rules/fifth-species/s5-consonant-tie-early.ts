@@ -2,14 +2,8 @@ import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { FIFTH_SPECIES } from '@/shared/rules/fifth-species/folds'
-import { breachAt } from '@/shared/rules/first-species/sonority'
-import {
-  afterSome,
-  HALF_TICKS,
-  isDissonant,
-  isTiedOver,
-  type AfterState,
-} from '@/shared/rules/fourth-species/folds'
+import { breachAt, isDissonance } from '@/shared/rules/first-species/sonority'
+import { afterSome, HALF_TICKS, isTiedOver, type AfterState } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
 import { QUARTER_TICKS } from '@/shared/theory/duration'
 
@@ -30,7 +24,7 @@ export const s5ConsonantTieEarly: Rule<AfterState, Params> = {
   species: FIFTH_SPECIES,
   params: PARAMS,
   ...afterSome<Params>(
-    (now) => isTiedOver(now) && !isDissonant(now),
+    (now) => isTiedOver(now) && !isDissonance(now),
     (before, now, { params }) => {
       const earliest = params.earliest === 'second-quarter' ? QUARTER_TICKS : HALF_TICKS
       return now.isStruck && now.place > 0 && now.place < earliest

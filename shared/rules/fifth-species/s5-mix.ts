@@ -8,11 +8,16 @@ import {
   isEighth,
   packOnset,
 } from '@/shared/rules/fifth-species/folds'
-import { breachAt, nameOf, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
+import {
+  breachAt,
+  isDissonance,
+  nameOf,
+  type Sonority,
+  sonorityOf,
+} from '@/shared/rules/first-species/sonority'
 import { breachAt as breachOfLine, goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
 import {
   HALF_TICKS,
-  isDissonant,
   isStepDown,
   isSuspension,
   isUpbeat,
@@ -129,7 +134,7 @@ function follow(state: State, now: Sonority, params: Params): Step<State> {
   const { before } = state
   const going: State = {
     first: before && before.note,
-    wasFirstConsonant: before === null || !isDissonant(before),
+    wasFirstConsonant: before === null || !isDissonance(before),
     before: now,
     suspended: null,
     mustRise: false,
@@ -141,7 +146,7 @@ function follow(state: State, now: Sonority, params: Params): Step<State> {
   if (before !== null && isSuspension(before)) return decorate(before, going, now, params)
   const breach = judge(state, before, now, params)
   if (breach !== null) return { state: { ...going, wasFirstConsonant: true }, breach }
-  if (now.place === 0 && now.isStruck && isDissonant(now)) {
+  if (now.place === 0 && now.isStruck && isDissonance(now)) {
     return { state: NONE, breach: breachAt('struck-downbeat', [now], { interval: nameOf(now) }) }
   }
   const hasFallenThird = before !== null && isPassingKind(before) && stepsFrom(before.note, now.note) === -2
@@ -149,7 +154,7 @@ function follow(state: State, now: Sonority, params: Params): Step<State> {
 }
 
 /** A dissonance that was struck after the downbeat: what enters and leaves by step, if it is right. */
-const isPassingKind = (now: Sonority): boolean => isDissonant(now) && now.place > 0
+const isPassingKind = (now: Sonority): boolean => isDissonance(now) && now.place > 0
 
 function judge(state: State, before: Sonority | null, now: Sonority, params: Params): Breach | null {
   if (before === null) return null
@@ -166,7 +171,7 @@ function judge(state: State, before: Sonority | null, now: Sonority, params: Par
     entry === -1 &&
     params.cambiata &&
     ticksInBar(before) <= QUARTER_TICKS &&
-    !isDissonant(now)
+    !isDissonance(now)
   ) {
     return null
   }
@@ -186,7 +191,7 @@ function mayTurn(before: Sonority, entry: number, { neighbour }: Params): boolea
 function passesOnThird(state: State, entry: number, now: Sonority, { thirdQuarter }: Params): boolean {
   if (thirdQuarter === 'by-step') return true
   if (thirdQuarter === 'falling') return entry === -1
-  return state.wasFirstConsonant && !isDissonant(now)
+  return state.wasFirstConsonant && !isDissonance(now)
 }
 
 /** Follows a suspension through its decoration until the note a step below it arrives. */
@@ -194,7 +199,7 @@ function decorate(suspended: Sonority, going: State, now: Sonority, { resolution
   const args = { interval: nameOf(suspended) }
   const clean = { ...going, wasFirstConsonant: true }
   if (isStepDown(suspended, now)) {
-    const isGood = !isDissonant(now) && now.bar === suspended.bar
+    const isGood = !isDissonance(now) && now.bar === suspended.bar
     if (isGood) return goOn(clean)
     const code = now.bar === suspended.bar ? 'to-dissonance' : 'unresolved'
     const toArgs = code === 'to-dissonance' ? { interval: nameOf(now) } : args

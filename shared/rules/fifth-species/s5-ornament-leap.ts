@@ -2,8 +2,8 @@ import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { FIFTH_SPECIES } from '@/shared/rules/fifth-species/folds'
 import { NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
-import { breachAt, lineSpan, nameOf } from '@/shared/rules/first-species/sonority'
-import { afterSome, isDissonant, isSuspension, type AfterState } from '@/shared/rules/fourth-species/folds'
+import { breachAt, isDissonance, lineSpan, nameOf } from '@/shared/rules/first-species/sonority'
+import { afterSome, isSuspension, type AfterState } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
 
 const example = exampleIn(5, 'D4 F4 E4 D4')
@@ -15,7 +15,7 @@ export const s5OrnamentLeap: Rule<AfterState, NoParams> = {
   species: FIFTH_SPECIES,
   params: NO_PARAMS,
   ...afterSome<NoParams>(isSuspension, (before, now) =>
-    now.isStruck && lineSpan(before, now) > 1 && isDissonant(now)
+    now.isStruck && lineSpan(before, now) > 1 && isDissonance(now)
       ? breachAt('dissonant', [before, now], { interval: nameOf(now) })
       : null,
   ),

@@ -1,9 +1,9 @@
-import { sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
+import { isDissonance, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
 import type { Given } from '@/shared/rules/first-species/folds'
 import { packPitch } from '@/shared/rules/fold'
 import type { Breach, Exercise, Moment, Rule, Species } from '@/shared/rules/rule'
 import { QUARTER_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
-import { isConsonant, stepsFrom } from '@/shared/theory/interval'
+import { stepsFrom } from '@/shared/theory/interval'
 import { comparePitches } from '@/shared/theory/pitch'
 
 export const FOURTH_SPECIES: ReadonlySet<Species> = new Set([4])
@@ -16,14 +16,11 @@ export const HALF_TICKS = 2 * QUARTER_TICKS
 /** What a moment sounds of its own bar. Ties onward do not count: they are not known until the next bar is. */
 export const ticksInBar = ({ place, ticks }: Moment): number => Math.min(ticks, WHOLE_TICKS - place)
 
-export const isDissonant = ({ simpleSteps, simpleSemitones }: Sonority): boolean =>
-  !isConsonant({ steps: simpleSteps, semitones: simpleSemitones })
-
 /** A note held over the bar line, whatever it has become there. */
 export const isTiedOver = ({ place, isStruck }: Sonority): boolean => place === 0 && !isStruck
 
 /** A note held over the bar line that has become a dissonance there. */
-export const isSuspension = (now: Sonority): boolean => isTiedOver(now) && isDissonant(now)
+export const isSuspension = (now: Sonority): boolean => isTiedOver(now) && isDissonance(now)
 
 /** The second half of a bar, where the note that is to be tied begins. */
 export const isUpbeat = ({ place }: Moment): boolean => place === HALF_TICKS

@@ -1,14 +1,8 @@
 import { z } from 'zod'
 import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
-import { breachAt, lineSpan } from '@/shared/rules/first-species/sonority'
-import {
-  afterSome,
-  FOURTH_SPECIES,
-  isDissonant,
-  isTiedOver,
-  type AfterState,
-} from '@/shared/rules/fourth-species/folds'
+import { breachAt, isDissonance, lineSpan } from '@/shared/rules/first-species/sonority'
+import { afterSome, FOURTH_SPECIES, isTiedOver, type AfterState } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
 import { formatPitch } from '@/shared/theory/pitch'
 
@@ -30,7 +24,7 @@ export const s4ConsonantTie: Rule<AfterState, Params> = {
   species: FOURTH_SPECIES,
   params: PARAMS,
   ...afterSome<Params>(
-    (now) => isTiedOver(now) && !isDissonant(now),
+    (now) => isTiedOver(now) && !isDissonance(now),
     (before, now, { params }) => {
       const span = lineSpan(before, now)
       const args = { note: formatPitch(before.note) }

@@ -1,14 +1,8 @@
 import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
-import { breachAt, nameOf, sonorityOf } from '@/shared/rules/first-species/sonority'
-import {
-  afterSome,
-  FOURTH_SPECIES,
-  isDissonant,
-  isStepDown,
-  isStepUp,
-} from '@/shared/rules/fourth-species/folds'
+import { breachAt, isDissonance, nameOf, sonorityOf } from '@/shared/rules/first-species/sonority'
+import { afterSome, FOURTH_SPECIES, isStepDown, isStepUp } from '@/shared/rules/fourth-species/folds'
 import type { AfterState } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
 import { isSamePitch } from '@/shared/theory/pitch'
@@ -20,7 +14,7 @@ const example = exampleIn(4, 'D4 F4 E4 D4')
  * consonant is the matter of `s4-upbeat-consonant`; that it does not rise by step, that of `s4-retardation`.
  */
 const resolution = afterSome<NoParams>(
-  (now) => now.place === 0 && isDissonant(now),
+  (now) => now.place === 0 && isDissonance(now),
   (before, now) => {
     if (isStepDown(before, now) || isStepUp(before, now)) return null
     const code = isSamePitch(before.note, now.note) ? 'stays' : 'leaps'
@@ -38,7 +32,7 @@ export const s4Resolve: Rule<AfterState, NoParams> = {
   step: (state, moment, params) => {
     const next = resolution.step(state, moment, params)
     const now = sonorityOf(moment)
-    if (next.breach || now === null || now.place !== 0 || !isDissonant(now)) return next
+    if (next.breach || now === null || now.place !== 0 || !isDissonance(now)) return next
     const args = { interval: nameOf(now) }
     // A dissonance that was never prepared has nothing to resolve: it is told once.
     if (now.isStruck) {

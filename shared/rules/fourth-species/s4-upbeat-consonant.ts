@@ -1,8 +1,8 @@
 import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { eachSonority, NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
-import { breachAt, nameOf } from '@/shared/rules/first-species/sonority'
-import { FOURTH_SPECIES, isDissonant } from '@/shared/rules/fourth-species/folds'
+import { breachAt, isDissonance, nameOf } from '@/shared/rules/first-species/sonority'
+import { FOURTH_SPECIES } from '@/shared/rules/fourth-species/folds'
 import type { Exercise, Rule } from '@/shared/rules/rule'
 
 const example = exampleIn(4, 'D4 F4 E4 D4')
@@ -14,7 +14,7 @@ export const s4UpbeatConsonant: Rule<Exercise, NoParams> = {
   species: FOURTH_SPECIES,
   params: NO_PARAMS,
   ...eachSonority((now) =>
-    now.place > 0 && isDissonant(now) ? breachAt('dissonant', [now], { interval: nameOf(now) }) : null,
+    now.place > 0 && isDissonance(now) ? breachAt('dissonant', [now], { interval: nameOf(now) }) : null,
   ),
   explain: {
     title: 'The second half of the bar is consonant',
