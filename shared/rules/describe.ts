@@ -50,6 +50,9 @@ export function describeFinding(finding: Finding): Description {
   }
 }
 
+/** Stands behind the name of a note while a sentence is put together, so that the note A is not taken for an article. */
+const NAME_END = '\u2060'
+
 /** Fills a sentence's placeholders, numbers as words, and sets its articles and its first letter right. */
 function fillIn(
   sentence: string,
@@ -65,7 +68,8 @@ function fillIn(
   const withArticles = filled.replace(/\b([Aa])n? (?=([a-z]+))/g, (_, article: string, word: string) =>
     /^[aeiou]/.test(word) && !word.startsWith('uni') ? `${article}n ` : `${article} `,
   )
-  return withArticles.charAt(0).toUpperCase() + withArticles.slice(1)
+  const printed = withArticles.replaceAll(NAME_END, '')
+  return printed.charAt(0).toUpperCase() + printed.slice(1)
 }
 
 /** Prints `C#5` as C♯, or in words; leaves every other text as it is. */
@@ -75,7 +79,7 @@ function spellPitch(text: string, signs: Readonly<Record<Alteration, string>>, k
   if (!parsed.ok) return text
   const { letter, alteration }: PitchClass = parsed.value
   const octave = keepsOctave && withOctave.ok ? String(withOctave.value.octave) : ''
-  return letter + signs[alteration] + octave
+  return letter + signs[alteration] + octave + NAME_END
 }
 
 /** `Bar 6`, `Bars 6–7`, `Bars 2–4, 7 and 9`. */

@@ -94,3 +94,8 @@ describe('describeFinding', () => {
     },
   )
 })
+
+test('the note A before a word is not taken for an article', () => {
+  const repeated = finding({ ruleId: 's2-repeat', code: 'over-barline', bars: [1, 2], args: { note: 'A4' } })
+  expect(describeFinding(repeated).sentence).toBe('The line repeats its A over the bar line.')
+})
