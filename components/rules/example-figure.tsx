@@ -34,7 +34,9 @@ export function ExampleFigure({
   }, [page, written, words])
   return (
     <View role="figure" aria-label={say.exampleSpoken(say[which], page.title)} style={{ gap: space.small }}>
-      <Heading level={3}>{say[which]}</Heading>
+      <Heading level={2} kind="text">
+        {say[which]}
+      </Heading>
       {pairs.map(({ example, input, playback }, index) => {
         const name = pairs.length > 1 ? `${say[which]}: ${say.againstCantus[index] ?? ''}` : say[which]
         return (
