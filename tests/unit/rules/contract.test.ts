@@ -8,6 +8,7 @@ import { MELODY_RULES } from '@/shared/rules/melody'
 import { RULES } from '@/shared/rules/registry'
 import type { AnyRule } from '@/shared/rules/rule'
 import { SECOND_SPECIES_RULES } from '@/shared/rules/second-species'
+import { THIRD_SPECIES_RULES } from '@/shared/rules/third-species'
 import { ruleSetProblems } from '@/shared/rules/rule-set'
 import { findSource } from '@/shared/rules/sources'
 import { THREE_VOICE_RULES } from '@/shared/rules/three-voices'
@@ -18,6 +19,7 @@ const FOLDERS: readonly (readonly [folder: string, rules: readonly AnyRule[], sp
   ['melody', MELODY_RULES, 0],
   ['first-species', FIRST_SPECIES_RULES, 1],
   ['second-species', SECOND_SPECIES_RULES, 2],
+  ['third-species', THIRD_SPECIES_RULES, 3],
   ['fourth-species', FOURTH_SPECIES_RULES, 4],
   ['fifth-species', FIFTH_SPECIES_RULES, 5],
   ['three-voices', THREE_VOICE_RULES, 6],
