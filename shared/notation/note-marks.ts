@@ -142,9 +142,9 @@ export function restMarks(written: WrittenValue, spacePx: number, look: Look): r
 }
 
 const UNCOUNTED_RADIUS = 0.74
-const LEAST_RADIUS = 0.48
+const LEAST_RADIUS = 0.42
 const MOST_RADIUS = 1.1
-const RADIUS_BY_DOUBLING = 0.115
+const RADIUS_BY_DOUBLING = 0.105
 
 /**
  * Half the height of a proposal's lozenge in staff spaces. Each doubling of the number adds the same, so that a crowd
