@@ -19,7 +19,8 @@ export function useRungWays(
   pitches: readonly Pitch[],
 ): readonly (string | null)[] {
   const words = useWords().ways
-  const isTold = view.stage.showsWays === 'everyone'
+  // A rung is a whole bar in first species only; in the others it is one of several notes to come.
+  const isTold = view.stage.showsWays === 'everyone' && view.exercise.species === 1
   const questions = useMemo<readonly WaysQuestion[] | null>(
     () =>
       isTold ? [{ key: '', line: lineWithout(lineWith(view.line, own), [bar]), aliveInBar: bar }] : null,

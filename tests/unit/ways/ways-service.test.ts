@@ -88,6 +88,7 @@ describe('a count for reading', () => {
     ['1284', '1,284'],
     ['123456789', '123,456,789'],
     ['3170000000000', '3.17T'],
+    ['7534000000000000000', '7.53 × 10¹⁸'],
   ])('%s is written %s', (count, written) => {
     expect(formatCount(count)).toBe(written)
   })
