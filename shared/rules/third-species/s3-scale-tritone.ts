@@ -7,21 +7,46 @@ import { exampleIn } from '@/shared/rules/example-in'
 import { shortExample, SHORT_LINE } from '@/shared/rules/third-species/examples'
 import { THIRD_SPECIES } from '@/shared/rules/third-species/folds'
 import { semitonesFrom, stepsFrom } from '@/shared/theory/interval'
+import { isSamePitch } from '@/shared/theory/pitch'
+
+const outline = foldTurningPoints<NoParams>((from, to, _params, voice) => {
+  const isTritone =
+    Math.abs(stepsFrom(from.note, to.note)) === 3 && Math.abs(semitonesFrom(from.note, to.note)) === 6
+  return isTritone ? breachAt(voice, 'scale', [from, to], spanArgs(from, to)) : null
+})
+
+/** Three moves over four letters: every one of them is a step. */
+const MOVES_OF_SCALE = 3
+
+/** Beside the run under way, how many moves it has made, counted no further than one more than a scale of four has. */
+type State = Readonly<{ run: Outline; moves: number }>
+
+const isMove = (before: Outline, after: Outline): boolean =>
+  before.last !== null && after.last !== null && !isSamePitch(before.last.note, after.last.note)
+
+function movesAfter({ run, moves }: State, after: Outline): number {
+  if (!isMove(run, after)) return after.last === null ? 0 : moves
+  const goesOn = run.direction === 0 || run.direction === after.direction
+  return goesOn ? Math.min(moves + 1, MOVES_OF_SCALE + 1) : 1
+}
 
 /** Takes the place of `mel-tritone-outline`: among quick notes only the scale that fills the fourth is minded. */
-export const s3ScaleTritone: Rule<Outline, NoParams> = {
+export const s3ScaleTritone: Rule<State, NoParams> = {
   id: 's3-scale-tritone',
   level: 'law',
   scope: 'line',
   species: THIRD_SPECIES,
   params: NO_PARAMS,
   suspends: new Set(['mel-tritone-outline']),
-  ...foldTurningPoints<NoParams>((from, to, _params, voice) => {
-    if (Math.abs(stepsFrom(from.note, to.note)) !== 3) return null
-    if (Math.abs(semitonesFrom(from.note, to.note)) !== 6) return null
-    // Three moves over four letters: every one of them is a step.
-    return to.index - from.index === 3 ? breachAt(voice, 'scale', [from, to], spanArgs(from, to)) : null
-  }),
+  start: (exercise, params, voice) => ({ run: outline.start(exercise, params, voice), moves: 0 }),
+  step: (state, moment, params) => {
+    const { state: run, breach } = outline.step(state.run, moment, params)
+    const isScale = state.moves === MOVES_OF_SCALE
+    return { state: { run, moves: movesAfter(state, run) }, breach: isScale ? breach : null }
+  },
+  finish: ({ run, moves }, params, isComplete) =>
+    moves === MOVES_OF_SCALE ? outline.finish(run, params, isComplete) : null,
+  key: ({ run, moves }) => (MOVES_OF_SCALE + 2) * outline.key(run) + moves,
   explain: {
     title: 'No scale that turns on a tritone',
     statement: 'A scale does not turn round at both ends of an augmented fourth.',
