@@ -37,7 +37,7 @@ export async function setUp({ needsBrowser }) {
   const letGo = stopOnSignals()
   const isCurrent = arePackagesCurrent()
   checkRoom(isCurrent ? RUN_MEGABYTES : INSTALL_MEGABYTES)
-  const missing = missingPackages({ needsBrowser })
+  const missing = await missingPackages({ needsBrowser })
   if (missing.length > 0) await step('System packages', (say) => installPackages(missing, say))
   if (!isCurrent) await step('Node packages', installNodePackages)
   if (!isWebCurrent()) await step('Web client (built once, about a minute)', buildWeb)

@@ -15,10 +15,15 @@ const hasPostgres = () =>
 const hasChromium = () => ['chromium', 'chromium-browser', 'google-chrome'].some(isOnPath)
 
 /** The packages of the system that are missing, by their Debian names. */
-export const missingPackages = ({ needsBrowser }) => [
+export const missingPackages = async ({ needsBrowser }) => [
   ...(process.env.DATABASE_URL || hasPostgres() ? [] : ['postgresql']),
   ...(!needsBrowser || hasChromium() ? [] : ['chromium']),
+  ...(await missingForTests({ needsBrowser })),
 ]
+
+/** What tests can do without, and compare more with: the answer-set solver. Not asked for where we may not install it. */
+const missingForTests = async ({ needsBrowser }) =>
+  needsBrowser && !isOnPath('clingo') && (await installerPrefix()) !== null ? ['gringo'] : []
 
 /** How to install: as root, by sudo that asks for no password, or not at all. */
 async function installerPrefix() {
