@@ -34,6 +34,8 @@ const withDatabase = {
 }
 
 module.exports = {
+  // Browser tests mostly wait: a worker for every core keeps the machine busy.
+  maxWorkers: '100%',
   projects: [
     project('unit'),
     project('api', withDatabase),
