@@ -4,13 +4,25 @@ import { checkNode } from './check-node.mjs'
 
 checkNode()
 
+const STOP_SIGNALS = ['SIGINT', 'SIGTERM', 'SIGHUP']
+
 /** Runs a program with its output shown, to its end. */
 async function show(command, args, env = {}) {
   const { spawn } = await import('node:child_process')
   return new Promise((resolve) => {
     const child = spawn(command, args, { stdio: 'inherit', env: { ...process.env, ...env } })
-    child.on('error', () => resolve(1))
-    child.on('close', (exitCode) => resolve(exitCode ?? 1))
+    // A terminal tells both of us to stop; whoever tells only us means the program as well.
+    const stop = () => {
+      child.kill('SIGINT')
+      process.exitCode = 130
+    }
+    for (const signal of STOP_SIGNALS) process.once(signal, stop)
+    const end = (exitCode) => {
+      for (const signal of STOP_SIGNALS) process.off(signal, stop)
+      resolve(exitCode)
+    }
+    child.on('error', () => end(1))
+    child.on('close', (exitCode) => end(exitCode ?? 1))
   })
 }
 
