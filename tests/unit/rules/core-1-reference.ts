@@ -56,30 +56,30 @@ export function ref(name: string): RefPitch {
   return pitch
 }
 
-function less(p: RefPitch, q: RefPitch): boolean {
+export function less(p: RefPitch, q: RefPitch): boolean {
   return p.d < q.d || (p.d === q.d && p.c < q.c)
 }
-function same(p: RefPitch, q: RefPitch): boolean {
+export function same(p: RefPitch, q: RefPitch): boolean {
   return p.d === q.d && p.c === q.c
 }
-function dir(p: RefPitch, q: RefPitch): number {
+export function dir(p: RefPitch, q: RefPitch): number {
   if (less(p, q)) return 1
   if (less(q, p)) return -1
   return 0
 }
-function g(p: RefPitch, q: RefPitch): number {
+export function g(p: RefPitch, q: RefPitch): number {
   return less(p, q) ? q.d - p.d : p.d - q.d
 }
-function s(p: RefPitch, q: RefPitch): number {
+export function s(p: RefPitch, q: RefPitch): number {
   return less(p, q) ? q.c - p.c : p.c - q.c
 }
-function red(p: RefPitch, q: RefPitch): string {
+export function red(p: RefPitch, q: RefPitch): string {
   const octaves = Math.floor(g(p, q) / 7)
   return `${g(p, q) % 7},${s(p, q) - 12 * octaves}`
 }
-const CONS = ['0,0', '2,3', '2,4', '4,7', '5,8', '5,9']
-const PERF = ['0,0', '4,7']
-const MELODIC = ['1,1', '1,2', '2,3', '2,4', '3,5', '4,7', '7,12']
+export const CONS = ['0,0', '2,3', '2,4', '4,7', '5,8', '5,9']
+export const PERF = ['0,0', '4,7']
+export const MELODIC = ['1,1', '1,2', '2,3', '2,4', '3,5', '4,7', '7,12']
 
 function mod(a: number, b: number): number {
   return ((a % b) + b) % b
@@ -92,11 +92,11 @@ export function diatonic(k: Case, p: RefPitch): boolean {
   const semitones = SCALES[k.mode][deg(k, p) - 1] as number
   return mod(p.c - ref(`${k.final}4`).c, 12) === semitones
 }
-function raised7(k: Case, p: RefPitch): boolean {
+export function raised7(k: Case, p: RefPitch): boolean {
   if (!['dorian', 'mixolydian', 'aeolian'].includes(k.mode) || deg(k, p) !== 7) return false
   return diatonic(k, { name: '', d: p.d, c: p.c - 1 })
 }
-function ltone(k: Case, p: RefPitch): boolean {
+export function ltone(k: Case, p: RefPitch): boolean {
   if (['dorian', 'mixolydian', 'aeolian'].includes(k.mode)) return raised7(k, p)
   return deg(k, p) === 7 && diatonic(k, p)
 }
@@ -110,7 +110,7 @@ function everyPitch(): RefPitch[] {
 }
 const EVERY = everyPitch()
 
-function inRange(k: Case, p: RefPitch): boolean {
+export function inRange(k: Case, p: RefPitch): boolean {
   return !less(p, ref(k.lo)) && !less(ref(k.hi), p)
 }
 export function pool(k: Case): RefPitch[] {
