@@ -2,7 +2,6 @@ import { z } from 'zod'
 import {
   ALL_SPECIES,
   breachAt,
-  goOn,
   isNoted,
   pack,
   packPitch,
@@ -25,7 +24,11 @@ const params = z.strictObject({
 })
 type Params = z.infer<typeof params>
 
-type State = Readonly<{ frame: Frame; before: Noted | null }>
+/**
+ * `early` is a raised seventh of the bar under way that was not the last note but one. Where a bar holds many notes it
+ * is still in its place if that bar is the last but one, which the next bar tells.
+ */
+type State = Readonly<{ frame: Frame; before: Noted | null; early: Noted | null }>
 
 const isRaisedSixth = ({ note }: Noted, { exercise: { mode, final } }: Frame): boolean =>
   mode === 'aeolian' && degreeOf(note, final) === 6 && alterationInMode(note, mode, final) === 1
@@ -39,6 +42,8 @@ const risesByStep = (before: Noted, now: Noted): boolean =>
 const say = (frame: Frame, code: string, moments: readonly Noted[]): Breach =>
   breachAt(frame.voice, code, moments, { note: formatPitch((moments[0] as Noted).note) })
 
+const isEarly = (now: Noted, frame: Frame): boolean => isSeventh(now, frame) && !now.isPenultimate
+
 function judge(before: Noted | null, now: Noted, { where }: Params, frame: Frame): Breach | null {
   if (where === 'rising') {
     if (before === null || risesByStep(before, now)) return null
@@ -49,7 +54,7 @@ function judge(before: Noted | null, now: Noted, { where }: Params, frame: Frame
   if (before !== null && isRaisedSixth(before, frame) && !isSeventh(now, frame)) {
     return say(frame, 'sixth', [before, now])
   }
-  if (isSeventh(now, frame) && !now.isPenultimate) return say(frame, 'seventh', [now])
+  if (isEarly(now, frame) && frame.exercise.species === 1) return say(frame, 'seventh', [now])
   return isRaisedSixth(now, frame) && now.isLast ? say(frame, 'sixth', [now]) : null
 }
 
@@ -59,15 +64,24 @@ export const melMinorDegrees: Rule<State, Params> = {
   scope: 'melody',
   species: ALL_SPECIES,
   params,
-  start: (exercise, _params, voice) => ({ frame: { exercise, voice }, before: null }),
+  start: (exercise, _params, voice) => ({ frame: { exercise, voice }, before: null, early: null }),
   step: (state, moment, given) => {
-    const { frame, before } = state
-    if (!isNoted(moment)) return goOn(moment.note === null ? { frame, before: null } : state)
-    return { state: { frame, before: moment }, breach: judge(before, moment, given, frame) }
+    const { frame, before, early } = state
+    const isOver = early !== null && moment.bar !== early.bar
+    const late = isOver && !moment.isLast ? say(frame, 'seventh', [early]) : null
+    const kept = isOver ? null : early
+    if (!isNoted(moment)) {
+      const known = moment.note === null ? null : before
+      return { state: { frame, before: known, early: kept }, breach: late }
+    }
+    const breach = late ?? judge(before, moment, given, frame)
+    const isWaiting = given.where === 'penultimate' && frame.exercise.species !== 1 && isEarly(moment, frame)
+    return { state: { frame, before: moment, early: isWaiting ? (kept ?? moment) : kept }, breach }
   },
-  finish: () => null,
-  key: ({ before }) => pack([packPitch(before && before.note), PITCH_ROOM]),
-  reach: 1,
+  finish: ({ frame, early }, _params, isComplete) =>
+    early === null || !isComplete ? null : say(frame, 'seventh', [early]),
+  key: ({ before, early }) =>
+    pack([packPitch(before && before.note), PITCH_ROOM], [early === null ? 0 : 1, 2]),
   explain: {
     title: 'Raised degrees belong to the close',
     statement: 'The raised seventh appears only at the close, the raised sixth only on the way to it.',
