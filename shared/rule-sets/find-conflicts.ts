@@ -1,4 +1,12 @@
-import { findRule, readExercise, type Position, type RuleId, type RuleSet } from '@/shared/rules'
+import {
+  findRule,
+  readExercise,
+  type AnyRule,
+  type Position,
+  type RuleId,
+  type RuleSet,
+  type Species,
+} from '@/shared/rules'
 import { createSearch } from '@/shared/search'
 import { comparePitches, parsePitch } from '@/shared/theory/pitch'
 import { standingOf } from './compare-rule-sets'
@@ -43,7 +51,6 @@ const PLAIN_CANTUS = {
   cantus: ['D4', 'F4', 'E4', 'D4', 'G4', 'F4', 'A4', 'G4', 'F4', 'E4', 'D4'],
   mode: 'dorian',
   final: 'D',
-  species: 1,
 } as const
 
 /** More than the presets need by far; past it nothing is claimed. */
@@ -70,6 +77,19 @@ function allowsNothing(params: Readonly<Record<string, unknown>>, defaults: unkn
   )
 }
 
+/**
+ * True where a law by itself leaves no line over or under the plainest cantus, in the first of its species. An empty list
+ * may also mean that nothing is asked for, as where a close has no formula of its own.
+ */
+function leavesNothing({ id, species }: AnyRule, params: Readonly<Record<string, unknown>>): boolean {
+  const alone: RuleSet = { id, name: id, rules: { [id]: { level: 'law', params } } }
+  const first = [...species].sort()[0]
+  return (
+    first !== undefined &&
+    (['above', 'below'] as const).some((position) => noLine(alone, position, first) !== null)
+  )
+}
+
 /** Contradictions within single rules. Rules that are off contradict nothing. */
 function conflictsInRules(ruleSet: RuleSet): readonly Conflict[] {
   return Object.keys(ruleSet.rules).flatMap((ruleId): readonly Conflict[] => {
@@ -80,14 +100,15 @@ function conflictsInRules(ruleSet: RuleSet): readonly Conflict[] {
     const crossed = BOUNDS.filter(([low, high]) => isCrossed(params[low], params[high])).map(
       ([low, high]): Conflict => ({ kind: 'crossed-bounds', ruleId, low, high }),
     )
-    const isEmpty = level === 'law' && allowsNothing(params, rule.params.parse({}))
+    const isEmpty =
+      level === 'law' && allowsNothing(params, rule.params.parse({})) && leavesNothing(rule, params)
     return isEmpty ? [...crossed, { kind: 'nothing-allowed', ruleId }] : crossed
   })
 }
 
-/** What the laws leave of the plainest exercise in first species; null where a line can be written, or it is not known. */
-function noLine(ruleSet: RuleSet, position: Position): Conflict | null {
-  const exercise = readExercise({ ...PLAIN_CANTUS, position })
+/** What the laws leave of the plainest exercise; null where a line can be written, or it is not known. */
+function noLine(ruleSet: RuleSet, position: Position, species: Species): Conflict | null {
+  const exercise = readExercise({ ...PLAIN_CANTUS, position, species })
   const { deadEnd } = createSearch(exercise, ruleSet, { limits: { nodes: MOST_NODES } }).find()
   return deadEnd && { kind: 'no-line', position, bar: deadEnd.bar, rules: deadEnd.rules }
 }
@@ -95,6 +116,6 @@ function noLine(ruleSet: RuleSet, position: Position): Conflict | null {
 /** Everything about a rule set that contradicts itself, as far as it can be told without a score. */
 export function findConflicts(ruleSet: RuleSet): readonly Conflict[] {
   const inRules = conflictsInRules(ruleSet)
-  const together = (['above', 'below'] as const).flatMap((position) => noLine(ruleSet, position) ?? [])
+  const together = (['above', 'below'] as const).flatMap((position) => noLine(ruleSet, position, 1) ?? [])
   return [...inRules, ...together]
 }
