@@ -168,7 +168,8 @@ describe.each(RULES.map((rule) => [rule.id, rule] as const))('the keys of %s', (
           const firstWithKey = new Map<number, unknown>()
           for (const state of states) {
             const key = rule.key(state)
-            expect(Number.isSafeInteger(key)).toBe(true)
+            // Asked of jest only where it fails: many thousands of futures are compared.
+            if (!Number.isSafeInteger(key)) expect(key).toBe('a whole number')
             const twin = firstWithKey.get(key)
             if (twin === undefined) {
               firstWithKey.set(key, state)
@@ -177,7 +178,8 @@ describe.each(RULES.map((rule) => [rule.id, rule] as const))('the keys of %s', (
             met += 1
             for (const reading of readings.slice(0, 8)) {
               const rest = reading.slice(index)
-              expect(futureOf(rule, state, rest)).toEqual(futureOf(rule, twin, rest))
+              const [one, other] = [futureOf(rule, state, rest), futureOf(rule, twin, rest)]
+              if (JSON.stringify(one) !== JSON.stringify(other)) expect(one).toEqual(other)
             }
           }
         },
