@@ -1,4 +1,4 @@
-import type { RuleId, RuleSet } from '@/shared/rules'
+import type { RuleSet } from '@/shared/rules'
 import type { WrittenExercise } from '@/shared/rules/exercise'
 import type { DeadEnd } from '@/shared/search'
 import type { Line } from '@/shared/theory/note'
@@ -32,5 +32,3 @@ export type WaysAnswer = Readonly<{
 }>
 
 export type WaysReply = Readonly<{ number: number; key: string; answer: WaysAnswer }>
-
-export type { RuleId }

@@ -8,7 +8,6 @@ export const ways = {
   /** In a line of words. */
   ofLine: (figure: string, isOne: boolean) => `${figure} ${isOne ? 'way' : 'ways'} to finish`,
   onRung: (figure: string, isOne: boolean) => `${figure} ${isOne ? 'way' : 'ways'}`,
-  none: 'none left',
   stuckAt: (bar: number) => `stuck at ${lesson.barsInSentence([bar])}`,
   counting: 'counting',
   /** Why a line cannot be finished: the bar, and the titles of the rules that leave nothing there. */

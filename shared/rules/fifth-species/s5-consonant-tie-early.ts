@@ -3,9 +3,9 @@ import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { FIFTH_SPECIES } from '@/shared/rules/fifth-species/folds'
 import { breachAt, isDissonance } from '@/shared/rules/first-species/sonority'
-import { afterSome, HALF_TICKS, isTiedOver, type AfterState } from '@/shared/rules/fourth-species/folds'
+import { afterSome, isTiedOver, type AfterState } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
-import { QUARTER_TICKS } from '@/shared/theory/duration'
+import { HALF_TICKS, QUARTER_TICKS } from '@/shared/theory/duration'
 
 const PARAMS = z.strictObject({
   earliest: z

@@ -3,8 +3,9 @@ import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { DOTTED_HALF_TICKS, FIFTH_SPECIES } from '@/shared/rules/fifth-species/folds'
 import { breachAt, goOn, isNoted } from '@/shared/rules/fold'
-import { HALF_TICKS } from '@/shared/rules/fourth-species/folds'
+
 import type { Rule } from '@/shared/rules/rule'
+import { HALF_TICKS } from '@/shared/theory/duration'
 
 const PARAMS = z.strictObject({
   begins: z

@@ -4,8 +4,9 @@ import { exampleIn } from '@/shared/rules/example-in'
 import { FIFTH_SPECIES, isEighth, isOnQuarter } from '@/shared/rules/fifth-species/folds'
 import { breachAt, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
 import { goOn } from '@/shared/rules/fold'
-import { HALF_TICKS } from '@/shared/rules/fourth-species/folds'
+
 import type { Rule } from '@/shared/rules/rule'
+import { HALF_TICKS } from '@/shared/theory/duration'
 
 const PARAMS = z.strictObject({
   strong: z

@@ -16,15 +16,9 @@ import {
   sonorityOf,
 } from '@/shared/rules/first-species/sonority'
 import { breachAt as breachOfLine, goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
-import {
-  HALF_TICKS,
-  isStepDown,
-  isSuspension,
-  isUpbeat,
-  ticksInBar,
-} from '@/shared/rules/fourth-species/folds'
+import { isStepDown, isSuspension, isUpbeat, ticksInBar } from '@/shared/rules/fourth-species/folds'
 import type { Breach, Moment, Rule, Step } from '@/shared/rules/rule'
-import { QUARTER_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
+import { HALF_TICKS, QUARTER_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
 import { stepsFrom } from '@/shared/theory/interval'
 import type { Pitch } from '@/shared/theory/pitch'
 

@@ -4,9 +4,10 @@ import { exampleIn } from '@/shared/rules/example-in'
 import { FIFTH_SPECIES, isEighth } from '@/shared/rules/fifth-species/folds'
 import { breachAt, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
 import { goOn, pack, packPitch, PITCH_ROOM } from '@/shared/rules/fold'
-import { HALF_TICKS, isStepDown, isSuspension, isUpbeat } from '@/shared/rules/fourth-species/folds'
+import { isStepDown, isSuspension, isUpbeat } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
 import { stepsFrom } from '@/shared/theory/interval'
+import { HALF_TICKS } from '@/shared/theory/duration'
 
 const FORMS = ['eighths', 'leap-down', 'step-up', 'third-down'] as const
 type Form = (typeof FORMS)[number]

@@ -3,9 +3,9 @@ import { exampleIn } from '@/shared/rules/example-in'
 import { FIFTH_SPECIES } from '@/shared/rules/fifth-species/folds'
 import { eachSonority, NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt } from '@/shared/rules/first-species/sonority'
-import { HALF_TICKS, ticksInBar } from '@/shared/rules/fourth-species/folds'
+import { ticksInBar } from '@/shared/rules/fourth-species/folds'
 import type { Exercise, Rule } from '@/shared/rules/rule'
-import { QUARTER_TICKS } from '@/shared/theory/duration'
+import { HALF_TICKS, QUARTER_TICKS } from '@/shared/theory/duration'
 
 const example = exampleIn(5, 'D4 F4 E4 D4')
 

@@ -4,9 +4,9 @@ import { FIFTH_SPECIES } from '@/shared/rules/fifth-species/folds'
 import { NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, sonorityOf, type Sonority } from '@/shared/rules/first-species/sonority'
 import { goOn } from '@/shared/rules/fold'
-import { HALF_TICKS, isUpbeat, ticksInBar } from '@/shared/rules/fourth-species/folds'
+import { isUpbeat, ticksInBar } from '@/shared/rules/fourth-species/folds'
 import type { Rule } from '@/shared/rules/rule'
-import { QUARTER_TICKS } from '@/shared/theory/duration'
+import { HALF_TICKS, QUARTER_TICKS } from '@/shared/theory/duration'
 
 /** The notes of this bar as long as they keep to the rhythm; three of them wait for the next bar. */
 type State = Readonly<{ notes: readonly Sonority[] }>

@@ -2,7 +2,7 @@ import { isDissonance, sonorityOf, type Sonority } from '@/shared/rules/first-sp
 import type { Given } from '@/shared/rules/first-species/folds'
 import { packPitch } from '@/shared/rules/fold'
 import type { Breach, Exercise, Moment, Rule, Species } from '@/shared/rules/rule'
-import { QUARTER_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
+import { HALF_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
 import { stepsFrom } from '@/shared/theory/interval'
 import { comparePitches } from '@/shared/theory/pitch'
 
@@ -10,8 +10,6 @@ export const FOURTH_SPECIES: ReadonlySet<Species> = new Set([4])
 
 /** Species in which notes are tied over the bar line. */
 export const TIED_SPECIES: ReadonlySet<Species> = new Set([4, 5])
-
-export const HALF_TICKS = 2 * QUARTER_TICKS
 
 /** What a moment sounds of its own bar. Ties onward do not count: they are not known until the next bar is. */
 export const ticksInBar = ({ place, ticks }: Moment): number => Math.min(ticks, WHOLE_TICKS - place)

@@ -4,9 +4,10 @@ import { exampleIn } from '@/shared/rules/example-in'
 import { judgeOpening, openingList } from '@/shared/rules/first-species/opening'
 import { sonorityOf } from '@/shared/rules/first-species/sonority'
 import { breachAt, goOn } from '@/shared/rules/fold'
-import { FOURTH_SPECIES, HALF_TICKS } from '@/shared/rules/fourth-species/folds'
+import { FOURTH_SPECIES } from '@/shared/rules/fourth-species/folds'
 import type { Exercise, Rule } from '@/shared/rules/rule'
 import { isImperfectConsonance } from '@/shared/theory/interval'
+import { HALF_TICKS } from '@/shared/theory/duration'
 
 const PARAMS = z.strictObject({
   rest: z.enum(['required', 'optional']).default('required').describe('A half rest before the first note.'),

@@ -2,9 +2,9 @@ import { cite } from '@/shared/rules/cite'
 import { exampleIn } from '@/shared/rules/example-in'
 import { NO_PARAMS, type NoParams } from '@/shared/rules/first-species/folds'
 import { breachAt, goOn } from '@/shared/rules/fold'
-import { FOURTH_SPECIES, HALF_TICKS, ticksInBar } from '@/shared/rules/fourth-species/folds'
+import { FOURTH_SPECIES, ticksInBar } from '@/shared/rules/fourth-species/folds'
 import type { Moment, Rule } from '@/shared/rules/rule'
-import { WHOLE_TICKS } from '@/shared/theory/duration'
+import { HALF_TICKS, WHOLE_TICKS } from '@/shared/theory/duration'
 
 /** The last bar that was told, so that each is told once. */
 type State = Readonly<{ toldBar: number }>
